@@ -1,0 +1,197 @@
+using System.Runtime.CompilerServices;
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
+namespace FrameGen.Mechanics.Frames;
+
+/// <summary>
+/// The stiffness of one design in 6 × 6 blocks by columns: one a node and one a pair of joined nodes, in elimination order, held freedoms included.
+/// </summary>
+internal sealed class StiffnessBlocks
+{
+    private const int Six = SymbolicFactor.Six;
+    private const int BlockSize = Six * Six;
+
+    private readonly FrameLayout _layout;
+    private readonly double[] _own;
+    private readonly double[] _pairs;
+    private readonly double[] _rowSums;
+
+    /// <summary>Makes room for the values.</summary>
+    public StiffnessBlocks(FrameLayout layout)
+    {
+        _layout = layout;
+        _own = new double[BlockSize * layout.NodeAt.Length];
+        _pairs = new double[BlockSize * layout.PairRows.Length];
+        _rowSums = new double[Six * layout.NodeAt.Length];
+        Diagonal = new double[Six * layout.NodeAt.Length];
+        OfModes = new double[ElementModes.Modes * layout.Profiles.Length];
+    }
+
+    /// <summary>Six stiffnesses an element, in the order of its modes.</summary>
+    public double[] OfModes { get; }
+
+    /// <summary>The freedoms' own stiffnesses, N/mm and N·mm, in elimination order.</summary>
+    public double[] Diagonal { get; }
+
+    /// <summary>‖K‖∞ over the free freedoms.</summary>
+    public double Norm { get; private set; }
+
+    /// <summary>Assembles a design.</summary>
+    public void Assemble(IReadOnlyList<BeamProfile> profiles)
+    {
+        Array.Clear(_own);
+        Array.Clear(_pairs);
+        double[] lengths = _layout.Modes.Lengths;
+        double[] vectors = _layout.Modes.Vectors;
+        for (int e = 0; e < lengths.Length; e++)
+        {
+            Span<double> stiffness = OfModes.AsSpan(ElementModes.Modes * e, ElementModes.Modes);
+            ElementModes.Stiffness(profiles[_layout.Profiles[e]], lengths[e], stiffness);
+            ref double start = ref vectors[ElementModes.Stride * e];
+            ref double end = ref Unsafe.Add(ref start, Six);
+            (int i, int j) = (_layout.Starts[e], _layout.Ends[e]);
+            if (i >= 0)
+            {
+                AddBlock(ref start, ref start, stiffness, _own.AsSpan(BlockSize * i, BlockSize));
+            }
+
+            if (j >= 0)
+            {
+                AddBlock(ref end, ref end, stiffness, _own.AsSpan(BlockSize * j, BlockSize));
+            }
+
+            if (_layout.Pairs[e] >= 0)
+            {
+                Span<double> block = _pairs.AsSpan(BlockSize * _layout.Pairs[e], BlockSize);
+                if (i < j)
+                {
+                    AddBlock(ref end, ref start, stiffness, block);
+                }
+                else
+                {
+                    AddBlock(ref start, ref end, stiffness, block);
+                }
+            }
+        }
+
+        for (int k = 0; k < Diagonal.Length; k++)
+        {
+            Diagonal[k] = _own[(BlockSize * (k / Six)) + ((Six + 1) * (k % Six))];
+        }
+
+        Norm = LargestRowSum();
+    }
+
+    /// <summary>Adds a front's blocks to its panel; a held freedom's row is its own stiffness alone.</summary>
+    /// <param name="front">Index of the front.</param>
+    /// <param name="panel">Its panel.</param>
+    public void AddTo(int front, Span<double> panel)
+    {
+        int stride = _layout.Symbolic.Fronts[front].Stride;
+        foreach (FrameLayout.Placement placement in _layout.Placements[front])
+        {
+            bool diagonal = placement.Pair < 0;
+            ReadOnlySpan<double> block = diagonal
+                ? _own.AsSpan(BlockSize * placement.Column, BlockSize)
+                : _pairs.AsSpan(BlockSize * placement.Pair, BlockSize);
+            Span<double> target = panel[placement.Offset..];
+            for (int c = 0; c < Six; c++)
+            {
+                block.Slice(Six * c, Six).CopyTo(target.Slice(c * stride, Six));
+            }
+
+            if (_layout.PartlyHeld[placement.Row] || _layout.PartlyHeld[placement.Column])
+            {
+                Hold(placement, stride, target);
+            }
+        }
+    }
+
+    private void Hold(FrameLayout.Placement placement, int stride, Span<double> target)
+    {
+        for (int c = 0; c < Six; c++)
+        {
+            for (int r = 0; r < Six; r++)
+            {
+                bool heldColumn = _layout.HeldAt[(Six * placement.Column) + c];
+                if (heldColumn || _layout.HeldAt[(Six * placement.Row) + r])
+                {
+                    bool itself = heldColumn && placement.Pair < 0 && r == c;
+                    target[(c * stride) + r] = itself ? OwnStiffness(Diagonal[(Six * placement.Column) + c]) : 0;
+                }
+            }
+        }
+    }
+
+    /// <summary>A held freedom that no element stiffens still needs a pivot.</summary>
+    private static double OwnStiffness(double stiffness) => stiffness > 0 ? stiffness : 1;
+
+    /// <summary>block += Σ s · rows columnsᵀ over the modes.</summary>
+    private static void AddBlock(ref double rows, ref double columns, ReadOnlySpan<double> stiffness, Span<double> block)
+    {
+        ref double target = ref MemoryMarshal.GetReference(block);
+        for (nuint c = 0; c < Six; c++)
+        {
+            Vector256<double> four = Vector256.LoadUnsafe(ref target, Six * c);
+            Vector128<double> two = Vector128.LoadUnsafe(ref target, (Six * c) + 4);
+            nuint at = 0;
+            foreach (double s in stiffness)
+            {
+                double factor = s * Unsafe.Add(ref columns, at + c);
+                four = Vector256.FusedMultiplyAdd(Vector256.Create(factor), Vector256.LoadUnsafe(ref rows, at), four);
+                two = Vector128.FusedMultiplyAdd(Vector128.Create(factor), Vector128.LoadUnsafe(ref rows, at + 4), two);
+                at += ElementModes.Freedoms;
+            }
+
+            four.StoreUnsafe(ref target, Six * c);
+            two.StoreUnsafe(ref target, (Six * c) + 4);
+        }
+    }
+
+    private double LargestRowSum()
+    {
+        bool[] held = _layout.HeldAt;
+        Array.Clear(_rowSums);
+        for (int place = 0; place < _layout.NodeAt.Length; place++)
+        {
+            AddSums(_own.AsSpan(BlockSize * place, BlockSize), place, place, both: false);
+        }
+
+        for (int pair = 0; pair < _layout.PairRows.Length; pair++)
+        {
+            AddSums(_pairs.AsSpan(BlockSize * pair, BlockSize), _layout.PairRows[pair], _layout.PairColumns[pair], both: true);
+        }
+
+        double largest = 0;
+        for (int k = 0; k < _rowSums.Length; k++)
+        {
+            if (!held[k])
+            {
+                largest = Math.Max(largest, _rowSums[k]);
+            }
+        }
+
+        return largest;
+    }
+
+    private void AddSums(ReadOnlySpan<double> block, int row, int column, bool both)
+    {
+        Span<double> ofRows = _rowSums.AsSpan(Six * row, Six);
+        Span<double> ofColumns = _rowSums.AsSpan(Six * column, Six);
+        ReadOnlySpan<bool> heldRows = _layout.HeldAt.AsSpan(Six * row, Six);
+        ReadOnlySpan<bool> heldColumns = _layout.HeldAt.AsSpan(Six * column, Six);
+        for (int c = 0; c < Six; c++)
+        {
+            double sum = 0;
+            for (int r = 0; r < Six; r++)
+            {
+                double size = Math.Abs(block[(Six * c) + r]);
+                sum += heldRows[r] ? 0 : size;
+                ofRows[r] += heldColumns[c] ? 0 : size;
+            }
+
+            ofColumns[c] += both ? sum : 0;
+        }
+    }
+}

@@ -1,0 +1,197 @@
+using FrameGen.Geometry;
+
+namespace FrameGen.Mechanics.Frames;
+
+/// <summary>
+/// The layout of the factor, made once a topology: columns with the same pattern are gathered in fronts (supernodes), each a dense
+/// panel, and every front knows where its leftover goes in its parent (the multifrontal method: I. Duff, J. Reid, ACM Trans.
+/// Math. Softw. 9 (1983) 302).
+/// </summary>
+/// <remarks>
+/// Rows of a front: its own columns' freedoms, padded to a multiple of eight, then the rows below, padded too. A panel holds all of
+/// them for the own columns, column by column; the leftover (Schur complement) holds the rows below for themselves. Padding is zero.
+/// </remarks>
+internal sealed class SymbolicFactor
+{
+    /// <summary>Freedoms a node.</summary>
+    public const int Six = 6;
+
+    /// <summary>Doubles a vector.</summary>
+    public const int Lanes = 8;
+
+    // Below this many nodes minimum degree is as good as any order.
+    private const int SmallFrame = 100;
+
+    private SymbolicFactor(int[] order, Front[] fronts)
+    {
+        Order = order;
+        Place = EliminationTree.Inverse(order);
+        Fronts = fronts;
+        foreach (Front front in fronts)
+        {
+            front.PanelStart = PanelLength;
+            PanelLength += (long)front.Stride * Six * front.Columns;
+            WidestFront = Math.Max(WidestFront, front.Stride);
+        }
+
+        if (PanelLength > Array.MaxLength)
+        {
+            throw new InvalidOperationException("The frame's factor does not fit into one array.");
+        }
+
+        StackLeftovers();
+    }
+
+    /// <summary>Node at each place of the elimination order.</summary>
+    public int[] Order { get; }
+
+    /// <summary>Place of each node.</summary>
+    public int[] Place { get; }
+
+    /// <summary>Fronts, children before parents.</summary>
+    public Front[] Fronts { get; }
+
+    /// <summary>Doubles of all panels.</summary>
+    public long PanelLength { get; }
+
+    /// <summary>Doubles of the leftovers alive at one time, on each of two stacks.</summary>
+    public long[] StackLengths { get; } = new long[2];
+
+    /// <summary>The largest <see cref="Front.Stride"/>.</summary>
+    public int WidestFront { get; }
+
+    /// <summary>Multiplications the numeric factor takes, about.</summary>
+    public double Work { get; private set; }
+
+    /// <summary>Orders the nodes and lays out the fronts.</summary>
+    /// <param name="positions">Of the nodes, mm.</param>
+    /// <param name="starts">One offset into <paramref name="neighbours"/> more than nodes.</param>
+    /// <param name="neighbours">Symmetric adjacency, without the node itself and without repeats.</param>
+    public static SymbolicFactor Build(Vector3[] positions, int[] starts, int[] neighbours)
+    {
+        var tree = EliminationTree.Build(MinimumDegree.Order(positions.Length, starts, neighbours), starts, neighbours);
+        double work = WorkOf(tree);
+        if (positions.Length > SmallFrame)
+        {
+            // Solid lattices are better cut in two; long thin frames and most others are not. The pattern tells.
+            var cut = EliminationTree.Build(NestedDissection.Order(positions, starts, neighbours), starts, neighbours);
+            double workOfCut = WorkOf(cut);
+            (tree, work) = workOfCut < work ? (cut, workOfCut) : (tree, work);
+        }
+
+        return new SymbolicFactor(tree.Order, Gather(tree)) { Work = work };
+    }
+
+    private static double WorkOf(EliminationTree tree) =>
+        tree.Rows.Sum(rows => 108.0 * (rows.Length + 1) * (rows.Length + 1));
+
+    private static Front[] Gather(EliminationTree tree)
+    {
+        int n = tree.Order.Length;
+        var ends = new List<int>();
+        for (int k = 0; k < n; k++)
+        {
+            // A column joins the one before when that one's pattern is this column and its pattern.
+            bool joins = k > 0 && tree.Parents[k - 1] == k && tree.Rows[k - 1].Length == tree.Rows[k].Length + 1;
+            if (joins)
+            {
+                ends[^1] = k + 1;
+            }
+            else
+            {
+                ends.Add(k + 1);
+            }
+        }
+
+        // A front also takes in its last child where that costs few zeros: fewer, fuller fronts are faster.
+        var kept = new List<(int First, int End, double Zeros)>();
+        int first = 0;
+        foreach (int end in ends)
+        {
+            (int First, int End, double Zeros) front = (first, end, 0);
+            first = end;
+            while (kept.Count > 0 && tree.Parents[kept[^1].End - 1] is int parent && parent >= front.First && parent < front.End)
+            {
+                (int First, int End, double Zeros) child = kept[^1];
+                int childColumns = child.End - child.First;
+                int columns = front.End - child.First;
+                int below = tree.Rows[front.End - 1].Length;
+                double zeros = front.Zeros + child.Zeros
+                    + ((double)childColumns * (front.End - front.First + below - tree.Rows[child.End - 1].Length));
+                double size = columns * (((columns + 1) / 2.0) + below);
+                double allowed = columns <= 3 ? 0.5 : columns <= 8 ? 0.2 : 0.08;
+                if (zeros > allowed * size)
+                {
+                    break;
+                }
+
+                front = (child.First, front.End, zeros);
+                kept.RemoveAt(kept.Count - 1);
+            }
+
+            kept.Add(front);
+        }
+
+        return Connect(tree, kept);
+    }
+
+    private static Front[] Connect(EliminationTree tree, List<(int First, int End, double Zeros)> kept)
+    {
+        var fronts = new Front[kept.Count];
+        int[] frontOf = new int[tree.Order.Length];
+        for (int s = 0; s < fronts.Length; s++)
+        {
+            fronts[s] = new Front(kept[s].First, kept[s].End - kept[s].First, tree.Rows[kept[s].End - 1]);
+            Array.Fill(frontOf, s, fronts[s].First, fronts[s].Columns);
+        }
+
+        var children = new List<Front>[fronts.Length];
+        for (int s = 0; s < fronts.Length; s++)
+        {
+            fronts[s].Children = children[s]?.ToArray() ?? [];
+            if (fronts[s].Below.Length > 0)
+            {
+                int parent = frontOf[fronts[s].Below[0]];
+                fronts[s].ConnectTo(fronts[parent]);
+                (children[parent] ??= []).Add(fronts[s]);
+            }
+        }
+
+        return fronts;
+    }
+
+    /// <summary>
+    /// A front needs its children's leftovers while its own grows: levels take turns on two stacks, so that both are stacks.
+    /// </summary>
+    private void StackLeftovers()
+    {
+        int[] depth = new int[Fronts.Length];
+        var indexes = new Dictionary<Front, int>(ReferenceEqualityComparer.Instance);
+        for (int s = 0; s < Fronts.Length; s++)
+        {
+            indexes[Fronts[s]] = s;
+        }
+
+        for (int s = Fronts.Length - 1; s >= 0; s--)
+        {
+            foreach (Front child in Fronts[s].Children)
+            {
+                depth[indexes[child]] = depth[s] + 1;
+            }
+        }
+
+        long[] tops = new long[2];
+        for (int s = 0; s < Fronts.Length; s++)
+        {
+            Front front = Fronts[s];
+            front.Stack = depth[s] & 1;
+            front.LeftoverStart = tops[front.Stack];
+            tops[front.Stack] += (long)front.BelowStride * Six * front.Below.Length;
+            StackLengths[front.Stack] = Math.Max(StackLengths[front.Stack], tops[front.Stack]);
+            if (front.Children.Length > 0)
+            {
+                tops[1 - front.Stack] = front.Children[0].LeftoverStart;
+            }
+        }
+    }
+}
