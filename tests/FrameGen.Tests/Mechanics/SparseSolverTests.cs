@@ -1,0 +1,163 @@
+using CsCheck;
+using FrameGen.Geometry;
+using FrameGen.Mechanics.Frames;
+using Xunit;
+
+namespace FrameGen.Tests.Mechanics;
+
+public class SparseSolverTests
+{
+    private static readonly BeamProfile[] Design = [FrameSketch.Profile(35, 2), FrameSketch.Profile(25, 1.5) with { Iz = 9000, ShearAreaY = 70 }];
+
+    [Theory]
+    [InlineData(1UL, 4)]
+    [InlineData(2UL, 9)]
+    [InlineData(3UL, 17)]
+    [InlineData(4UL, 30)]
+    [InlineData(5UL, 45)]
+    public void Agrees_with_a_dense_solve_of_the_textbook_matrix(ulong seed, int nodes)
+    {
+        FrameSketch sketch = SolverTestFrames.Random(seed, nodes);
+        BeamLoads loads = SolverTestFrames.Loads(new BeamFrame(sketch.Nodes, sketch.Elements)) with { ElementLoads = [] };
+        FrameSolution solution = sketch.Solver().Factor(Design).Solve(loads);
+        double[] dense = DenseFrame.Solve(sketch, Design, loads.NodalLoads);
+        double largest = dense.Max(Math.Abs);
+        for (int node = 0; node < nodes; node++)
+        {
+            (Vector3 u, Vector3 r) = (solution.Displacement(node), solution.Rotation(node));
+            double[] ours = [u.X, u.Y, u.Z, r.X, r.Y, r.Z];
+            for (int i = 0; i < 6; i++)
+            {
+                Assert.Equal(dense[(6 * node) + i], ours[i], 1e-9 * largest);
+            }
+        }
+    }
+
+    // A block of 9 x 9 x 9 nodes: wide fronts, several passes in each, nested dissection against minimum degree.
+    [Fact]
+    public void A_solid_lattice_is_solved_to_rounding()
+    {
+        const int Side = 9;
+        var sketch = new FrameSketch();
+        for (int k = 0; k < Side * Side * Side; k++)
+        {
+            (int x, int y, int z) = (k % Side, k / Side % Side, k / (Side * Side));
+            sketch.Node(400 * x, 300 * y, 500 * z);
+            foreach (int before in (int[])[x > 0 ? 1 : 0, y > 0 ? Side : 0, z > 0 ? Side * Side : 0, x > 0 && z > 0 ? 1 + (Side * Side) : 0])
+            {
+                if (before > 0)
+                {
+                    sketch.Tube(k - before, k, profile: (x + y) % 2);
+                }
+            }
+
+            if (z == 0)
+            {
+                sketch.Hold(k, x == 0 ? "111111" : "101000");
+            }
+        }
+
+        FrameSolver solver = sketch.Solver();
+        BeamLoads loads = SolverTestFrames.Loads(solver.Frame);
+        FrameSolution solution = solver.Factor(Design).Solve(loads);
+        Assert.InRange(solution.BackwardError, 0, 1e-14);
+        Assert.InRange(solution.EquilibriumError, 0, 1e-10);
+    }
+
+    [Fact]
+    public void Orders_are_permutations_and_fill_no_more_than_a_band()
+    {
+        // A grid of 30 x 30: a band order fills 30 entries a column, dissection far fewer.
+        const int Side = 30;
+        const int Count = Side * Side;
+        int[] starts = new int[Count + 1];
+        var neighbours = new List<int>();
+        for (int k = 0; k < Count; k++)
+        {
+            (int x, int y) = (k % Side, k / Side);
+            neighbours.AddRange(((int[])[y > 0 ? k - Side : -1, x > 0 ? k - 1 : -1, x + 1 < Side ? k + 1 : -1, y + 1 < Side ? k + Side : -1]).Where(j => j >= 0));
+            starts[k + 1] = neighbours.Count;
+        }
+
+        int[] list = [.. neighbours];
+        Vector3[] positions = [.. Enumerable.Range(0, Count).Select(k => new Vector3(k % Side, k / Side, 0))];
+        double band = Fill([.. Enumerable.Range(0, Count)]);
+        double degree = Fill(MinimumDegree.Order(Count, starts, list));
+        double dissection = Fill(NestedDissection.Order(positions, starts, list));
+        Assert.InRange(degree, 1, 0.5 * band);
+        Assert.InRange(dissection, 1, 0.5 * band);
+
+        double Fill(int[] order)
+        {
+            Assert.Equal(Enumerable.Range(0, Count), order.Order());
+            return EliminationTree.Build(order, starts, list).Rows.Sum(rows => (double)rows.Length);
+        }
+    }
+
+    // On small random graphs: the order is complete whatever the shape, also with parts not joined to one another.
+    [Fact]
+    public void Orders_of_random_graphs_are_complete()
+    {
+        var pcg = new PCG(1, 7UL);
+        Gen<int> any = Gen.Int[0, 39];
+        for (int round = 0; round < 60; round++)
+        {
+            const int Count = 40;
+            var joined = new SortedSet<(int, int)>();
+            for (int edge = 0; edge < 3 * round; edge++)
+            {
+                (int i, int j) = (any.Generate(pcg, null, out _), any.Generate(pcg, null, out _));
+                if (i != j)
+                {
+                    joined.Add((i, j));
+                    joined.Add((j, i));
+                }
+            }
+
+            int[] starts = [.. Enumerable.Range(0, Count + 1).Select(k => joined.Count(e => e.Item1 < k))];
+            int[] neighbours = [.. joined.Select(e => e.Item2)];
+            Vector3[] positions = [.. Enumerable.Range(0, Count).Select(k => new Vector3(k % 7, k % 3, k % 5))];
+            Assert.Equal(Enumerable.Range(0, Count), MinimumDegree.Order(Count, starts, neighbours).Order());
+            Assert.Equal(Enumerable.Range(0, Count), NestedDissection.Order(positions, starts, neighbours).Order());
+        }
+    }
+
+    [Fact]
+    public void Nodes_at_one_place_can_be_ordered()
+    {
+        const int Count = 60;
+        int[] starts = [.. Enumerable.Range(0, Count + 1).Select(k => Math.Max(0, Math.Min((2 * k) - 1, (2 * Count) - 2)))];
+        int[] neighbours = [.. Enumerable.Range(0, Count).SelectMany(k => new[] { k - 1, k + 1 }.Where(j => j >= 0 && j < Count))];
+        Assert.Equal(Enumerable.Range(0, Count), NestedDissection.Order(new Vector3[Count], starts, neighbours).Order());
+    }
+
+    // A soft cantilever with a stub a million times stiffer at its end: the stub carries on straight.
+    [Fact]
+    public void Very_stiff_tubes_beside_soft_ones_are_no_mechanism()
+    {
+        BeamProfile soft = FrameSketch.Profile(30, 2);
+        FrameSolution solution = StubOnCantilever(soft, 1e6);
+        double ei = soft.E * soft.Iy;
+        double sag = (100 * 1e9 / (3 * ei)) + (100 * 1000 / (soft.G * soft.ShearAreaZ)) + (100 * 250 * 1e6 / (2 * ei));
+        double slope = (100 * 1e6 / (2 * ei)) + (100 * 250 * 1000 / ei);
+        double tip = sag + (250 * slope);
+        Assert.Equal(-tip, solution.Displacement(2).Z, 1e-6 * tip);
+        Assert.InRange(solution.EquilibriumError, 0, 1e-7);
+    }
+
+    // Doubles can't hold a ratio of 1e12: the answer says so itself, by loads and reactions that don't balance.
+    [Fact]
+    public void An_answer_lost_to_rounding_is_told_by_its_equilibrium()
+    {
+        FrameSolution solution = StubOnCantilever(FrameSketch.Profile(30, 2), 1e12);
+        Assert.True(solution.EquilibriumError > 1e-9);
+    }
+
+    private static FrameSolution StubOnCantilever(BeamProfile soft, double ratio)
+    {
+        FrameSketch sketch = new FrameSketch().Node(0, 0, 0).Node(0, 1000, 0).Node(0, 1250, 0)
+            .Tube(0, 1, 0).Tube(1, 2, 1).Hold(0, "111111");
+        BeamProfile stiff = soft with { E = ratio * soft.E, G = ratio * soft.G };
+        return sketch.Solver().Factor([soft, stiff]).Solve(new BeamLoads([new NodalLoad(2, new(0, 0, -100), Vector3.Zero)], []));
+    }
+}
