@@ -1,0 +1,38 @@
+using FrameGen.Diagnostics;
+
+namespace FrameGen.Spec;
+
+/// <summary>A tube as written.</summary>
+/// <param name="Name">Unique.</param>
+/// <param name="From">Where its axis begins.</param>
+/// <param name="To">Where its axis ends.</param>
+/// <param name="Group">The group whose section it has.</param>
+/// <param name="Up">Direction of the top line; null for the default.</param>
+public sealed record TubeSpec(Placed<string> Name, TubeEndSpec From, TubeEndSpec To, Placed<string> Group, SpecVector? Up);
+
+/// <summary>One end of a tube as written.</summary>
+/// <param name="Node">The node it belongs to.</param>
+/// <param name="Offset">From the node to the axis' end; null for none.</param>
+/// <param name="Cut">What the spec asks of the cut.</param>
+public sealed record TubeEndSpec(Placed<string> Node, SpecVector? Offset, EndCutSpec Cut);
+
+/// <summary>How an end is asked to be cut.</summary>
+public enum RequestedCut
+{
+    /// <summary>Not said: coped to what stands before it, else square or mitred.</summary>
+    Default,
+
+    /// <summary>Coped.</summary>
+    Cope,
+
+    /// <summary>Square to the axis.</summary>
+    Square,
+}
+
+/// <summary>What a spec asks of one end.</summary>
+/// <param name="Cut">Kind of cut.</param>
+/// <param name="Extend">Past the node; null where not written.</param>
+/// <param name="Gap">Between this end and its mates; null for the general one.</param>
+/// <param name="Wrap">True where it may be wider than its seat.</param>
+/// <param name="At">Where it is written; the tube's place where nothing is.</param>
+public sealed record EndCutSpec(RequestedCut Cut, SpecQuantity? Extend, SpecQuantity? Gap, bool Wrap, SourcePlace At);
