@@ -1,0 +1,59 @@
+using FrameGen.Diagnostics;
+using FrameGen.Geometry;
+using FrameGen.Spec;
+
+namespace FrameGen.Model;
+
+/// <summary>Which end of a tube.</summary>
+public enum End
+{
+    /// <summary>At the <c>from</c> node.</summary>
+    From,
+
+    /// <summary>At the <c>to</c> node.</summary>
+    To,
+}
+
+/// <summary>One end of one tube.</summary>
+/// <param name="Tube">Index of the tube.</param>
+/// <param name="End">Which end.</param>
+public readonly record struct TubeEndId(int Tube, End End);
+
+/// <summary>A straight tube.</summary>
+/// <param name="Name">Unique without regard to case.</param>
+/// <param name="From">End at x = 0.</param>
+/// <param name="To">End at x = <see cref="Length"/>.</param>
+/// <param name="Group">Index of its group.</param>
+/// <param name="Axes">Local axes.</param>
+/// <param name="NodesOn">Nodes that lie on it, by distance from its start.</param>
+/// <param name="Original">Index of the tube it is the mirrored twin of; null for an original.</param>
+/// <param name="At">Where it is written.</param>
+public sealed record Tube(
+    string Name,
+    TubeEnd From,
+    TubeEnd To,
+    int Group,
+    TubeAxes Axes,
+    IReadOnlyList<int> NodesOn,
+    int? Original,
+    SourcePlace At)
+{
+    /// <summary>Length of the axis between its own ends, mm.</summary>
+    public double Length => (To.Point - From.Point).Length;
+
+    /// <summary>The end asked for.</summary>
+    public TubeEnd this[End end] => end == End.From ? From : To;
+
+    /// <summary>Unit direction from an end into the tube.</summary>
+    public Vector3 Into(End end) => end == End.From ? Axes.X : -Axes.X;
+}
+
+/// <summary>One end of a tube.</summary>
+/// <param name="Node">Index of its node.</param>
+/// <param name="Point">End of the axis, mm: the node, or beside it where the axis passes at a distance.</param>
+/// <param name="Cut">Kind of cut asked for.</param>
+/// <param name="Extend">Past the end point, mm; null where not asked.</param>
+/// <param name="Gap">Between a coped end and its mates, mm.</param>
+/// <param name="Wrap">True where it may be wider than its seat.</param>
+/// <param name="At">Where its cut is written.</param>
+public sealed record TubeEnd(int Node, Vector3 Point, RequestedCut Cut, double? Extend, double Gap, bool Wrap, SourcePlace At);

@@ -1,0 +1,30 @@
+using FrameGen.Diagnostics;
+using FrameGen.Mechanics.Materials;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Spec;
+
+namespace FrameGen.Model;
+
+/// <summary>Tubes of one section and material.</summary>
+/// <param name="Name">Unique.</param>
+/// <param name="Material">Of all its tubes.</param>
+/// <param name="Candidates">One for a fixed section; else those to choose from, by mass per metre, then by name.</param>
+/// <param name="IsFixed">True where the spec gives the section.</param>
+/// <param name="Choose">What the spec lets it choose from; null for a fixed section.</param>
+/// <param name="Welded">False for tubes joined without heat.</param>
+/// <param name="At">Where it is written.</param>
+public sealed record TubeGroup(
+    string Name,
+    Material Material,
+    IReadOnlyList<Candidate> Candidates,
+    bool IsFixed,
+    ChooseSpec? Choose,
+    bool Welded,
+    SourcePlace At);
+
+/// <summary>A section that can be bought, or the one that the spec gives.</summary>
+/// <param name="Section">Its section.</param>
+/// <param name="StockList">The list it comes from; empty for a section of the spec that no list holds.</param>
+/// <param name="BarLength">Usual bar, mm.</param>
+/// <param name="PricePerMetre">In the shop's own money; null where unknown.</param>
+public sealed record Candidate(Section Section, string StockList, double BarLength, double? PricePerMetre);
