@@ -1,0 +1,192 @@
+using FrameGen.Mechanics.Frames;
+using FrameGen.Mechanics.Materials;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Sizing;
+
+/// <summary>
+/// The designs to choose from: one option a group. A design is a list of positions in the groups' options, or the number that
+/// stands for it; the tables hold what the search asks of an option, so that trying a design computes no section twice.
+/// </summary>
+internal sealed class DesignSpace
+{
+    private readonly Option[][] _options;
+
+    private DesignSpace(FrameModel model, Option[][] options)
+    {
+        Model = model;
+        _options = options;
+        Count = 1;
+        foreach (Option[] group in options)
+        {
+            Count = Count > long.MaxValue / group.Length ? long.MaxValue : Count * group.Length;
+        }
+    }
+
+    public FrameModel Model { get; }
+
+    /// <summary>How many designs there are; <see cref="long.MaxValue"/> for that many or more.</summary>
+    public long Count { get; }
+
+    public int Groups => _options.Length;
+
+    /// <summary>A group's options, by mass per metre, then by name.</summary>
+    public ReadOnlySpan<Option> this[int group] => _options[group];
+
+    /// <summary>All candidates that a filter lets pass.</summary>
+    /// <param name="model">The frame.</param>
+    /// <param name="keep">Whether a group may use a candidate; a group left with none keeps them all.</param>
+    /// <param name="emptied">Groups that the filter would leave with nothing.</param>
+    public static DesignSpace Create(FrameModel model, Func<int, Section, bool> keep, out IReadOnlyList<int> emptied)
+    {
+        var lengths = new double[model.Groups.Count];
+        foreach (Tube tube in model.Tubes)
+        {
+            lengths[tube.Group] += tube.Length;
+        }
+
+        var none = new List<int>();
+        var options = new Option[model.Groups.Count][];
+        for (int g = 0; g < options.Length; g++)
+        {
+            TubeGroup group = model.Groups[g];
+
+            // A group without tubes weighs nothing whatever it has: its first candidate stands for all.
+            IEnumerable<Candidate> all = lengths[g] > 0 ? group.Candidates : group.Candidates.Take(1);
+            List<Candidate> kept = [.. all.Where(c => keep(g, c.Section))];
+            if (kept.Count == 0)
+            {
+                none.Add(g);
+                kept = [.. group.Candidates];
+            }
+
+            options[g] = Describe(kept, group.Material, lengths[g]);
+        }
+
+        emptied = none;
+        return new DesignSpace(model, options);
+    }
+
+    /// <summary>The design of a number, into <paramref name="choice"/>.</summary>
+    public void Decode(int design, Span<int> choice)
+    {
+        for (int g = _options.Length - 1; g >= 0; g--)
+        {
+            design = Math.DivRem(design, _options[g].Length, out choice[g]);
+        }
+    }
+
+    /// <summary>Mass of a design's tubes on their axis lengths, kg.</summary>
+    public double MassOf(ReadOnlySpan<int> choice)
+    {
+        double mass = 0;
+        for (int g = 0; g < choice.Length; g++)
+        {
+            mass += _options[g][choice[g]].MassKg;
+        }
+
+        return mass;
+    }
+
+    /// <summary>
+    /// Every design, lightest first; equal masses (to 1e-9 kg, far below any difference that sizes make, so that rounding decides
+    /// nothing) by fewer different sizes, then by the sections' names group by group.
+    /// </summary>
+    public int[] InOrder()
+    {
+        int count = checked((int)Count);
+        var designs = new int[count];
+        var masses = new long[count];
+        var choice = new int[_options.Length];
+        for (int design = 0; design < count; design++)
+        {
+            Decode(design, choice);
+            designs[design] = design;
+            masses[design] = (long)Math.Round(MassOf(choice) * 1e9);
+        }
+
+        Array.Sort(masses, designs);
+        for (int start = 0, stop; start < count; start = stop)
+        {
+            stop = start + 1;
+            while (stop < count && masses[stop] == masses[start])
+            {
+                stop++;
+            }
+
+            if (stop - start > 1)
+            {
+                designs.AsSpan(start, stop - start).Sort(CompareEquallyHeavy);
+            }
+        }
+
+        return designs;
+    }
+
+    /// <summary>Different sizes in a design: the same section in two materials counts twice.</summary>
+    public int DifferentSizes(ReadOnlySpan<int> choice)
+    {
+        int different = 0;
+        for (int g = 0; g < choice.Length; g++)
+        {
+            bool first = true;
+            for (int before = 0; before < g && first; before++)
+            {
+                first = !string.Equals(Model.Groups[g].Material.Name, Model.Groups[before].Material.Name, StringComparison.Ordinal)
+                    || !_options[g][choice[g]].Section.Equals(_options[before][choice[before]].Section);
+            }
+
+            different += first ? 1 : 0;
+        }
+
+        return different;
+    }
+
+    private static Option[] Describe(List<Candidate> candidates, Material material, double length)
+    {
+        // Positions by name decide ties; ordinal, so that no culture does.
+        List<string> names = [.. candidates.Select(c => c.Section.Name).Order(StringComparer.Ordinal)];
+        return [.. candidates.Select(candidate =>
+        {
+            Section section = candidate.Section;
+            (double shearY, double shearZ) = section.ShearAreas(material.PoissonRatio);
+            double massPerLength = material.Density * section.Area;
+            return new Option(
+                candidate,
+                new BeamProfile(material.E, material.G, section.Area, section.Iy, section.Iz, section.J, shearY, shearZ),
+                massPerLength,
+                massPerLength * length,
+                section.OuterSize / 2,
+                names.IndexOf(section.Name));
+        })];
+    }
+
+    private int CompareEquallyHeavy(int a, int b)
+    {
+        Span<int> choiceA = stackalloc int[_options.Length];
+        Span<int> choiceB = stackalloc int[_options.Length];
+        Decode(a, choiceA);
+        Decode(b, choiceB);
+        int order = DifferentSizes(choiceA).CompareTo(DifferentSizes(choiceB));
+        for (int g = 0; g < _options.Length && order == 0; g++)
+        {
+            order = _options[g][choiceA[g]].NameRank.CompareTo(_options[g][choiceB[g]].NameRank);
+        }
+
+        return order != 0 ? order : a.CompareTo(b);
+    }
+}
+
+/// <summary>One candidate of a group, with what the search asks of it.</summary>
+/// <param name="Candidate">The candidate.</param>
+/// <param name="Profile">Its stiffness in the group's material.</param>
+/// <param name="MassPerLength">kg/mm.</param>
+/// <param name="MassKg">Of all the group's tubes on their axis lengths.</param>
+/// <param name="HalfWidth">Half the larger outer size, mm.</param>
+/// <param name="NameRank">Position of its name among the group's options.</param>
+internal sealed record Option(
+    Candidate Candidate, BeamProfile Profile, double MassPerLength, double MassKg, double HalfWidth, int NameRank)
+{
+    public Section Section => Candidate.Section;
+}

@@ -1,0 +1,104 @@
+using FrameGen.Diagnostics;
+using FrameGen.Mechanics.Frames;
+using FrameGen.Model;
+using FrameGen.Sizing.Analysis;
+using FrameGen.Sizing.Targets;
+
+namespace FrameGen.Sizing;
+
+/// <summary>Chooses one section a group: the lightest design that meets every target.</summary>
+public static class SectionSizer
+{
+    /// <summary>So many designs are gone through one by one, and no more.</summary>
+    public const long MostDesigns = 200_000;
+
+    /// <summary>Sizes a frame.</summary>
+    /// <param name="model">The frame.</param>
+    /// <param name="diagnostics">Errors: a mechanism, too many designs. Unmet targets are warnings here, and the status says so.</param>
+    /// <param name="progress">Told now and then; may be null.</param>
+    /// <returns>The sized frame, with the least bad design when targets can't be met; null when an error was reported.</returns>
+    public static SizedFrame? Size(FrameModel model, DiagnosticList diagnostics, IProgress<SizingProgress>? progress = null) =>
+        Size(model, diagnostics, progress, Environment.ProcessorCount);
+
+    /// <summary>Sizes a frame on so many threads; the answer does not depend on them.</summary>
+    internal static SizedFrame? Size(FrameModel model, DiagnosticList diagnostics, IProgress<SizingProgress>? progress, int threads)
+    {
+        IReadOnlyList<TargetCheck> checks = TargetCheck.All(model);
+        DesignSpace space = DesignSpace.Create(
+            model, (group, section) => checks.All(c => c.Allows(group, section)), out IReadOnlyList<int> emptied);
+        if (space.Count > MostDesigns)
+        {
+            diagnostics.Error(null, TooManyDesigns(space));
+            return null;
+        }
+
+        bool needsFrame = model.Cases.Count > 0 || checks.Any(c => c.NeedsFrame);
+        StructuralModel? structure = needsFrame ? StructuralModel.Build(model) : null;
+        var joints = new JointTable(space);
+        var welds = WeldPairs.Build(joints, model);
+        DesignAnalysis NewAnalysis() => new(space, joints, welds, structure);
+        if (structure is not null && !Mechanisms.StandsStill(structure, diagnostics))
+        {
+            return null;
+        }
+
+        var search = new DesignSearch(space, space.InOrder(), checks, joints, NewAnalysis, threads, progress);
+        try
+        {
+            return Choose(model, search, emptied.Count > 0, NewAnalysis(), diagnostics);
+        }
+        catch (MechanismException mechanism)
+        {
+            // The layout stands still: what moves does so because sizes are too far apart for the arithmetic.
+            diagnostics.Error(
+                null,
+                "the frame can't be solved reliably: some tubes are so much stiffer than others, or so much shorter, that to rounding "
+                + $"{Mechanisms.Subject(structure!, mechanism.Motions[0])} can move as if nothing held it; bring their sizes closer together");
+            return null;
+        }
+    }
+
+    private static SizedFrame? Choose(
+        FrameModel model, DesignSearch search, bool hopeless, DesignAnalysis analysis, DiagnosticList diagnostics)
+    {
+        // Where a member target leaves a group nothing, no design meets them all, and looking for one is in vain.
+        SearchResult found = search.FindFirst(hopeless);
+        if (found.Looked == 0)
+        {
+            FitReport.Explain(analysis, diagnostics);
+            return null;
+        }
+
+        bool framed = search.Checks.Any(c => c.NeedsFrame);
+        long analyses = framed ? found.Looked : analysis.Structure is null ? 0 : 1;
+        if (found.Rank is { } rank)
+        {
+            search.Turn(analysis, rank);
+            return SizingFinish.Describe(
+                analysis,
+                model.Groups.All(g => g.IsFixed) ? SizingStatus.Fixed : SizingStatus.ProvenLightest,
+                analyses,
+                search.Checks,
+                diagnostics);
+        }
+
+        SearchSurvey survey = search.Survey();
+        UnmetReport.Explain(search, survey, analysis, diagnostics);
+        search.Turn(analysis, survey.LeastBad);
+        return SizingFinish.Describe(analysis, SizingStatus.Unmet, analyses, search.Checks, diagnostics);
+    }
+
+    private static string TooManyDesigns(DesignSpace space)
+    {
+        List<int> chosen = [.. Enumerable.Range(0, space.Groups).Where(g => space[g].Length > 1).OrderByDescending(g => space[g].Length).ThenBy(g => g)];
+        string count = space.Count == long.MaxValue ? "more designs than can be counted" : $"{Wording.Count(space.Count)} designs";
+        string groups = string.Join(", ", chosen.Select(g => $"{space.Model.Groups[g].Name} {Wording.Count(space[g].Length)}"));
+
+        // As many for each group as fit into the limit when all have the same.
+        int each = (int)Math.Floor(Math.Pow(MostDesigns, 1.0 / chosen.Count) + 1e-9);
+        string advice = each > 1
+            ? $"narrow the ranges of the largest (od, wall, fewer stock lists): about {Wording.Count(each)} candidates a group are few enough"
+            : "give some groups a fixed section, or put tubes of several groups into one";
+        return $"there are {count} to choose from, and no more than {Wording.Count(MostDesigns)} are gone through; candidates: {groups}; {advice}";
+    }
+}

@@ -1,0 +1,51 @@
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Sizing;
+
+/// <summary>How sure the choice is.</summary>
+public enum SizingStatus
+{
+    /// <summary>Every group's section is given by the spec, and every target is met.</summary>
+    Fixed,
+
+    /// <summary>No lighter design meets the targets: proven.</summary>
+    ProvenLightest,
+
+    /// <summary>The best one found, with its bound.</summary>
+    BestFound,
+
+    /// <summary>No design meets the targets.</summary>
+    Unmet,
+}
+
+/// <summary>One section a group, every target with its value, and the analysis behind it.</summary>
+/// <param name="Model">The frame.</param>
+/// <param name="Chosen">By group.</param>
+/// <param name="Status">How sure the choice is.</param>
+/// <param name="MassKg">On axis lengths, tubes only: what is minimised.</param>
+/// <param name="BoundKg">No design that meets the targets is lighter; null where there is none.</param>
+/// <param name="Analyses">Designs analysed, counted in the order of the search: the same on any number of cores.</param>
+/// <param name="Targets">One a target, in the spec's order.</param>
+/// <param name="Cases">One a load case, in the model's order; empty when nothing is analysed.</param>
+/// <param name="Joints">The joint of every node in this design, by node.</param>
+public sealed record SizedFrame(
+    FrameModel Model,
+    IReadOnlyList<Candidate> Chosen,
+    SizingStatus Status,
+    double MassKg,
+    double? BoundKg,
+    long Analyses,
+    IReadOnlyList<TargetResult> Targets,
+    IReadOnlyList<CaseResult> Cases,
+    IReadOnlyList<NodeJoint> Joints)
+{
+    /// <summary>The lowest natural frequencies, Hz, lowest first; null when no target asks for them.</summary>
+    public IReadOnlyList<double>? Frequencies { get; init; }
+
+    /// <summary>Section by group.</summary>
+    public IReadOnlyList<Section> Sections { get; } = [.. Chosen.Select(c => c.Section)];
+
+    /// <summary>The section of a tube.</summary>
+    public Section SectionOf(int tube) => Sections[Model.Tubes[tube].Group];
+}

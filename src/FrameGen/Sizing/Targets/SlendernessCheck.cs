@@ -1,0 +1,135 @@
+using FrameGen.Mechanics.Materials;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+using FrameGen.Sizing.Analysis;
+
+namespace FrameGen.Sizing.Targets;
+
+/// <summary>
+/// Length between neighbouring nodes over the radius of gyration, tube by tube; with the wall's limit for round tubes, D/t no more than 90 ε²
+/// (class 3 of EN 1993-1-1, table 5.2, sheet 3), the worse of the two is reported. Settled group by group, before any frame is analysed.
+/// </summary>
+/// <remarks>ε² = 235 MPa/fy for steels; for softer metals times E/210 000 MPa, as EN 1993-1-4 has it.</remarks>
+internal sealed class SlendernessCheck : TargetCheck
+{
+    private const double WallFactor = 90;
+    private const double ReferenceYield = 235;
+    private const double ReferenceModulus = 210_000;
+    private const double SoftestSteel = 190_000;
+
+    private readonly SlendernessTarget _target;
+    private readonly Span[] _longest;
+
+    public SlendernessCheck(FrameModel model, SlendernessTarget target)
+        : base(model, target)
+    {
+        _target = target;
+        _longest = [.. Enumerable.Range(0, model.Groups.Count).Select(g => LongestOf(model, g))];
+    }
+
+    /// <inheritdoc/>
+    public override string Kind => "slenderness";
+
+    /// <inheritdoc/>
+    public override int Cost => 0;
+
+    /// <inheritdoc/>
+    public override bool NeedsFrame => false;
+
+    /// <inheritdoc/>
+    public override bool Allows(int group, Section section) => Ratio(group, section) <= 1;
+
+    /// <inheritdoc/>
+    public override double Ratio(DesignAnalysis analysis)
+    {
+        int worst = WorstGroup(analysis.Sections);
+        return Ratio(worst, analysis.Sections[worst]);
+    }
+
+    /// <inheritdoc/>
+    public override TargetResult Result(DesignAnalysis analysis)
+    {
+        int worst = WorstGroup(analysis.Sections);
+        Section section = analysis.Sections[worst];
+        Span span = _longest[worst];
+        double length = span.Length / Radius(section);
+        (double wall, double wallLimit) = Wall(worst, section);
+        const string Label = "all tubes";
+        return wall / wallLimit > length / _target.Max
+            ? new TargetResult(
+                _target.Index, Kind, Label, wall, wallLimit, "", wall / wallLimit, $"wall of group {Model.Groups[worst].Name}: diameter over thickness of {section.Name}")
+            : new TargetResult(
+                _target.Index, Kind, Label, length, _target.Max, "", length / _target.Max,
+                $"{Model.Tubes[span.Tube].Name} between {Model.Nodes[span.From].Name} and {Model.Nodes[span.To].Name}, {Wording.Number(span.Length)} mm");
+    }
+
+    private static double Radius(Section section) => Math.Min(section.RadiusOfGyrationY, section.RadiusOfGyrationZ);
+
+    private static Span LongestOf(FrameModel model, int group)
+    {
+        var longest = new Span(-1, 0, -1, -1);
+        for (int t = 0; t < model.Tubes.Count; t++)
+        {
+            Tube tube = model.Tubes[t];
+            if (tube.Group != group)
+            {
+                continue;
+            }
+
+            (double at, int from) = (0, tube.From.Node);
+            foreach (int node in tube.NodesOn.OrderBy(n => model.Nodes[n].ThroughDistance))
+            {
+                Offer(model.Nodes[node].ThroughDistance, node);
+            }
+
+            Offer(tube.Length, tube.To.Node);
+
+            void Offer(double next, int node)
+            {
+                if (next - at > longest.Length)
+                {
+                    longest = new Span(t, next - at, from, node);
+                }
+
+                (at, from) = (next, node);
+            }
+        }
+
+        return longest;
+    }
+
+    private double Ratio(int group, Section section)
+    {
+        (double wall, double limit) = Wall(group, section);
+        return Math.Max(_longest[group].Length / Radius(section) / _target.Max, wall / limit);
+    }
+
+    // Diameter over thickness and its limit; 0 where the wall isn't looked at, or there is none.
+    private (double Value, double Limit) Wall(int group, Section section)
+    {
+        Material material = Model.Groups[group].Material;
+        if (!_target.Wall || section is not RoundTube tube || _longest[group].Tube < 0)
+        {
+            return (0, 1);
+        }
+
+        // The higher of the yields, where welds soften the metal: the sheet away from them has to reach it.
+        double softness = material.E >= SoftestSteel ? 1 : material.E / ReferenceModulus;
+        double yield = material.Yield ?? throw new InvalidOperationException($"{material.Name} has no yield, and a wall's limit needs it.");
+        return (tube.OutsideDiameter / tube.Wall, WallFactor * ReferenceYield / yield * softness);
+    }
+
+    private int WorstGroup(Section[] sections)
+    {
+        int worst = 0;
+        for (int g = 1; g < sections.Length; g++)
+        {
+            worst = Ratio(g, sections[g]) > Ratio(worst, sections[worst]) ? g : worst;
+        }
+
+        return worst;
+    }
+
+    /// <summary>The longest stretch between nodes of a group's tubes; no tube for a group without any.</summary>
+    private readonly record struct Span(int Tube, double Length, int From, int To);
+}

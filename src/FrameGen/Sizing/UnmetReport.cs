@@ -1,0 +1,177 @@
+using FrameGen.Diagnostics;
+using FrameGen.Model;
+using FrameGen.Sizing.Analysis;
+using FrameGen.Sizing.Targets;
+using FrameGen.Spec;
+
+namespace FrameGen.Sizing;
+
+/// <summary>Says why no design meets the targets: what can be had, and which limits of the groups stand in the way.</summary>
+internal static class UnmetReport
+{
+    /// <summary>Warns of every target out of reach, with the best that can be had; else of those that can't be met together.</summary>
+    public static void Explain(DesignSearch search, SearchSurvey survey, DesignAnalysis analysis, DiagnosticList diagnostics)
+    {
+        FrameModel model = analysis.Space.Model;
+        if (model.Groups.All(g => g.IsFixed))
+        {
+            return; // told with the design itself
+        }
+
+        bool outOfReach = false;
+        for (int t = 0; t < search.Checks.Count; t++)
+        {
+            TargetCheck check = search.Checks[t];
+            search.Turn(analysis, survey.Best[t]);
+            TargetResult best = check.Result(analysis);
+            if (best.Met)
+            {
+                continue;
+            }
+
+            outOfReach = true;
+            diagnostics.Warning(
+                check.Target.At,
+                $"{best.Kind} {best.Label}: out of reach; the best of all sizes is {Amount(best)}, with {Sizes(analysis)}; "
+                + Limits(check, analysis));
+        }
+
+        search.Turn(analysis, survey.LeastBad);
+        List<TargetResult> failing = [.. search.Checks.Select(c => c.Result(analysis)).Where(r => !r.Met)];
+        if (!outOfReach)
+        {
+            diagnostics.Warning(
+                search.Checks[failing[0].Index].Target.At,
+                $"each target can be met alone, but no design meets all of them; the least bad, {Sizes(analysis)}, misses "
+                + string.Join("; ", failing.Select(r => $"{r.Kind} {r.Label}: {Amount(r)}")));
+        }
+    }
+
+    /// <summary>Warns of every target that a frame of given sections misses.</summary>
+    public static void ExplainFixed(IReadOnlyList<TargetResult> targets, IReadOnlyList<TargetCheck> checks, DiagnosticList diagnostics)
+    {
+        for (int t = 0; t < targets.Count; t++)
+        {
+            if (!targets[t].Met)
+            {
+                string where = targets[t].Where.Length == 0 ? "" : $" ({targets[t].Where})";
+                diagnostics.Warning(
+                    checks[t].Target.At,
+                    $"{targets[t].Kind} {targets[t].Label}: {Amount(targets[t])}{where}; the sections are fixed: give a group stouter ones, or let it `choose`");
+            }
+        }
+    }
+
+    // 4.2 mm, 40 % over the limit of 3 mm.
+    private static string Amount(TargetResult result)
+    {
+        bool isMinimum = result.Value < result.Limit;
+        double off = Math.Abs(result.Value - result.Limit) / result.Limit;
+        return $"{Wording.Quantity(result.Value, result.Unit)}, {Wording.Percent(off)} {(isMinimum ? "below" : "over")} the limit of {Wording.Quantity(result.Limit, result.Unit)}";
+    }
+
+    private static string Sizes(DesignAnalysis analysis)
+    {
+        var sizes = new List<string>();
+        for (int g = 0; g < analysis.Space.Groups; g++)
+        {
+            if (!analysis.Space.Model.Groups[g].IsFixed)
+            {
+                sizes.Add($"{analysis.Space.Model.Groups[g].Name} {analysis.Sections[g].Name}");
+            }
+        }
+
+        return string.Join(", ", sizes);
+    }
+
+    // The groups that matter to the target and stand at the end of their range in its best design.
+    private static string Limits(TargetCheck check, DesignAnalysis analysis)
+    {
+        int[] best = [.. analysis.Choice];
+        double ratio = check.Ratio(analysis);
+        var limits = new List<string>();
+        for (int g = 0; g < best.Length; g++)
+        {
+            if (analysis.Space.Model.Groups[g].IsFixed || !Matters(check, analysis, best, g, ratio))
+            {
+                continue;
+            }
+
+            analysis.Set(best);
+            List<string> group = LimitsOf(analysis, g);
+            if (Blocked(check, analysis, best, g, ratio) is { } blocked)
+            {
+                group.Add(blocked);
+            }
+
+            if (group.Count > 0)
+            {
+                limits.Add($"{analysis.Space.Model.Groups[g].Name}: {string.Join(", ", group)}");
+            }
+        }
+
+        analysis.Set(best);
+        return limits.Count == 0
+            ? "no range of a group stands in the way: change the layout, or the target"
+            : $"in the way stand {string.Join("; ", limits)}: widen them, change the layout, or the target";
+    }
+
+    private static bool Matters(TargetCheck check, DesignAnalysis analysis, int[] best, int group, double ratio)
+    {
+        int options = analysis.Space[group].Length;
+        if (options == 1)
+        {
+            // Nothing to compare with; what a target on the frame owes to it can't be told.
+            return check is not MemberCheck member || member.Concerns(group);
+        }
+
+        int[] other = [.. best];
+        other[group] = best[group] == options - 1 ? 0 : options - 1;
+        analysis.Set(other);
+        return Math.Abs(check.Ratio(analysis) - ratio) > 1e-6 * ratio;
+    }
+
+    // A size of the group that would serve the target better, and the joint that it does not fit; null for none.
+    private static string? Blocked(TargetCheck check, DesignAnalysis analysis, int[] best, int group, double ratio)
+    {
+        int[] other = [.. best];
+        for (int option = analysis.Space[group].Length - 1; option >= 0; option--)
+        {
+            other[group] = option;
+            analysis.Set(other);
+            foreach (NodeEntries node in analysis.Joints.Nodes)
+            {
+                if (!analysis.Joints.At(node, other, analysis.Sections).Fits && check.Ratio(analysis) < ratio)
+                {
+                    return $"{analysis.Sections[group].Name} does not fit joint {analysis.Space.Model.Nodes[node.Node].Name}";
+                }
+            }
+        }
+
+        return null;
+    }
+
+    private static List<string> LimitsOf(DesignAnalysis analysis, int group)
+    {
+        TubeGroup of = analysis.Space.Model.Groups[group];
+        double size = analysis.Sections[group].OuterSize;
+        double wall = analysis.Sections[group].Wall;
+        var limits = new List<string>();
+        Add("od", size, of.Candidates.Min(c => c.Section.OuterSize), of.Candidates.Max(c => c.Section.OuterSize), of.Choose?.Od);
+        Add("wall", wall, of.Candidates.Min(c => c.Section.Wall), of.Candidates.Max(c => c.Section.Wall), of.Choose?.Wall);
+        return limits;
+
+        void Add(string what, double value, double least, double most, RangeSpec? range)
+        {
+            const double Same = 1e-9;
+            if (value >= most - Same)
+            {
+                limits.Add($"{what} at {(range?.Max is null ? "stock's largest" : "its largest")} {Wording.Number(most)} mm");
+            }
+            else if (value <= least + Same)
+            {
+                limits.Add($"{what} at {(range?.Min is null ? "stock's smallest" : "its smallest")} {Wording.Number(least)} mm");
+            }
+        }
+    }
+}
