@@ -1,0 +1,83 @@
+using FrameGen.Geometry;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Joints;
+
+/// <summary>Whether a joint can be made in a design: asked by sizing before anything is cut.</summary>
+public static class JointFit
+{
+    /// <summary>What stands in the way at one node; empty when it can be made.</summary>
+    /// <param name="model">The frame.</param>
+    /// <param name="joint">The node's joint in this design.</param>
+    /// <param name="sections">The design: a section a group.</param>
+    /// <remarks>
+    /// Depends only on the sections of the tubes that meet at the node. May be called from several threads at once.
+    /// </remarks>
+    public static IReadOnlyList<FitProblem> Check(FrameModel model, NodeJoint joint, IReadOnlyList<Section> sections) =>
+        Check(model, JointPlan.Make(model, joint, sections), sections);
+
+    /// <summary>What stands in the way of a planned joint.</summary>
+    internal static IReadOnlyList<FitProblem> Check(FrameModel model, JointPlan plan, IReadOnlyList<Section> sections)
+    {
+        List<FitProblem>? problems = null;
+        foreach (EndPlan end in plan.Ends)
+        {
+            Tube tube = model.Tubes[end.Id.Tube];
+            Section section = sections[tube.Group];
+            if (ReferenceEquals(end, plan.Ends[0]) && plan.RunOutLength > section.OuterSize + RoundOutline.Graze)
+            {
+                Add(new FitProblem(FitProblemKind.RunOutTooLong, end.Id, plan.RunOutAsker, plan.RunOutLength, section.OuterSize));
+            }
+
+            if (end.Kind != CutKind.Cope)
+            {
+                continue;
+            }
+
+            double outer = section.OuterSize / 2;
+            double inner = outer - section.Wall;
+            ContourCope cope = new(end.Mates, tube.Length / 2);
+            int seat = Touching.Seat(cope, inner, outer);
+            if (seat < 0)
+            {
+                (Mate missed, double distance) = Touching.Nearest(cope, inner, outer);
+                Add(new FitProblem(FitProblemKind.Misses, end.Id, missed.Tube, distance, 0));
+                continue;
+            }
+
+            Mate mate = end.Mates[seat];
+            double needed = outer + mate.Axis.DistanceTo(new Line3(end.Frame.Point, end.Frame.Into));
+            double allowed = sections[model.Tubes[mate.Tube].Group].OuterSize / 2;
+            if (needed > allowed + RoundOutline.Graze && !tube[end.Id.End].Wrap)
+            {
+                Add(new FitProblem(FitProblemKind.WiderThanSeat, end.Id, mate.Tube, needed, allowed));
+            }
+        }
+
+        return problems ?? (IReadOnlyList<FitProblem>)[];
+
+        void Add(FitProblem problem) => (problems ??= []).Add(problem);
+    }
+}
+
+/// <summary>What stands in the way of a joint.</summary>
+public enum FitProblemKind
+{
+    /// <summary>The coped tube is wider than its seat; not reported at an end with <c>wrap</c>.</summary>
+    WiderThanSeat,
+
+    /// <summary>The first tube would run out by more than its own size.</summary>
+    RunOutTooLong,
+
+    /// <summary>The end meets none of the tubes it is cut to.</summary>
+    Misses,
+}
+
+/// <summary>A joint that can't be made well.</summary>
+/// <param name="Kind">What is wrong.</param>
+/// <param name="End">The end it is about.</param>
+/// <param name="Mate">The seat; the tube missed; the coped tube that asks for the run-out.</param>
+/// <param name="Needed">Half width plus offset; the run-out, or the distance by which they miss; mm.</param>
+/// <param name="Allowed">Half the seat's width; the longest run-out; 0 for a miss; mm.</param>
+public sealed record FitProblem(FitProblemKind Kind, TubeEndId End, int Mate, double Needed, double Allowed);

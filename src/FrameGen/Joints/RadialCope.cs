@@ -1,0 +1,101 @@
+using FrameGen.Geometry;
+
+namespace FrameGen.Joints;
+
+/// <summary>
+/// A cope whose face points at the axis: at each clock angle the whole wall is cut back to the largest t of its lines,
+/// so that nothing needs filing. Lines that meet nothing count with t = 0. A rod's axis, which belongs to every clock
+/// angle, keeps its own t.
+/// </summary>
+internal sealed class RadialCope(ContourCope asMet, double inner, double outer) : CutSurface
+{
+    private readonly Mate[] _mates = [.. asMet.Mates];
+
+    /// <inheritdoc/>
+    public override bool IsRadial => true;
+
+    /// <inheritdoc/>
+    public override int MarginCount =>
+        _mates is [{ IsLimited: false }] ? 0 : (4 * _mates.Length) + (_mates.Length * (_mates.Length - 1) / 2);
+
+    /// <inheritdoc/>
+    public override int LimitMarginCount => 4 * _mates.Length;
+
+    /// <inheritdoc/>
+    public override double Cut(double sin, double cos, double radius, out int piece)
+    {
+        if (radius <= 0)
+        {
+            return asMet.Cut(sin, cos, radius, out piece);
+        }
+
+        piece = Nothing;
+        double best = double.NegativeInfinity;
+        Span<(double Low, double High)> met = stackalloc (double, double)[_mates.Length];
+        int count = 0;
+        for (int i = 0; i < _mates.Length; i++)
+        {
+            if (_mates[i].At(sin, cos).Top(inner, outer, asMet.Middle, out double low, out double high, out double t, out int place))
+            {
+                met[count++] = (low, high);
+                if (piece == Nothing || t > best + RoundOutline.Graze)
+                {
+                    (best, piece) = (t, (10 * i) + place);
+                }
+            }
+        }
+
+        if (best < 0 && !Covers(met[..count]))
+        {
+            piece = Nothing;
+            return 0;
+        }
+
+        return best;
+    }
+
+    /// <inheritdoc/>
+    public override void Margins(double sin, double cos, double radius, Span<double> margins)
+    {
+        int next = 0;
+        Span<double> tops = stackalloc double[_mates.Length];
+        for (int i = 0; i < _mates.Length; i++)
+        {
+            Mate.HalfPlane plane = _mates[i].At(sin, cos);
+            (margins[next], margins[next + 1]) = plane.LimitDepths(inner);
+            (margins[next + 2], margins[next + 3]) = plane.LimitDepths(outer);
+            next += 4;
+            tops[i] = plane.Top(inner, outer, asMet.Middle, out _, out _, out double t, out _) ? t : double.NaN;
+        }
+
+        Differences(tops, margins[next..]);
+    }
+
+    /// <inheritdoc/>
+    public override void AddTangents(double radius, List<double> clocks)
+    {
+        asMet.AddTangents(outer, clocks);
+        if (inner > 0)
+        {
+            asMet.AddTangents(inner, clocks);
+        }
+    }
+
+    // Whether every distance from the axis meets something.
+    private bool Covers(Span<(double Low, double High)> met)
+    {
+        met.Sort();
+        double reached = inner;
+        foreach ((double low, double high) in met)
+        {
+            if (low > reached + RoundOutline.Graze)
+            {
+                return false;
+            }
+
+            reached = Math.Max(reached, high);
+        }
+
+        return reached >= outer - RoundOutline.Graze;
+    }
+}

@@ -1,0 +1,41 @@
+using FrameGen.Geometry;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Joints;
+
+/// <summary>Puts two cut ends together to a tube: length, volume, centre of mass, surface.</summary>
+internal static class TubeMeasure
+{
+    /// <summary>Measures a cut tube.</summary>
+    /// <remarks>V = ∫ (L − t_to − t_from) dA over the metal of the section, and likewise its moments.</remarks>
+    public static CutTube Measure(FrameModel model, int index, Section section, CutterEnd from, CutterEnd to)
+    {
+        Tube tube = model.Tubes[index];
+        double length = tube.Length;
+        double outer = section.OuterSize / 2;
+        double area = section.Area;
+        (EndMoments a, EndMoments b) = (from.Moments, to.Moments);
+        double volume = (area * length) - a.T - b.T;
+        double along = (area * length * length / 2) - (length * b.T) + b.HalfSquare - a.HalfSquare;
+        Vector3 across = (-(a.Cos + b.Cos) * tube.Axes.Z) + ((a.Sin + b.Sin) * tube.Axes.Y);
+        Vector3 centroid = tube.From.Point + (((along * tube.Axes.X) + across) / volume);
+        double surface = (section.Perimeter * length) - a.Skin - b.Skin;
+        double start = Least(from.Cut, outer - section.Wall);
+        double stop = length - Least(to.Cut, outer - section.Wall);
+        return new CutTube(
+            index,
+            from.Cut,
+            to.Cut,
+            start,
+            stop,
+            volume,
+            volume * model.Groups[tube.Group].Material.Density,
+            centroid,
+            surface);
+    }
+
+    // A radially cut rod reaches no farther at its axis than round it.
+    private static double Least(EndCut cut, double inner) =>
+        inner <= 0 && cut.Surface is RadialCope ? cut.Outer.Min : Math.Min(cut.Outer.Min, cut.Inner.Min);
+}

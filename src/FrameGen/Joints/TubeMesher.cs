@@ -1,0 +1,56 @@
+using FrameGen.Geometry;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Joints;
+
+/// <summary>Closed meshes of cut tubes, oriented outwards, within min(tolerance, radius / 3000) of the exact part.</summary>
+/// <remarks>
+/// The skins are cut into columns at clock angles shared by all curves, so that every edge is used by two triangles.
+/// Between the skins each cut face is a ring of quads, or several where it bends through the wall. A radially cut rod is
+/// the exception to the tolerance: its face is many-valued at the axis itself, and is closed there by a cone of a
+/// fiftieth of the radius.
+/// </remarks>
+public static class TubeMesher
+{
+    /// <summary>Share of its radius within which a rod's sag and a tube's stay.</summary>
+    private const double SagShare = 1.0 / 3000;
+
+    /// <summary>The part in its own axes: z along it, its from point at 0, the top line along x.</summary>
+    /// <param name="cut">The frame.</param>
+    /// <param name="tube">Index of the tube.</param>
+    public static TriangleMesh Mesh(CutFrame cut, int tube) =>
+        Mesh(cut, tube, static (radial, along, _) => new Vector3(radial.X, radial.Y, along));
+
+    /// <summary>The part where it stands in the frame, in global axes.</summary>
+    /// <param name="cut">The frame.</param>
+    /// <param name="tube">Index of the tube.</param>
+    public static TriangleMesh InPlace(CutFrame cut, int tube) =>
+        Mesh(cut, tube, static (radial, along, tube) =>
+            tube.From.Point + (along * tube.Axes.X) + (radial.X * tube.Axes.Z) - (radial.Y * tube.Axes.Y));
+
+    private static TriangleMesh Mesh(CutFrame cut, int index, Func<Point2, double, Tube, Vector3> place)
+    {
+        Tube tube = cut.Sized.Model.Tubes[index];
+        Section section = cut.Sized.SectionOf(index);
+        double outer = section.OuterSize / 2;
+        double inner = outer - section.Wall;
+        double sag = Math.Min(cut.Sized.Model.Fabrication.Tolerance, outer * SagShare);
+        CutTube part = cut.Tubes[index];
+        EndRings from = EndRings.Of(part.From, inner, outer, sag);
+        EndRings to = EndRings.Of(part.To, inner, outer, sag);
+        Columns columns = Columns.Of(from, to, outer, sag);
+        MeshBuilder builder = new(columns, (radial, along) => place(radial, along, tube));
+        EndLoops first = from.Loops(columns, builder, static t => t);
+        EndLoops last = to.Loops(columns, builder, t => tube.Length - t);
+        builder.Skin(first.Outer, last.Outer, outward: true);
+        if (inner > 0)
+        {
+            builder.Skin(first.Inner!, last.Inner!, outward: false);
+        }
+
+        builder.Face(first, outward: false);
+        builder.Face(last, outward: true);
+        return builder.Build();
+    }
+}

@@ -1,0 +1,83 @@
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Joints;
+
+/// <summary>Whether the cuts of a short tube's two ends run into each other on any wall line.</summary>
+internal static class TubeOverlap
+{
+    private const int Looks = 240;
+    private const int Depths = 8;
+
+    /// <summary>The largest overlap over all wall lines, mm; null where every line keeps a length.</summary>
+    public static double? Find(Tube tube, Section section, EndCut from, EndCut to)
+    {
+        // Cuts bulge within a wall by less than they vary round it: twice what the skins reach is surely clear.
+        double reach = Reach(from) + Reach(to) + (2 * section.OuterSize);
+        if (tube.Length > 2 * reach)
+        {
+            return null;
+        }
+
+        double outer = section.OuterSize / 2;
+        double worst = Crest(from.Surface, to.Surface, outer - section.Wall, outer);
+
+        // Corners are exact on the curves, and a jump may lie beside every look.
+        foreach (CurvePoint point in from.Outer.Points)
+        {
+            worst = Math.Max(worst, point.T + to.Surface.At(point.Clock, outer));
+        }
+
+        foreach (CurvePoint point in to.Outer.Points)
+        {
+            worst = Math.Max(worst, point.T + from.Surface.At(point.Clock, outer));
+        }
+
+        return worst >= tube.Length ? worst - tube.Length : null;
+    }
+
+    // The most that both cuts together take from a wall line.
+    private static double Crest(EndSurface from, EndSurface to, double inner, double outer)
+    {
+        (double worst, double worstClock, double worstRadius) = (double.NegativeInfinity, 0, outer);
+        for (int i = 0; i < Looks; i++)
+        {
+            for (int k = 0; k <= Depths; k++)
+            {
+                Try(2 * Math.PI * i / Looks, outer - ((outer - inner) * k / Depths));
+            }
+        }
+
+        // The exact crest lies between the looks: halve the stride round the best until nothing is gained.
+        double stride = 2 * Math.PI / Looks;
+        double depth = (outer - inner) / Depths;
+        for (int step = 0; step < 60; step++)
+        {
+            (double clock, double radius) = (worstClock, worstRadius);
+            bool better = Try(clock + stride, radius) | Try(clock - stride, radius) |
+                Try(clock, Math.Min(radius + depth, outer)) | Try(clock, Math.Max(radius - depth, inner));
+            if (!better)
+            {
+                (stride, depth) = (stride / 2, depth / 2);
+            }
+        }
+
+        return worst;
+
+        bool Try(double clock, double radius)
+        {
+            double taken = from.At(clock, radius) + to.At(clock, radius);
+            if (taken <= worst)
+            {
+                return false;
+            }
+
+            (worst, worstClock, worstRadius) = (taken, clock, radius);
+            return true;
+        }
+    }
+
+    private static double Reach(EndCut cut) =>
+        Math.Max(0, Math.Max(cut.Outer.Max, cut.Inner.Max)) +
+        Math.Max(cut.Outer.Max - cut.Outer.Min, cut.Inner.Max - cut.Inner.Min);
+}
