@@ -1,0 +1,98 @@
+using FrameGen.Geometry;
+using FrameGen.Joints;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+using FrameGen.Sizing;
+using FrameGen.Spec;
+
+namespace FrameGen.Fabrication;
+
+/// <summary>Turns a cut frame into the shop's parts and totals.</summary>
+public static class ShopPlanner
+{
+    /// <summary>Plans the shop's work.</summary>
+    /// <remarks>
+    /// Every tube is a part of its own, marked with its name (<see cref="Marks"/>). Parts stand in the order a shop cuts them: by section (shape,
+    /// then size), by material, long ones first, then by name. Lengths are compared as the cut list prints them, so that
+    /// rounding noise between mirrored twins does not decide.
+    /// </remarks>
+    public static ShopPackage Plan(CutFrame cut)
+    {
+        SizedFrame sized = cut.Sized;
+        FrameModel model = sized.Model;
+        IReadOnlyList<string> marks = Marks.Of(model);
+        IReadOnlyList<Part> parts =
+        [
+            .. cut.Tubes
+                .OrderBy(t => sized.SectionOf(t.Tube).Shape, StringComparer.Ordinal)
+                .ThenBy(t => sized.SectionOf(t.Tube).Height)
+                .ThenBy(t => sized.SectionOf(t.Tube).Width)
+                .ThenBy(t => sized.SectionOf(t.Tube).Wall)
+                .ThenBy(t => model.Groups[model.Tubes[t.Tube].Group].Material.Name, StringComparer.Ordinal)
+                .ThenByDescending(t => Math.Round(t.CutLength, 3))
+                .ThenBy(t => model.Tubes[t.Tube].Name, StringComparer.Ordinal)
+                .Select(t => new Part(marks[t.Tube], [t.Tube], t, SeatTwist.Degrees(t), Note(sized, t))),
+        ];
+        return new ShopPackage(cut, parts, Sum(cut));
+    }
+
+    private static Totals Sum(CutFrame cut)
+    {
+        double mass = 0;
+        double weld = 0;
+        double area = 0;
+        Vector3 moment = Vector3.Zero;
+        foreach (CutTube tube in cut.Tubes)
+        {
+            mass += tube.MassKg;
+            moment += tube.MassKg * tube.Centroid;
+            area += tube.OuterArea;
+            weld += WeldLength(tube.Tube, tube.From) + WeldLength(tube.Tube, tube.To);
+        }
+
+        return new Totals(mass, mass > 0 ? moment / mass : Vector3.Zero, weld, area);
+    }
+
+    /// <summary>The outer curve of a coped or mitred end; a miter is counted at the first of its two tubes only.</summary>
+    private static double WeldLength(int tube, EndCut end) => end.Kind switch
+    {
+        CutKind.Cope => end.OuterLength,
+        CutKind.Miter when end.Contacts.All(c => c.Tube > tube) => end.OuterLength,
+        _ => 0,
+    };
+
+    private static string Note(SizedFrame sized, CutTube tube)
+    {
+        var notes = new List<string>();
+        if (sized.Model.Fabrication.Cut == CutMode.Contour && (tube.From.Kind == CutKind.Cope || tube.To.Kind == CutKind.Cope))
+        {
+            notes.Add("contour cut");
+        }
+
+        if (WiderThanSeat(sized, tube.Tube, tube.From))
+        {
+            notes.Add("from end wider than its seat: fill by hand");
+        }
+
+        if (WiderThanSeat(sized, tube.Tube, tube.To))
+        {
+            notes.Add("to end wider than its seat: fill by hand");
+        }
+
+        return string.Join("; ", notes);
+    }
+
+    /// <summary>True where half the tube's width and the offset reach past the seat's side, by more than rounding.</summary>
+    private static bool WiderThanSeat(SizedFrame sized, int tube, EndCut end)
+    {
+        if (end.Kind != CutKind.Cope || end.Contacts.Count == 0)
+        {
+            return false;
+        }
+
+        Contact seat = end.Contacts[0];
+        Section own = sized.SectionOf(tube);
+        Section mate = sized.SectionOf(seat.Tube);
+        return (own.OuterSize / 2) + seat.Offset > (mate.OuterSize / 2) + Lengths.Same;
+    }
+}

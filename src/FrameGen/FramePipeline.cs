@@ -1,0 +1,88 @@
+using System.Text;
+using FrameGen.Diagnostics;
+using FrameGen.Fabrication;
+using FrameGen.Joints;
+using FrameGen.Model;
+using FrameGen.Output;
+using FrameGen.Output.Drawings;
+using FrameGen.Sizing;
+using FrameGen.Spec;
+
+namespace FrameGen;
+
+/// <summary>What a long job is doing.</summary>
+/// <param name="Doing">In words: <c>choosing sections</c>.</param>
+/// <param name="Done">Steps done; 0 where they are not counted.</param>
+/// <param name="Total">Steps in all; 0 where they are not counted.</param>
+public readonly record struct PipelineProgress(string Doing, long Done, long Total);
+
+/// <summary>The way from a spec to its papers, one stage after the other; each makes its record from the one before.</summary>
+/// <param name="diagnostics">What the stages have to say. A stage that reports an error returns null, and the way ends there.</param>
+/// <param name="progress">Told when a stage begins, and now and then within it; may be null.</param>
+public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<PipelineProgress>? progress = null)
+{
+    /// <summary>Reads a spec.</summary>
+    /// <exception cref="IOException">The file can't be read.</exception>
+    public FrameSpec? Read(string path) => At("reading the spec", () => SpecReader.Read(path, diagnostics));
+
+    /// <summary>Reads a spec from wherever its files are.</summary>
+    /// <param name="path">The root file.</param>
+    /// <param name="content">Gives the bytes of a file by its path, or null where there is none.</param>
+    public FrameSpec? Read(string path, Func<string, byte[]?> content) =>
+        At("reading the spec", () => SpecReader.Read(path, content, diagnostics));
+
+    /// <summary>Gives the spec its meaning.</summary>
+    public FrameModel? Resolve(FrameSpec? spec) =>
+        spec is null ? null : At("working out the frame", () => ModelResolver.Resolve(spec, diagnostics));
+
+    /// <summary>Chooses the sections.</summary>
+    public SizedFrame? Size(FrameModel? model) =>
+        model is null ? null : At("choosing sections", () => SectionSizer.Size(model, diagnostics, Designs()));
+
+    /// <summary>Cuts the tube ends.</summary>
+    public CutFrame? Cope(SizedFrame? sized) =>
+        sized is null ? null : At("cutting tube ends", () => EndCoper.Cope(sized, diagnostics));
+
+    /// <summary>Plans the shop's work.</summary>
+    public ShopPackage? Plan(CutFrame? cut) =>
+        cut is null ? null : At("planning the parts", () => ShopPlanner.Plan(cut));
+
+    /// <summary>Lays out every file.</summary>
+    /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>
+    public IReadOnlyList<OutputFile>? Papers(ShopPackage? package) =>
+        package is null ? null : At("drawing the papers", () =>
+        {
+            NoteUnprinted(package.Cut.Sized.Model);
+            return PaperSet.Create(package);
+        });
+
+    /// <summary>The whole way from a spec that has been read.</summary>
+    /// <returns>Every file of the output folder, or null when an error was reported.</returns>
+    public IReadOnlyList<OutputFile>? Build(FrameSpec? spec) => Papers(Plan(Cope(Size(Resolve(spec)))));
+
+    private void NoteUnprinted(FrameModel model)
+    {
+        const int AtMost = 5;
+        IReadOnlyList<Rune> unprinted = TemplatesPdf.Unprinted(model);
+        if (unprinted.Count > 0)
+        {
+            string letters = string.Join(' ', unprinted.Take(AtMost)) + (unprinted.Count > AtMost ? " ..." : string.Empty);
+            diagnostics.Note(null, $"templates.pdf prints ? for what its font lacks of the title and revision: {letters}; all other papers keep it");
+        }
+    }
+
+    private T? At<T>(string doing, Func<T?> stage)
+        where T : class
+    {
+        progress?.Report(new PipelineProgress(doing, 0, 0));
+        return stage();
+    }
+
+    private DesignProgress? Designs() => progress is null ? null : new DesignProgress(progress);
+
+    private sealed class DesignProgress(IProgress<PipelineProgress> progress) : IProgress<SizingProgress>
+    {
+        public void Report(SizingProgress value) =>
+            progress.Report(new PipelineProgress("choosing sections", value.Done, value.Total));
+    }
+}

@@ -1,0 +1,162 @@
+using System.Text.Json;
+using FrameGen.Fabrication;
+using FrameGen.Geometry;
+using FrameGen.Joints;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+using FrameGen.Sizing;
+
+namespace FrameGen.Output;
+
+/// <summary>frame.json: everything computed.</summary>
+/// <remarks>
+/// What is not computed yet (the stock plan, and with it the cost of priced bars) has no key:
+/// null would say that it was looked for and not found.
+/// </remarks>
+public static class FrameJson
+{
+    private const int StepDegrees = 5;
+
+    /// <summary>Writes the file.</summary>
+    public static byte[] Write(ShopPackage package) => JsonText.Bytes(json => WriteObject(json, package));
+
+    /// <summary>Writes the whole as one object.</summary>
+    public static void WriteObject(Utf8JsonWriter json, ShopPackage package)
+    {
+        json.WriteStartObject();
+        json.WriteString("format", "framegen-frame/1");
+        SizingJson.WriteProperties(json, package.Cut.Sized);
+        WriteTubes(json, package);
+        WriteParts(json, package);
+        WriteTotals(json, package);
+        json.WriteEndObject();
+    }
+
+    /// <summary>Writes what is known before the ends are cut, as one object.</summary>
+    public static void WriteObject(Utf8JsonWriter json, SizedFrame sized)
+    {
+        json.WriteStartObject();
+        json.WriteString("format", "framegen-frame/1");
+        SizingJson.WriteProperties(json, sized);
+        json.WriteEndObject();
+    }
+
+    private static void WriteTubes(Utf8JsonWriter json, ShopPackage package)
+    {
+        SizedFrame sized = package.Cut.Sized;
+        string[] marks = PartMarks.ByTube(package);
+        json.WriteStartObject("tubes");
+        foreach (CutTube cut in package.Cut.Tubes)
+        {
+            Tube tube = sized.Model.Tubes[cut.Tube];
+            json.WriteStartObject(tube.Name);
+            json.WriteString("mark", marks[cut.Tube]);
+            json.WriteString("group", sized.Model.Groups[tube.Group].Name);
+            json.Number("axis_length_mm", tube.Length);
+            json.Number("cut_length_mm", cut.CutLength);
+            json.Number("volume_mm3", cut.Volume);
+            json.Number("mass_kg", cut.MassKg);
+            json.Vector("top", tube.Axes.Z, 1);
+            json.WriteStartObject("ends");
+            WriteEnd(json, sized, cut, End.From);
+            WriteEnd(json, sized, cut, End.To);
+            json.WriteEndObject();
+            json.WriteEndObject();
+        }
+
+        json.WriteEndObject();
+    }
+
+    private static void WriteEnd(Utf8JsonWriter json, SizedFrame sized, CutTube tube, End end)
+    {
+        EndCut cut = tube[end];
+        json.WriteStartObject(EndText.Name(end));
+        json.WriteString("cut", EndText.Kind(cut.Kind));
+        json.WriteStartArray("by");
+        foreach (Contact mate in cut.Contacts)
+        {
+            json.WriteStartObject();
+            json.WriteString("tube", sized.Model.Tubes[mate.Tube].Name);
+            json.Number("angle_deg", double.RadiansToDegrees(mate.Angle));
+            json.Number("offset_mm", mate.Offset);
+            json.Number("clock_deg", mate.Clock is { } clock ? ClockDegrees(clock, mate.SquareCrossing ? 180 : 360) : null);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+        json.NumberRows("curve", Curve(sized, tube, end));
+        json.WriteEndObject();
+    }
+
+    /// <summary>In [0, <paramref name="turn"/>): what nine digits round to a whole turn is 0.</summary>
+    private static double ClockDegrees(double clock, double turn)
+    {
+        double degrees = double.RadiansToDegrees(clock);
+        return degrees > turn - 5e-7 ? 0 : degrees;
+    }
+
+    /// <summary>Rows of clock angle in degrees, outer y and inner y, every 5 degrees from −180 to 175.</summary>
+    private static IEnumerable<double[]> Curve(SizedFrame sized, CutTube tube, End end)
+    {
+        EndSurface surface = tube[end].Surface;
+        Section section = sized.SectionOf(tube.Tube);
+        double outer = section.OuterSize / 2;
+        double inner = outer - section.Wall;
+        double length = sized.Model.Tubes[tube.Tube].Length;
+        double Y(double t) => JsonText.Quiet(end == End.From ? t : length - t, outer);
+        for (int degrees = -180; degrees < 180; degrees += StepDegrees)
+        {
+            double clock = double.DegreesToRadians(degrees);
+            double outerY = Y(surface.At(clock, outer));
+            double innerY = Y(surface.At(clock, inner));
+            yield return [degrees, outerY, innerY];
+        }
+    }
+
+    private static void WriteParts(Utf8JsonWriter json, ShopPackage package)
+    {
+        FrameModel model = package.Cut.Sized.Model;
+        json.WriteStartArray("parts");
+        foreach (Part part in package.Parts)
+        {
+            json.WriteStartObject();
+            json.WriteString("mark", part.Mark);
+            json.WriteNumber("quantity", part.Quantity);
+            json.Strings("tubes", part.Tubes.Select(t => model.Tubes[t].Name));
+            json.WriteString("hand", string.Empty);
+            json.Number("cut_length_mm", part.Drawn.CutLength);
+            json.Number("mass_kg", part.Drawn.MassKg);
+            json.WriteStartArray("placed");
+            foreach (int tube in part.Tubes)
+            {
+                json.WriteStartObject();
+                json.WriteString("tube", model.Tubes[tube].Name);
+                json.WriteNumber("turn_deg", 0);
+                json.WriteBoolean("swapped", value: false);
+                json.WriteEndObject();
+            }
+
+            json.WriteEndArray();
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+    }
+
+    private static void WriteTotals(Utf8JsonWriter json, ShopPackage package)
+    {
+        Totals totals = package.Totals;
+        Vector3 centre = totals.CentreOfMass;
+        json.WriteStartObject("totals");
+        json.Number("mass_kg", totals.MassKg);
+        json.Vector("centre_of_mass_mm", centre, Math.Max(1, centre.Length));
+        json.Number("weld_length_mm", totals.WeldLength);
+        json.Number("outer_area_m2", totals.OuterArea / 1e6);
+        if (package.Cut.Sized.Chosen.All(c => c.PricePerMetre is null))
+        {
+            json.WriteNull("cost");
+        }
+
+        json.WriteEndObject();
+    }
+}

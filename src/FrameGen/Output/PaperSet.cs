@@ -1,0 +1,28 @@
+using FrameGen.Fabrication;
+
+namespace FrameGen.Output;
+
+/// <summary>Every file of an output folder.</summary>
+public static class PaperSet
+{
+    /// <summary>Lays out all papers of a package, the manifest last.</summary>
+    /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>
+    public static IReadOnlyList<OutputFile> Create(ShopPackage package)
+    {
+        var (copies, includes) = SpecCopies.Make(package.Cut.Sized.Model.Spec);
+        var files = new List<OutputFile>
+        {
+            OutputFile.FromText("cut-list.csv", CutListCsv.Write(package)),
+            OutputFile.FromText("cut-list.md", TextTemplate.Render("cut-list.md", CutListModel.From(package))),
+            OutputFile.FromText("ends.csv", EndsCsv.Write(package)),
+            OutputFile.FromText("setup.csv", SetupCsv.Write(package)),
+            new("frame.json", FrameJson.Write(package)),
+        };
+        files.AddRange(ShapeFiles.Create(package));
+        files.AddRange(copies);
+        SelfCheck.Totals(package);
+        SelfCheck.Equilibrium(package.Cut.Sized);
+        files.Add(new OutputFile(Manifest.FileName, Manifest.Of(package.Cut.Sized.Model.Spec, includes, files).Write()));
+        return files;
+    }
+}

@@ -1,0 +1,40 @@
+using FrameGen.Fabrication;
+using FrameGen.Formats.Drawings;
+using FrameGen.Formats.Dxf;
+using FrameGen.Formats.Stl;
+using FrameGen.Geometry;
+using FrameGen.Joints;
+using FrameGen.Output.Drawings;
+
+namespace FrameGen.Output;
+
+/// <summary>The files that show shapes: developed patterns, templates, meshes. Each is checked as it is made.</summary>
+internal static class ShapeFiles
+{
+    /// <summary>Makes them, part by part.</summary>
+    /// <exception cref="SelfCheckException">A drawing or a mesh does not agree with its part.</exception>
+    public static IEnumerable<OutputFile> Create(ShopPackage package)
+    {
+        CutFrame cut = package.Cut;
+        foreach (Part part in package.Parts)
+        {
+            SelfCheck.NoInterference(cut, part.Drawn);
+            Drawing developed = DevelopedPattern.Draw(package, part);
+            SelfCheck.DevelopedWidth(part.Mark, developed, cut.Sized.SectionOf(part.Drawn.Tube));
+            yield return new OutputFile($"developed/{part.Mark}.dxf", DxfWriter.Write(developed));
+            if (TemplatePieces.Draw(package, part) is { } pieces)
+            {
+                yield return new OutputFile($"templates/{part.Mark}.dxf", DxfWriter.Write(pieces));
+            }
+
+            TriangleMesh mesh = TubeMesher.Mesh(cut, part.Drawn.Tube);
+            SelfCheck.Mesh(part.Mark, mesh, part.Drawn.Volume);
+            yield return new OutputFile($"preview/{part.Mark}.stl", StlWriter.Write(mesh));
+        }
+
+        yield return new OutputFile(
+            "preview/frame.stl", StlWriter.Write([.. cut.Tubes.Select(t => TubeMesher.InPlace(cut, t.Tube))]));
+
+        yield return new OutputFile("templates.pdf", TemplatesPdf.Write(package));
+    }
+}
