@@ -1,0 +1,1 @@
+return FrameGen.Cli.CommandLine.Run(args, Console.Out, Console.Error);
