@@ -104,7 +104,6 @@ internal sealed class EndRings
                     double slope = (atHigh - atLow) / (high - low);
                     worst = Math.Max(worst, Math.Abs(atMiddle - ((atLow + atHigh) / 2)) / Math.Sqrt(1 + (slope * slope)));
                 }
-
                 else if (i == 1 && inner <= 0)
                 {
                     // A corner or a step beside a rod's axis, where the face is closed by a cone: keep that small.

@@ -62,12 +62,13 @@ internal static class UnmetReport
         }
     }
 
-    // 4.2 mm, 40 % over the limit of 3 mm.
+    // 4.2 mm, 40 % over the limit of 3 mm; 120 mm, 40 times the limit of 3 mm.
     private static string Amount(TargetResult result)
     {
         bool isMinimum = result.Value < result.Limit;
         double off = Math.Abs(result.Value - result.Limit) / result.Limit;
-        return $"{Wording.Quantity(result.Value, result.Unit)}, {Wording.Percent(off)} {(isMinimum ? "below" : "over")} the limit of {Wording.Quantity(result.Limit, result.Unit)}";
+        string measure = isMinimum ? $"{Wording.Percent(off)} below" : off < 3 ? $"{Wording.Percent(off)} over" : $"{Wording.Number(off + 1)} times";
+        return $"{Wording.Quantity(result.Value, result.Unit)}, {measure} the limit of {Wording.Quantity(result.Limit, result.Unit)}";
     }
 
     private static string Sizes(DesignAnalysis analysis)
