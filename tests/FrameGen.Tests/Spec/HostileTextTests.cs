@@ -1,4 +1,3 @@
-using System.Diagnostics;
 using System.Text;
 using FrameGen.Diagnostics;
 using FrameGen.Spec;
@@ -6,7 +5,7 @@ using Xunit;
 
 namespace FrameGen.Tests.Spec;
 
-/// <summary>A mebibyte of the worst that each part of the reader could be given is answered in time.</summary>
+/// <summary>A mebibyte of the worst that each part of the reader could be given is answered with errors, a bounded number of them.</summary>
 public class HostileTextTests
 {
     private const int Full = (1 << 20) - 400;
@@ -41,7 +40,7 @@ public class HostileTextTests
 
     [Theory]
     [MemberData(nameof(Texts))]
-    public void Is_answered_with_errors_in_time(string what, string start, string repeated)
+    public void Is_answered_with_errors(string what, string start, string repeated)
     {
         var text = new StringBuilder($"framegen: 1\n{start}");
         for (int i = 0; text.Length < Full; i++)
@@ -50,25 +49,21 @@ public class HostileTextTests
         }
 
         var diagnostics = new DiagnosticList();
-        var clock = Stopwatch.StartNew();
         byte[] bytes = Encoding.UTF8.GetBytes(text.ToString());
         FrameSpec? spec = SpecReader.Read("a.yaml", path => path is "a.yaml" ? bytes : null, diagnostics);
 
-        // A second or so, more on a busy machine; what grows with the square of the text takes minutes.
-        Assert.True(clock.Elapsed < TimeSpan.FromSeconds(60), $"{what}: {clock.Elapsed}");
-        Assert.Null(spec);
+        // No clock here: what grows with the square of such a text takes minutes, and shows in how long the tests take.
+        Assert.True(spec is null, what);
         Assert.InRange(diagnostics.Count, 1, 201);
     }
 
     [Fact]
-    public void Thousands_of_unknown_parameters_are_told_in_time_and_not_all()
+    public void Of_thousands_of_unknown_parameters_not_all_are_told()
     {
         string parameters = string.Concat(Enumerable.Range(0, 40_000).Select(i => $"  p{i}: =q{i}\n"));
         FrameSpec spec = SpecText.Sound(SpecText.Small + "parameters:\n" + parameters);
         var diagnostics = new DiagnosticList();
-        var clock = Stopwatch.StartNew();
         ParameterTable.Evaluate(spec.Parameters, diagnostics);
-        Assert.True(clock.Elapsed < TimeSpan.FromSeconds(60), $"{clock.Elapsed}");
         Assert.Equal(201, diagnostics.Count);
     }
 }

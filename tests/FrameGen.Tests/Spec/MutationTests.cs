@@ -1,4 +1,3 @@
-using System.Diagnostics;
 using System.Text;
 using FrameGen.Diagnostics;
 using FrameGen.Spec;
@@ -70,9 +69,7 @@ public class MutationTests
         for (int round = 0; round < 1500; round++)
         {
             byte[] text = Mutate(good, ref state);
-            var clock = Stopwatch.StartNew();
             DiagnosticList diagnostics = Read(text);
-            Assert.InRange(clock.Elapsed.TotalSeconds, 0, 30);
             broken += diagnostics.Count > 0 ? 1 : 0;
             Assert.All(diagnostics, error => Assert.False(string.IsNullOrWhiteSpace(error.Message)));
             Assert.All(diagnostics.Where(error => error.At is not null), error => Assert.True(error.At is { Line: > 0, Column: > 0 }, error.ToString()));
