@@ -2,10 +2,9 @@ using FrameGen.Geometry;
 
 namespace FrameGen.Joints;
 
-/// <summary>Puts a tube's mesh together column by column.</summary>
+/// <summary>Puts a tube's mesh together column by column: x to the top line, y to clock 90°, z along.</summary>
 /// <param name="columns">Its columns.</param>
-/// <param name="place">From a point of the cross-section (x to the top line, y to clock 90°) and the distance along, to space.</param>
-internal sealed class MeshBuilder(Columns columns, Func<Point2, double, Vector3> place)
+internal sealed class MeshBuilder(Columns columns)
 {
     private readonly List<Vector3> _vertices = [];
     private readonly List<int> _triangles = [];
@@ -151,7 +150,7 @@ internal sealed class MeshBuilder(Columns columns, Func<Point2, double, Vector3>
 
     private int Add(Point2 radial, double along)
     {
-        _vertices.Add(place(radial, along));
+        _vertices.Add(new Vector3(radial.X, radial.Y, along));
         return _vertices.Count - 1;
     }
 }

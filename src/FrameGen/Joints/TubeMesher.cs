@@ -18,18 +18,8 @@ public static class TubeMesher
 
     /// <summary>The part in its own axes: z along it, its from point at 0, the top line along x.</summary>
     /// <param name="cut">The frame.</param>
-    /// <param name="tube">Index of the tube.</param>
-    public static TriangleMesh Mesh(CutFrame cut, int tube) =>
-        Mesh(cut, tube, static (radial, along, _) => new Vector3(radial.X, radial.Y, along));
-
-    /// <summary>The part where it stands in the frame, in global axes.</summary>
-    /// <param name="cut">The frame.</param>
-    /// <param name="tube">Index of the tube.</param>
-    public static TriangleMesh InPlace(CutFrame cut, int tube) =>
-        Mesh(cut, tube, static (radial, along, tube) =>
-            tube.From.Point + (along * tube.Axes.X) + (radial.X * tube.Axes.Z) - (radial.Y * tube.Axes.Y));
-
-    private static TriangleMesh Mesh(CutFrame cut, int index, Func<Point2, double, Tube, Vector3> place)
+    /// <param name="index">Index of the tube.</param>
+    public static TriangleMesh Mesh(CutFrame cut, int index)
     {
         Tube tube = cut.Sized.Model.Tubes[index];
         Section section = cut.Sized.SectionOf(index);
@@ -40,7 +30,7 @@ public static class TubeMesher
         EndRings from = EndRings.Of(part.From, inner, outer, sag);
         EndRings to = EndRings.Of(part.To, inner, outer, sag);
         Columns columns = Columns.Of(from, to, outer, sag);
-        MeshBuilder builder = new(columns, (radial, along) => place(radial, along, tube));
+        MeshBuilder builder = new(columns);
         EndLoops first = from.Loops(columns, builder, static t => t);
         EndLoops last = to.Loops(columns, builder, t => tube.Length - t);
         builder.Skin(first.Outer, last.Outer, outward: true);
@@ -52,5 +42,14 @@ public static class TubeMesher
         builder.Face(first, outward: false);
         builder.Face(last, outward: true);
         return builder.Build();
+    }
+
+    /// <summary>The part where it stands in the frame, in global axes.</summary>
+    /// <param name="tube">Its tube.</param>
+    /// <param name="own">The part in its own axes.</param>
+    public static TriangleMesh InPlace(Tube tube, TriangleMesh own)
+    {
+        (Vector3 start, TubeAxes axes) = (tube.From.Point, tube.Axes);
+        return own with { Vertices = [.. own.Vertices.Select(v => start + (v.Z * axes.X) + (v.X * axes.Z) - (v.Y * axes.Y))] };
     }
 }

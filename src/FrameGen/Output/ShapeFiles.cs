@@ -16,6 +16,7 @@ internal static class ShapeFiles
     public static IEnumerable<OutputFile> Create(ShopPackage package)
     {
         CutFrame cut = package.Cut;
+        var meshes = new TriangleMesh?[cut.Tubes.Count];
         foreach (Part part in package.Parts)
         {
             SelfCheck.NoInterference(cut, part.Drawn);
@@ -27,14 +28,17 @@ internal static class ShapeFiles
                 yield return new OutputFile($"templates/{part.Mark}.dxf", DxfWriter.Write(pieces));
             }
 
-            TriangleMesh mesh = TubeMesher.Mesh(cut, part.Drawn.Tube);
+            TriangleMesh mesh = meshes[part.Drawn.Tube] = TubeMesher.Mesh(cut, part.Drawn.Tube);
             SelfCheck.Mesh(part.Mark, mesh, part.Drawn.Volume);
             yield return new OutputFile($"preview/{part.Mark}.stl", StlWriter.Write(mesh));
         }
 
         yield return new OutputFile(
-            "preview/frame.stl", StlWriter.Write([.. cut.Tubes.Select(t => TubeMesher.InPlace(cut, t.Tube))]));
+            "preview/frame.stl", StlWriter.Write([.. cut.Tubes.Select(t => InPlace(t.Tube))]));
 
         yield return new OutputFile("templates.pdf", TemplatesPdf.Write(package));
+
+        TriangleMesh InPlace(int tube) =>
+            TubeMesher.InPlace(cut.Sized.Model.Tubes[tube], meshes[tube] ?? TubeMesher.Mesh(cut, tube));
     }
 }

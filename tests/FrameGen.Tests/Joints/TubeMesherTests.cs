@@ -98,7 +98,7 @@ public class TubeMesherTests
     {
         CutFrame cut = Cluster.Scatter(3, CutMode.Radial, through: false).Frame.Cut();
         TriangleMesh own = TubeMesher.Mesh(cut, 1);
-        TriangleMesh placed = TubeMesher.InPlace(cut, 1);
+        TriangleMesh placed = TubeMesher.InPlace(cut.Sized.Model.Tubes[1], TubeMesher.Mesh(cut, 1));
         Tube tube = cut.Sized.Model.Tubes[1];
         Assert.Equal(own.Triangles, placed.Triangles);
         for (int i = 0; i < own.Vertices.Count; i++)
@@ -116,7 +116,7 @@ public class TubeMesherTests
     public void Cut_faces_stand_on_the_mate()
     {
         CutFrame cut = Tee.Frame(19.05, new RoundTube(25.4, 4), Math.PI / 3, 2).Cut();
-        TriangleMesh mesh = TubeMesher.InPlace(cut, 1);
+        TriangleMesh mesh = TubeMesher.InPlace(cut.Sized.Model.Tubes[1], TubeMesher.Mesh(cut, 1));
         double sag = 12.7 / 3000;
         int onFace = 0;
         for (int i = 0; i < mesh.Triangles.Count; i += 3)
