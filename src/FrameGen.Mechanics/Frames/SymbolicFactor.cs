@@ -69,17 +69,24 @@ internal sealed class SymbolicFactor
     /// <param name="neighbours">Symmetric adjacency, without the node itself and without repeats.</param>
     public static SymbolicFactor Build(Vector3[] positions, int[] starts, int[] neighbours)
     {
-        var tree = EliminationTree.Build(MinimumDegree.Order(positions.Length, starts, neighbours), starts, neighbours);
+        int count = positions.Length;
+        var tree = EliminationTree.Build(MinimumDegree.Order(count, starts, neighbours), starts, neighbours);
         double work = WorkOf(tree);
-        if (positions.Length > SmallFrame)
+        if (count > SmallFrame)
         {
-            // Solid lattices are better cut in two; long thin frames and most others are not. The pattern tells.
-            var cut = EliminationTree.Build(NestedDissection.Order(positions, starts, neighbours), starts, neighbours);
-            double workOfCut = WorkOf(cut);
-            (tree, work) = workOfCut < work ? (cut, workOfCut) : (tree, work);
+            // Solid lattices are better cut in two, long ones swept from end to end, most others neither. The pattern tells.
+            Try(NestedDissection.Order(positions, starts, neighbours));
+            Try(SweepOrder.Order(count, starts, neighbours));
         }
 
         return new SymbolicFactor(tree.Order, Gather(tree)) { Work = work };
+
+        void Try(int[] order)
+        {
+            var other = EliminationTree.Build(order, starts, neighbours);
+            double workOfOther = WorkOf(other);
+            (tree, work) = workOfOther < work ? (other, workOfOther) : (tree, work);
+        }
     }
 
     private static double WorkOf(EliminationTree tree) =>

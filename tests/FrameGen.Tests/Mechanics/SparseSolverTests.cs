@@ -86,6 +86,7 @@ public class SparseSolverTests
         double dissection = Fill(NestedDissection.Order(positions, starts, list));
         Assert.InRange(degree, 1, 0.5 * band);
         Assert.InRange(dissection, 1, 0.5 * band);
+        Assert.InRange(Fill(SweepOrder.Order(Count, starts, list)), 1, band);
 
         double Fill(int[] order)
         {
@@ -119,6 +120,35 @@ public class SparseSolverTests
             Vector3[] positions = [.. Enumerable.Range(0, Count).Select(k => new Vector3(k % 7, k % 3, k % 5))];
             Assert.Equal(Enumerable.Range(0, Count), MinimumDegree.Order(Count, starts, neighbours).Order());
             Assert.Equal(Enumerable.Range(0, Count), NestedDissection.Order(positions, starts, neighbours).Order());
+            Assert.Equal(Enumerable.Range(0, Count), SweepOrder.Order(Count, starts, neighbours).Order());
+        }
+    }
+
+    // A ladder whose nodes come in any order: a sweep along it is never more than two nodes wide.
+    [Fact]
+    public void A_sweep_finds_the_ends_of_a_ladder()
+    {
+        const int Rungs = 50;
+        int[] number = [.. Enumerable.Range(0, 2 * Rungs).Select(k => 37 * k % (2 * Rungs))];
+        var joined = new SortedSet<(int, int)>();
+        for (int rung = 0; rung < Rungs; rung++)
+        {
+            Join(2 * rung, (2 * rung) + 1);
+            for (int side = 0; side < 2 && rung + 1 < Rungs; side++)
+            {
+                Join((2 * rung) + side, (2 * rung) + side + 2);
+            }
+        }
+
+        int[] starts = [.. Enumerable.Range(0, (2 * Rungs) + 1).Select(k => joined.Count(e => e.Item1 < k))];
+        int[] neighbours = [.. joined.Select(e => e.Item2)];
+        var tree = EliminationTree.Build(SweepOrder.Order(2 * Rungs, starts, neighbours), starts, neighbours);
+        Assert.InRange(tree.Rows.Max(rows => rows.Length), 1, 2);
+
+        void Join(int i, int j)
+        {
+            joined.Add((number[i], number[j]));
+            joined.Add((number[j], number[i]));
         }
     }
 
