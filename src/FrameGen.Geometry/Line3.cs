@@ -18,4 +18,21 @@ public readonly record struct Line3(Vector3 Point, Vector3 Direction)
             ? Direction.Cross(between).Length
             : Math.Abs(between.Dot(normal)) / sine;
     }
+
+    /// <summary>
+    /// Unit vector square to two lines; for lines that run along each other the one from the first to the second, square to the first;
+    /// null for lines that lie on each other.
+    /// </summary>
+    public static Vector3? CommonNormal(Line3 one, Line3 other)
+    {
+        Vector3 normal = one.Direction.Cross(other.Direction);
+        if (normal.Length >= ParallelSine)
+        {
+            return normal.Normalized();
+        }
+
+        Vector3 between = other.Point - one.Point;
+        Vector3 apart = between - (between.Dot(one.Direction) * one.Direction);
+        return apart.Length > 1e-9 ? apart.Normalized() : null;
+    }
 }

@@ -1,4 +1,5 @@
 using System.Globalization;
+using FrameGen.Geometry;
 
 namespace FrameGen.Mechanics.Sections;
 
@@ -16,10 +17,17 @@ public sealed record Rod : Section
         }
 
         Diameter = diameter;
+        (Outline, Bore) = (new RoundOutline(diameter / 2), new RoundOutline(0));
     }
 
     /// <summary>D, mm.</summary>
     public double Diameter { get; }
+
+    /// <inheritdoc/>
+    public override Outline Outline { get; }
+
+    /// <inheritdoc/>
+    public override Outline Bore { get; }
 
     /// <inheritdoc/>
     public override string Name => string.Create(CultureInfo.InvariantCulture, $"rod {Diameter:0.####} mm");

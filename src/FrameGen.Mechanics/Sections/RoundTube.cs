@@ -1,4 +1,5 @@
 using System.Globalization;
+using FrameGen.Geometry;
 
 namespace FrameGen.Mechanics.Sections;
 
@@ -19,6 +20,7 @@ public sealed record RoundTube : Section
         }
 
         (OutsideDiameter, Wall) = (outsideDiameter, wall);
+        (Outline, Bore) = (new RoundOutline(outsideDiameter / 2), new RoundOutline((outsideDiameter / 2) - wall));
     }
 
     /// <summary>D, mm.</summary>
@@ -29,6 +31,12 @@ public sealed record RoundTube : Section
 
     /// <inheritdoc/>
     public override double Wall { get; }
+
+    /// <inheritdoc/>
+    public override Outline Outline { get; }
+
+    /// <inheritdoc/>
+    public override Outline Bore { get; }
 
     /// <inheritdoc/>
     public override string Name => string.Create(CultureInfo.InvariantCulture, $"round {OutsideDiameter:0.####} x {Wall:0.####} mm");

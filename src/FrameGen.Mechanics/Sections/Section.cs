@@ -1,7 +1,9 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Mechanics.Sections;
 
 /// <summary>
-/// A tube's cross-section. Local axes as in <see cref="FrameGen.Geometry.TubeAxes"/>: z towards the top line, y across.
+/// A tube's cross-section. Local axes as in <see cref="TubeAxes"/>: z towards the top line, y across.
 /// Lengths mm, areas mm², second moments mm⁴.
 /// </summary>
 public abstract record Section
@@ -20,6 +22,12 @@ public abstract record Section
 
     /// <summary>Wall thickness, mm; the radius for a rod.</summary>
     public abstract double Wall { get; }
+
+    /// <summary>The outer skin, seen along the tube.</summary>
+    public abstract Outline Outline { get; }
+
+    /// <summary>The bore; a point for a rod.</summary>
+    public abstract Outline Bore { get; }
 
     /// <summary>Area of metal, mm².</summary>
     public abstract double Area { get; }
