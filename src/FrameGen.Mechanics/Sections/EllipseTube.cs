@@ -6,8 +6,8 @@ namespace FrameGen.Mechanics.Sections;
 /// <summary>Elliptic tube of constant wall: outside an ellipse, inside the curve that runs beside it at the wall's distance.</summary>
 /// <remarks>
 /// <para>The inside is no ellipse; what a mill makes by drawing a round tube flat has the same wall everywhere. With P the perimeter of the
-/// ellipse, A = P t − π t², exact for a curve beside another as long as t stays below the smallest radius of curvature. P and
-/// the second moments are integrated numerically, to 1e-13; what has a closed form is used so.</para>
+/// ellipse, A = P t − π t², exact for a curve beside another as long as t stays below the smallest radius of curvature. P is the
+/// outline's, the second moments are integrated numerically, to 1e-13; what has a closed form is used so.</para>
 /// <para>Points of the ellipse by the angle θ from the top line: y = b sin θ, z = a cos θ, a half the height, b half the width;
 /// q = √(a² sin² θ + b² cos² θ) is dl/dθ, (a sin θ, b cos θ)/q the normal, ab/q³ the curvature.</para>
 /// <para>Torsion is the closed-cell rule of the flat-sided tubes (<see cref="CellTube"/>); for equal axes it is above the round tube's 2I by no
@@ -28,24 +28,22 @@ public sealed record EllipseTube : CellTube
     /// <param name="height">Along the top line, mm.</param>
     /// <param name="width">Across, mm.</param>
     /// <param name="wall">t, mm; less than the ellipse's smallest radius of curvature.</param>
-    /// <exception cref="ArgumentOutOfRangeException">A size is not positive and finite, or the wall is outside its range.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">A size is not positive and finite, one more than <see cref="EllipseOutline.MostSlender"/> times the
+    /// other, or the wall is outside its range.</exception>
     public EllipseTube(double height, double width, double wall)
         : base(height, width, wall)
     {
-        // "Not inside the range", so that NaN is refused as well.
-        if (!(height > 0 && width > 0 && double.IsFinite(height) && double.IsFinite(width)))
-        {
-            throw new ArgumentOutOfRangeException(nameof(height), height, "An ellipse needs two positive sizes.");
-        }
+        Outline = new EllipseOutline(height, width, 0);
+        double sharpest = EllipseOutline.LeastRadiusOfCurvature(height, width);
 
-        double sharpest = SmallestRadius(height, width);
+        // "Not inside the range", so that NaN is refused as well.
         if (!(wall > 0 && wall < sharpest))
         {
             throw new ArgumentOutOfRangeException(
                 nameof(wall), wall, $"A {height} x {width} mm ellipse takes a wall between 0 and its smallest radius, {sharpest} mm.");
         }
 
-        Perimeter = 4 * Quarter(Speed);
+        Bore = Outline.Grown(-wall);
         Iy = 4 * Quarter(angle => WallMoment(angle, HalfHeight, HalfWidth));
         Iz = height == width ? Iy : 4 * Quarter(angle => WallMoment(angle, HalfWidth, HalfHeight));
         _midSecondY = 4 * Quarter(angle => MidMoment(angle, HalfHeight, HalfWidth));
@@ -60,6 +58,12 @@ public sealed record EllipseTube : CellTube
     /// <inheritdoc/>
     public override string Shape => "ellipse";
 
+    /// <inheritdoc/>
+    public override Outline Outline { get; }
+
+    /// <inheritdoc/>
+    public override Outline Bore { get; }
+
     /// <summary>A = P t − π t², mm².</summary>
     public override double Area => Wall * (Perimeter - (Math.PI * Wall));
 
@@ -70,7 +74,7 @@ public sealed record EllipseTube : CellTube
     public override double Iz { get; }
 
     /// <inheritdoc/>
-    public override double Perimeter { get; }
+    public override double Perimeter => Outline.Perimeter;
 
     /// <inheritdoc/>
     public override double PlasticModulusY => 4 * QuarterMoment(HalfHeight, HalfWidth);
@@ -90,15 +94,6 @@ public sealed record EllipseTube : CellTube
     private double HalfHeight => Height / 2;
 
     private double HalfWidth => Width / 2;
-
-    /// <summary>Smallest radius of curvature of an ellipse, mm: at the ends of its longer axis.</summary>
-    /// <param name="height">mm.</param>
-    /// <param name="width">mm.</param>
-    public static double SmallestRadius(double height, double width)
-    {
-        double shorter = Math.Min(height, width);
-        return shorter * shorter / (2 * Math.Max(height, width));
-    }
 
     /// <summary>
     /// The thin wall's I²/∮(S²/t) dl, by the energy of its shear flow, times what Cowper's coefficient of the round tube of the same wall and mean
@@ -173,12 +168,6 @@ public sealed record EllipseTube : CellTube
 
             before = sum;
         }
-    }
-
-    private double Speed(double angle)
-    {
-        (double sin, double cos) = Math.SinCos(angle);
-        return Length(HalfHeight * sin, HalfWidth * cos);
     }
 
     // ∫ z² (1 − κs) ds through the wall, times dl/dθ; a along z.

@@ -1,4 +1,5 @@
 using System.Globalization;
+using FrameGen.Geometry;
 
 namespace FrameGen.Mechanics.Sections;
 
@@ -70,6 +71,8 @@ public sealed record FlatSidedTube : CellTube
         }
 
         (OuterCorner, InnerCorner) = (outerCorner, innerCorner);
+        Outline = new FlatSidedOutline(height, width, outerCorner);
+        Bore = new FlatSidedOutline(height - (2 * wall), width - (2 * wall), innerCorner);
     }
 
     /// <summary>ro, mm.</summary>
@@ -77,6 +80,12 @@ public sealed record FlatSidedTube : CellTube
 
     /// <summary>ri, mm.</summary>
     public double InnerCorner { get; }
+
+    /// <inheritdoc/>
+    public override Outline Outline { get; }
+
+    /// <inheritdoc/>
+    public override Outline Bore { get; }
 
     /// <inheritdoc/>
     public override string Name
@@ -104,7 +113,7 @@ public sealed record FlatSidedTube : CellTube
     public override double Iz => SecondMoment(Width, Height);
 
     /// <summary>2(B + H) − (8 − 2π) ro, mm.</summary>
-    public override double Perimeter => (2 * (Height + Width)) - ((8 - (2 * Math.PI)) * OuterCorner);
+    public override double Perimeter => Outline.Perimeter;
 
     /// <summary>Wpl,yy = BH²/4 − (B − 2T)(H − 2T)²/4 − 4 Ag hg + 4 Aξ hξ, mm³.</summary>
     public override double PlasticModulusY => PlasticModulus(Height, Width);
@@ -147,7 +156,7 @@ public sealed record FlatSidedTube : CellTube
     {
         // On the corner's diagonal √2 T − (√2 − 1)(ro − ri) of metal is left: as much as half the wall at least.
         double least = Math.Max(0, outerCorner - (wall * (Math.Sqrt(2) - 0.5) / (Math.Sqrt(2) - 1)));
-        return (least, Math.Max(0, (Math.Min(height, width) / 2) - wall));
+        return (least, Math.Max(0, Math.Min(height - (2 * wall), width - (2 * wall)) / 2));
     }
 
     /// <summary>2T(B − T) across and 2T(H − T) towards the top line, mm²: the two walls that lie along the shear, between the other two's middles.</summary>
