@@ -13,7 +13,16 @@ internal sealed class CheckCommand(Terminal terminal, string spec, bool json)
     public int Run()
     {
         SizedFrame? sized = _job.Size(spec);
-        ShopPackage? package = _job.With(p => p.Plan(p.Cope(sized)));
+        ShopPackage? package = null;
+        if (sized is null || FramePipeline.CanCope(sized))
+        {
+            package = _job.With(p => p.Plan(p.Cope(sized)));
+        }
+        else
+        {
+            _job.Diagnostics.Note(null, "not supported yet: cut ends of tubes that are not round; sizes, targets and cases are checked, joints are not");
+        }
+
         _job.PrintDiagnostics(string.Empty);
         int code = _job.CodeFor(sized);
         if (json)

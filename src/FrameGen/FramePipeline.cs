@@ -2,6 +2,7 @@ using System.Text;
 using FrameGen.Diagnostics;
 using FrameGen.Fabrication;
 using FrameGen.Joints;
+using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Output;
 using FrameGen.Output.Drawings;
@@ -39,9 +40,26 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
     public SizedFrame? Size(FrameModel? model) =>
         model is null ? null : At("choosing sections", () => SectionSizer.Size(model, diagnostics, Designs()));
 
+    /// <summary>True where the ends of a frame's tubes can be cut: of round tubes and rods, so far.</summary>
+    public static bool CanCope(SizedFrame sized) => sized.Sections.All(s => s is RoundTube or Rod);
+
     /// <summary>Cuts the tube ends.</summary>
-    public CutFrame? Cope(SizedFrame? sized) =>
-        sized is null ? null : At("cutting tube ends", () => EndCoper.Cope(sized, diagnostics));
+    public CutFrame? Cope(SizedFrame? sized)
+    {
+        if (sized is null)
+        {
+            return null;
+        }
+
+        if (!CanCope(sized))
+        {
+            string names = string.Join(", ", sized.Sections.Where(s => s is not (RoundTube or Rod)).Select(s => s.Name).Distinct(StringComparer.Ordinal));
+            diagnostics.Error(null, $"not supported yet: patterns and papers of {names} (`check` and `size` work with them, this version can't draw their cut ends)");
+            return null;
+        }
+
+        return At("cutting tube ends", () => EndCoper.Cope(sized, diagnostics));
+    }
 
     /// <summary>Plans the shop's work.</summary>
     public ShopPackage? Plan(CutFrame? cut) =>

@@ -139,7 +139,7 @@ public sealed class DisplayFormat(DisplaySpec display)
 
     /// <summary>A section as a shop asks for it: a size in whole parts of an inch in inches where papers are in inches, any other as its name says.</summary>
     /// <param name="section">The section.</param>
-    /// <returns><c>round 1.5 x 0.083 in</c>, <c>round 38 x 1.5 mm</c>.</returns>
+    /// <returns><c>round 1.5 x 0.083 in</c>, <c>square 2 x 0.125 in</c>, <c>round 38 x 1.5 mm</c>.</returns>
     public string Section(Section section)
     {
         if (display.Length != LengthUnit.Inch)
@@ -151,8 +151,25 @@ public sealed class DisplayFormat(DisplaySpec display)
         {
             RoundTube tube when Inches(tube.OutsideDiameter) is { } od && Inches(tube.Wall) is { } wall => $"round {od} x {wall} in",
             Rod rod when Inches(rod.Diameter) is { } diameter => $"rod {diameter} in",
+            CellTube tube when Inches(tube.Height) is { } height && Inches(tube.Width) is { } width && Inches(tube.Wall) is { } wall =>
+                $"{tube.Shape} {height} x {(tube.Shape is "square" ? string.Empty : $"{width} x ")}{wall} in{Corners(tube)}",
             _ => section.Name,
         };
+
+        // Corners that are not the rule's, as the name has them; in millimetres where they are no inch size.
+        static string Corners(CellTube tube)
+        {
+            int corner = tube.Name.IndexOf(" corner ", StringComparison.Ordinal);
+            if (corner < 0 || tube is not FlatSidedTube flat)
+            {
+                return string.Empty;
+            }
+
+            bool hasInner = tube.Name.Contains(" inner ", StringComparison.Ordinal);
+            return Inches(flat.OuterCorner) is { } outer && Inches(flat.InnerCorner) is { } inner
+                ? $" corner {outer} in{(hasInner ? $" inner {inner} in" : string.Empty)}"
+                : tube.Name[corner..];
+        }
 
         // Inch sizes are printed to four decimals at most (0.083, 0.0625); a metric size is none of them.
         static string? Inches(double mm)
@@ -160,7 +177,7 @@ public sealed class DisplayFormat(DisplaySpec display)
             const double Rounding = 1e-9;
             double inches = UnitsNet.Length.FromMillimeters(mm).Inches;
             double printed = Math.Round(inches, 4);
-            return Math.Abs(inches - printed) <= Rounding * inches ? printed.ToString("0.####", CultureInfo.InvariantCulture) : null;
+            return Math.Abs(inches - printed) <= Rounding * Math.Max(inches, 1) ? printed.ToString("0.####", CultureInfo.InvariantCulture) : null;
         }
     }
 

@@ -1,4 +1,5 @@
 using FrameGen.Diagnostics;
+using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Sizing.Analysis;
 using FrameGen.Sizing.Targets;
@@ -155,16 +156,27 @@ internal static class UnmetReport
     private static List<string> LimitsOf(DesignAnalysis analysis, int group)
     {
         TubeGroup of = analysis.Space.Model.Groups[group];
-        double size = analysis.Sections[group].OuterSize;
-        double wall = analysis.Sections[group].Wall;
+        Section section = analysis.Sections[group];
         var limits = new List<string>();
-        Add("od", size, of.Candidates.Min(c => c.Section.OuterSize), of.Candidates.Max(c => c.Section.OuterSize), of.Choose?.Od);
-        Add("wall", wall, of.Candidates.Min(c => c.Section.Wall), of.Candidates.Max(c => c.Section.Wall), of.Choose?.Wall);
+        if (section.Height == section.Width)
+        {
+            Add("od", s => s.OuterSize, of.Choose?.Od);
+        }
+        else
+        {
+            Add("height", s => s.Height, of.Choose?.Height ?? of.Choose?.Od);
+            Add("width", s => s.Width, of.Choose?.Width ?? of.Choose?.Od);
+        }
+
+        Add("wall", s => s.Wall, of.Choose?.Wall);
         return limits;
 
-        void Add(string what, double value, double least, double most, RangeSpec? range)
+        void Add(string what, Func<Section, double> size, RangeSpec? range)
         {
             const double Same = 1e-9;
+            double value = size(section);
+            double least = of.Candidates.Min(c => size(c.Section));
+            double most = of.Candidates.Max(c => size(c.Section));
             if (value >= most - Same)
             {
                 limits.Add($"{what} at {(range?.Max is null ? "stock's largest" : "its largest")} {Wording.Number(most)} mm");

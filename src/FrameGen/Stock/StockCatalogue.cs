@@ -36,34 +36,43 @@ public static class StockCatalogue
     public static IEnumerable<string> NamesSoldIn(string material) =>
         Lists.Where(l => l.Materials.Contains(material, StringComparer.OrdinalIgnoreCase)).Select(l => l.Name);
 
-    // Rows of the standards, in the file's order. Only round sizes become sections; other shapes are named, not lost.
+    // Rows of the standards, in the file's order; of two rows with one section the first stands.
     private static StockList Read(BuiltInList list)
     {
         var sizes = new List<StockSize>();
         var seen = new HashSet<string>(StringComparer.Ordinal);
-        var others = new List<string>();
         foreach (string[] row in Rows(list.File).Where(r => list.Standards.Contains(r[6], StringComparer.Ordinal)))
         {
-            if (string.Equals(row[0], "CHS", StringComparison.Ordinal))
+            Section section = SectionOf(row);
+            if (seen.Add(section.Name))
             {
-                var section = new RoundTube(Number(row[1]), Number(row[3]));
-                if (seen.Add(section.Name))
-                {
-                    sizes.Add(new StockSize(section, Number(row[5]), PricePerMetre: null));
-                }
-            }
-            else
-            {
-                string shape = string.Equals(row[0], "SHS", StringComparison.Ordinal) ? "square" : "rectangular";
-                if (!others.Contains(shape, StringComparer.Ordinal))
-                {
-                    others.Add(shape);
-                }
+                sizes.Add(new StockSize(section, Number(row[5]), PricePerMetre: null));
             }
         }
 
-        others.Sort((a, b) => string.CompareOrdinal(b, a));
-        return new StockList(list.Name, list.Materials, sizes, others);
+        return new StockList(list.Name, list.Materials, sizes);
+    }
+
+    private static Section SectionOf(string[] row)
+    {
+        double size = Number(row[1]);
+        double wall = Number(row[3]);
+        if (string.Equals(row[0], "CHS", StringComparison.Ordinal))
+        {
+            return new RoundTube(size, wall);
+        }
+
+        double width = Number(row[2]);
+        if (row[4].Length == 0)
+        {
+            return new FlatSidedTube(size, width, wall);
+        }
+
+        // The corners of hot-finished tube do not share a centre: EN 10210-2 calculates with 1.5 T outside and 1.0 T inside.
+        double corner = Number(row[4]);
+        return string.Equals(row[6], "EN 10210-2", StringComparison.Ordinal)
+            ? new FlatSidedTube(size, width, wall, corner, wall)
+            : new FlatSidedTube(size, width, wall, corner);
     }
 
     // Columns: shape, outer size, width, wall, corner radius, bar length, standard, note. Only the note is ever quoted.

@@ -6,9 +6,7 @@ namespace FrameGen.Stock;
 /// <param name="Name">As written in specs.</param>
 /// <param name="Materials">Names of the materials it is sold in.</param>
 /// <param name="Sizes">One a section; of two rows with one section the first stands.</param>
-/// <param name="OtherShapes">Words for the shapes it also holds and the program can't work with yet; empty for none.</param>
-public sealed record StockList(
-    string Name, IReadOnlyList<string> Materials, IReadOnlyList<StockSize> Sizes, IReadOnlyList<string> OtherShapes)
+public sealed record StockList(string Name, IReadOnlyList<string> Materials, IReadOnlyList<StockSize> Sizes)
 {
     /// <summary>True where the list is sold in the material; names are compared without regard to case.</summary>
     public bool IsSoldIn(string material) => Materials.Contains(material, StringComparer.OrdinalIgnoreCase);

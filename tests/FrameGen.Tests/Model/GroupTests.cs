@@ -124,10 +124,7 @@ public sealed class GroupTests
     }
 
     [Theory]
-    [InlineData("S235", "en10219", null, "not supported yet: square and rectangular sizes of en10219; write shape: round")]
-    [InlineData("E235+N", "en10305-square", null, "not supported yet: square sizes of en10305-square")]
-    [InlineData("E235+N", "en10305", "square", "not supported yet: shape square")]
-    [InlineData("E235+N", "en10305", "rund", "there is no shape rund; did you mean 'round'?")]
+    [InlineData("E235+N", "en10305", "square", "en10305 holds no square sizes; choose another list or shape")]
     [InlineData("E235+N", "en10305", "rod", "en10305 holds no rod sizes")]
     [InlineData("E235+N", "en10350", null, "there is no stock list en10350; did you mean 'en10305'?")]
     [InlineData("E235", "en10305", null, "there is no material E235; did you mean")]
@@ -138,9 +135,45 @@ public sealed class GroupTests
         Assert.Contains(expected, error, StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData("round")]
+    [InlineData("square")]
+    [InlineData("rect")]
+    public void Offers_one_shape_of_a_list_where_one_is_asked_for(string shape) =>
+        Assert.All(Chosen("S355", ["en10219"], shape).Model().Groups[0].Candidates, c => Assert.Equal(shape, c.Section.Shape));
+
     [Fact]
-    public void Offers_the_round_sizes_of_a_list_that_holds_other_shapes_too() =>
-        Assert.All(Chosen("S355", ["en10219"], "round").Model().Groups[0].Candidates, c => Assert.Equal("round", c.Section.Shape));
+    public void Offers_all_shapes_of_a_list_where_none_is_asked_for() => Assert.Equal(
+        ["rect", "round", "square"],
+        Chosen("S355", ["en10219"], od: ("40 mm", "60.3 mm")).Model().Groups[0].Candidates.Select(c => c.Section.Shape).Distinct().Order(StringComparer.Ordinal));
+
+    // Height along the top line, width across: each has a range of its own.
+    [Fact]
+    public void Takes_height_and_width_apart()
+    {
+        TubeGroup group = SpecBuilder.New()
+            .Choose("main", "S355", ["en10219"], height: ("60 mm", "60 mm"), width: ("35 mm", "40 mm"))
+            .Node("a", 0, 0, 0).Node("b", 1000, 0, 0).Tube("beam", "a", "b").Model().Groups[0];
+        Assert.All(group.Candidates, c => Assert.StartsWith("rect 60 x 40 x ", c.Section.Name, StringComparison.Ordinal));
+        Assert.NotEmpty(group.Candidates);
+    }
+
+    // Hot-finished corners, EN 10210-2: 1.5 T outside, 1.0 T inside; a name of its own, so that the cold-formed one is another size.
+    [Fact]
+    public void Hot_finished_tube_has_its_own_corners()
+    {
+        TubeGroup group = Chosen("S355", ["en10210"], "square", od: ("40 mm", "40 mm"), wall: ("3.2 mm", "3.2 mm")).Model().Groups[0];
+        Assert.Equal("square 40 x 3.2 mm corner 4.8 mm inner 3.2 mm", Assert.Single(group.Candidates).Section.Name);
+    }
+
+    [Fact]
+    public void Takes_flat_sided_sizes_of_the_specs_own_list()
+    {
+        TubeGroup group = Chosen("S235", ["yard"])
+            .Stock("yard", ["S235"], null, null, new FlatSidedTube(60, 40, 2), new EllipseTube(45, 28, 1.5), new RoundTube(30, 2))
+            .Model().Groups[0];
+        Assert.Equal(["ellipse 45 x 28 x 1.5 mm", "round 30 x 2 mm", "rect 60 x 40 x 2 mm"], group.Candidates.Select(c => c.Section.Name));
+    }
 
     [Fact]
     public void Refuses_a_range_that_ends_below_its_beginning()

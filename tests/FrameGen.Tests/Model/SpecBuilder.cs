@@ -96,12 +96,19 @@ internal sealed class SpecBuilder
         Add(_groups, new GroupSpec(Name(name), Name(material), new Placed<Section>(section, At), null, welded));
 
     public SpecBuilder Choose(
-        string name, string material, string[] lists, string? shape = null, (string? Min, string? Max)? od = null, (string? Min, string? Max)? wall = null) =>
+        string name,
+        string material,
+        string[] lists,
+        string? shape = null,
+        (string? Min, string? Max)? od = null,
+        (string? Min, string? Max)? wall = null,
+        (string? Min, string? Max)? height = null,
+        (string? Min, string? Max)? width = null) =>
         Add(_groups, new GroupSpec(
             Name(name),
             Name(material),
             null,
-            new ChooseSpec([.. lists.Select(Name)], shape is null ? null : Name(shape), Range(od), null, null, Range(wall), At),
+            new ChooseSpec([.. lists.Select(Name)], shape is null ? null : Name(shape), Range(od), Range(height), Range(width), Range(wall), At),
             Welded: true));
 
     public SpecBuilder Material(

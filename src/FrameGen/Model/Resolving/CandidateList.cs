@@ -10,9 +10,6 @@ internal sealed class CandidateList(StockTable stock, SpecValues values)
 {
     private const int NearestShown = 3;
 
-    private static readonly string[] Shapes = ["round", "rod"];
-    private static readonly string[] LaterShapes = ["square", "rect", "ellipse"];
-
     private DiagnosticList Diagnostics => values.Diagnostics;
 
     /// <summary>The candidates by mass per metre, then by name; null after an error.</summary>
@@ -21,12 +18,12 @@ internal sealed class CandidateList(StockTable stock, SpecValues values)
     /// <param name="whose"><c>group rails</c>.</param>
     public IReadOnlyList<Candidate>? Of(ChooseSpec choose, Material? material, string whose)
     {
-        bool isSound = IsShapeKnown(choose.Shape, whose);
+        bool isSound = true;
         SizeLimits? limits = SizeLimits.Of(choose, whose, values);
         var lists = new List<StockList>();
         foreach (Placed<string> name in choose.Lists)
         {
-            if (stock.Find(name, whose) is { } list && IsUsable(list, name, choose, material, whose))
+            if (stock.Find(name, whose) is { } list && IsUsable(list, name, material, whose))
             {
                 lists.Add(list);
             }
@@ -53,33 +50,11 @@ internal sealed class CandidateList(StockTable stock, SpecValues values)
         return [.. within.OrderBy(c => c.Section.Area).ThenBy(c => c.Section.Name, StringComparer.Ordinal)];
     }
 
-    private bool IsShapeKnown(Placed<string>? shape, string whose)
+    private bool IsUsable(StockList list, Placed<string> name, Material? material, string whose)
     {
-        if (shape is null || Shapes.Contains(shape.Value, StringComparer.Ordinal))
+        // An empty list of the spec was an error already.
+        if (list.Sizes.Count == 0)
         {
-            return true;
-        }
-
-        Diagnostics.Error(
-            shape.At,
-            LaterShapes.Contains(shape.Value, StringComparer.Ordinal)
-                ? $"{whose}: not supported yet: shape {shape.Value}; write shape: round or shape: rod"
-                : $"{whose}: there is no shape {shape.Value}{NameIndex.Suggestion(shape.Value, Shapes)}");
-        return false;
-    }
-
-    private bool IsUsable(StockList list, Placed<string> name, ChooseSpec choose, Material? material, string whose)
-    {
-        if (list.Sizes.Count == 0 || (list.OtherShapes.Count > 0 && choose.Shape is null))
-        {
-            // An empty list of the spec was an error already.
-            if (list.OtherShapes.Count > 0)
-            {
-                string what = $"{whose}: not supported yet: {string.Join(" and ", list.OtherShapes)} sizes of {list.Name}";
-                Diagnostics.Error(
-                    name.At, list.Sizes.Count == 0 ? $"{what}, and it holds no others; choose another list" : $"{what}; write shape: round");
-            }
-
             return false;
         }
 

@@ -107,7 +107,7 @@ internal sealed class StockTable
         [
             .. spec.Sizes.Where(s => seen.Add(s.Value.Name)).Select(s => new StockSize(s.Value, bar, spec.PricePerMetre)),
         ];
-        return new StockList(spec.Name.Value, [.. spec.Materials.Select(m => m.Value)], sizes, []);
+        return new StockList(spec.Name.Value, [.. spec.Materials.Select(m => m.Value)], sizes);
     }
 
     private StockList? FindWritten(string name) =>

@@ -16,7 +16,8 @@ internal readonly record struct StressPeak(double Stress, double At)
     /// <remarks>
     /// Without a load across the element, axial force, shear and torque are constant and My² + Mz² is a convex parabola, so the peak
     /// is at an end. Otherwise, with x from the element's start, Vy = Vy0 − py x, Vz = Vz0 − pz x, My = My0 + Vz0 x − pz x²/2 and
-    /// Mz = Mz0 − Vy0 x + py x²/2, and half the slope of My² + Mz² is My Vz − Mz Vy: a cubic.
+    /// Mz = Mz0 − Vy0 x + py x²/2, and half the slope of My² + Mz² is My Vz − Mz Vy: a cubic. A section with corners is looked at where the
+    /// bending stress of a corner is extreme, too.
     /// </remarks>
     public static StressPeak Find(in ElementForces forces, Section section, double from, double to)
     {
@@ -40,6 +41,21 @@ internal readonly record struct StressPeak(double Stress, double At)
         for (int i = 0; i < count; i++)
         {
             peak = peak.OrInside(forces, section, roots[i], from, to);
+        }
+
+        // The bending stress z My/Iy − y Mz/Iz of a corner is extreme where z Vz/Iy + y Vy/Iz vanishes.
+        if (section is CellTube)
+        {
+            double towardsZ = section.Height / section.Iy;
+            foreach (double towardsY in (ReadOnlySpan<double>)[section.Width / section.Iz, -section.Width / section.Iz])
+            {
+                peak = peak.OrInside(
+                    forces,
+                    section,
+                    ((towardsZ * start.Vz) + (towardsY * start.Vy)) / ((towardsZ * forces.Pz) + (towardsY * forces.Py)),
+                    from,
+                    to);
+            }
         }
 
         return peak;

@@ -6,13 +6,20 @@ using FrameGen.Sizing.Analysis;
 namespace FrameGen.Sizing.Targets;
 
 /// <summary>
-/// Length between neighbouring nodes over the radius of gyration, tube by tube; with the wall's limit for round tubes, D/t no more than 90 ε²
-/// (class 3 of EN 1993-1-1, table 5.2, sheet 3), the worse of the two is reported. Settled group by group, before any frame is analysed.
+/// Length between neighbouring nodes over the radius of gyration, tube by tube; with the wall's limit, class 3 of EN 1993-1-1, table 5.2, the
+/// worse of the two is reported. Settled group by group, before any frame is analysed.
 /// </summary>
-/// <remarks>ε² = 235 MPa/fy for steels; for softer metals times E/210 000 MPa, as EN 1993-1-4 has it.</remarks>
+/// <remarks>
+/// <para>Round (sheet 3): D/t no more than 90 ε². Flat sides (sheet 1, pressed all over): c/t no more than 42 ε, c the flat of the longer side
+/// between its outer corners, or between the walls where corners are sharper than that: for hot-finished tube the table's usual h − 3t.
+/// Ellipse: as a round tube of twice its largest radius of curvature, larger size squared over the smaller (L. Gardner and T. M. Chan, Steel
+/// and Composite Structures 7 (2007) 185; from memory).</para>
+/// <para>ε² = 235 MPa/fy for steels; for softer metals times E/210 000 MPa, as EN 1993-1-4 has it.</para>
+/// </remarks>
 internal sealed class SlendernessCheck : TargetCheck
 {
-    private const double WallFactor = 90;
+    private const double RoundFactor = 90;
+    private const double FlatFactor = 42;
     private const double ReferenceYield = 235;
     private const double ReferenceModulus = 210_000;
     private const double SoftestSteel = 190_000;
@@ -57,7 +64,7 @@ internal sealed class SlendernessCheck : TargetCheck
         const string Label = "all tubes";
         return wall / wallLimit > length / _target.Max
             ? new TargetResult(
-                _target.Index, Kind, Label, wall, wallLimit, "", wall / wallLimit, $"wall of group {Model.Groups[worst].Name}: diameter over thickness of {section.Name}")
+                _target.Index, Kind, Label, wall, wallLimit, "", wall / wallLimit, $"wall of group {Model.Groups[worst].Name}: {Measured(section)} over thickness of {section.Name}")
             : new TargetResult(
                 _target.Index, Kind, Label, length, _target.Max, "", length / _target.Max,
                 $"{Model.Tubes[span.Tube].Name} between {Model.Nodes[span.From].Name} and {Model.Nodes[span.To].Name}, {Wording.Number(span.Length)} mm");
@@ -104,11 +111,11 @@ internal sealed class SlendernessCheck : TargetCheck
         return Math.Max(_longest[group].Length / Radius(section) / _target.Max, wall / limit);
     }
 
-    // Diameter over thickness and its limit; 0 where the wall isn't looked at, or there is none.
+    // Diameter or flat over thickness and its limit; 0 where the wall isn't looked at, or there is none.
     private (double Value, double Limit) Wall(int group, Section section)
     {
         Material material = Model.Groups[group].Material;
-        if (!_target.Wall || section is not RoundTube tube || _longest[group].Tube < 0)
+        if (!_target.Wall || section is Rod || _longest[group].Tube < 0)
         {
             return (0, 1);
         }
@@ -116,8 +123,22 @@ internal sealed class SlendernessCheck : TargetCheck
         // The higher of the yields, where welds soften the metal: the sheet away from them has to reach it.
         double softness = material.E >= SoftestSteel ? 1 : material.E / ReferenceModulus;
         double yield = material.Yield ?? throw new InvalidOperationException($"{material.Name} has no yield, and a wall's limit needs it.");
-        return (tube.OutsideDiameter / tube.Wall, WallFactor * ReferenceYield / yield * softness);
+        if (section is FlatSidedTube flat)
+        {
+            double side = flat.OuterSize - (2 * Math.Max(flat.OuterCorner, flat.Wall));
+            return (side / flat.Wall, FlatFactor * Math.Sqrt(ReferenceYield / yield * softness));
+        }
+
+        double diameter = section is RoundTube ? section.OuterSize : section.OuterSize * section.OuterSize / Math.Min(section.Height, section.Width);
+        return (diameter / section.Wall, RoundFactor * ReferenceYield / yield * softness);
     }
+
+    private static string Measured(Section section) => section switch
+    {
+        FlatSidedTube => "flat of the longer side",
+        RoundTube => "diameter",
+        _ => "equivalent diameter",
+    };
 
     private int WorstGroup(Section[] sections)
     {

@@ -1,11 +1,19 @@
 using System.Diagnostics.CodeAnalysis;
+using FrameGen.Geometry;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Spec.Quantities;
 using FrameGen.Spec.Yaml;
 
 namespace FrameGen.Spec.Forms;
 
-/// <summary>A tube's section: <c>round 38 x 1.5 mm</c>, <c>rod 16 mm</c> and the flat-sided ones.</summary>
+/// <summary>
+/// A tube's section: <c>round 38 x 1.5 mm</c>, <c>rod 16 mm</c>, <c>square 40 x 2 mm</c>, <c>rect 60 x 40 x 2 mm corner 5 mm</c>,
+/// <c>ellipse 45 x 28 x 1.5 mm</c>.
+/// </summary>
+/// <remarks>
+/// <c>corner</c> is the outer radius; the inner one is that less the wall, or 0, unless <c>inner</c> gives it: hot-finished tube has an inner
+/// radius of its own, and a section's printed name has to read back as the same section.
+/// </remarks>
 internal sealed class SectionForm : Form<Placed<Section>>
 {
     /// <summary>The shapes of the format and how many sizes each has; the last is the wall.</summary>
@@ -18,6 +26,9 @@ internal sealed class SectionForm : Form<Placed<Section>>
         ("ellipse", 3, "ellipse 45 x 28 x 1.5 mm"),
     ];
 
+    private const string Corner = "corner";
+    private const string Inner = "inner";
+
     /// <summary>Thinnest wall, mm: below it somebody has mistaken a unit.</summary>
     private const double ThinnestWall = 0.01;
 
@@ -25,7 +36,7 @@ internal sealed class SectionForm : Form<Placed<Section>>
     private const double LargestSize = 10_000;
 
     /// <inheritdoc/>
-    public override string Words => "a section such as `round 38 x 1.5 mm` or `rod 16 mm`";
+    public override string Words => "a section such as `round 38 x 1.5 mm` or `rect 60 x 40 x 2 mm`";
 
     /// <inheritdoc/>
     public override bool TryRead(YamlNode node, Reading reading, [MaybeNullWhen(false)] out Placed<Section> value)
@@ -71,26 +82,39 @@ internal sealed class SectionForm : Form<Placed<Section>>
                 0, $"'{text}' does not begin with a shape ({string.Join(", ", Shapes.Select(s => s.Shape))}){NearestName.Suggest(word, Shapes.Select(s => s.Shape))}");
         }
 
-        int sizesEnd = text.IndexOf("corner", wordEnd, StringComparison.Ordinal);
-        bool hasCorner = sizesEnd >= 0;
-        LiteralExpression[] sizes = Sizes(source, wordEnd, hasCorner ? sizesEnd : text.Length);
+        (int corner, int inner) = CornerWords(text, wordEnd);
+        LiteralExpression[] sizes = Sizes(source, wordEnd, corner);
         if (sizes.Length != shape.Sizes)
         {
             throw new ValueException(0, $"{shape.Shape} takes {shape.Sizes} size{(shape.Sizes == 1 ? string.Empty : "s")}, as in `{shape.Example}`, not {sizes.Length}");
         }
 
         CheckSizes(shape.Shape, text, sizes);
-        if (hasCorner)
+        if (corner < text.Length && shape.Shape is not ("square" or "rect"))
         {
-            CheckCorner(source, shape.Shape, sizesEnd + "corner".Length, sizes);
+            throw new ValueException(corner, $"{(shape.Shape is "ellipse" ? "an" : "a")} {shape.Shape} section has no corners; remove '{Corner}'");
         }
 
         return shape.Shape switch
         {
             "round" => new RoundTube(sizes[0].Value, sizes[1].Value),
             "rod" => new Rod(sizes[0].Value),
-            _ => throw new ValueException(0, NotYet.Message(shape.Shape)),
+            "ellipse" => Ellipse(text, sizes),
+            _ => FlatSided(source, sizes, corner, inner),
         };
+    }
+
+    // Where `corner` and `inner` stand; the text's end for one that is not written.
+    private static (int Corner, int Inner) CornerWords(string text, int start)
+    {
+        int corner = text.IndexOf(Corner, start, StringComparison.Ordinal);
+        int inner = text.IndexOf(Inner, start, StringComparison.Ordinal);
+        if (inner >= 0 && (corner < 0 || inner < corner))
+        {
+            throw new ValueException(inner, $"'{Inner}' goes after '{Corner}', as in `square 40 x 3.2 mm corner 4.8 mm inner 3.2 mm`");
+        }
+
+        return (corner < 0 ? text.Length : corner, inner < 0 ? text.Length : inner);
     }
 
     private static LiteralExpression[] Sizes(ExpressionSource source, int start, int end)
@@ -147,24 +171,59 @@ internal sealed class SectionForm : Form<Placed<Section>>
         }
     }
 
-    private static void CheckCorner(ExpressionSource source, string shape, int start, LiteralExpression[] sizes)
+    private static EllipseTube Ellipse(string text, LiteralExpression[] sizes)
     {
-        if (shape is not ("square" or "rect"))
+        double larger = Math.Max(sizes[0].Value, sizes[1].Value);
+        double smaller = Math.Min(sizes[0].Value, sizes[1].Value);
+        if (larger > EllipseOutline.MostSlender * smaller)
         {
-            throw new ValueException(start - "corner".Length, $"a {shape} section has no corners; remove 'corner'");
+            throw new ValueException(
+                sizes[0].Start, $"'{text}' is more than {SpecNumber.Text(EllipseOutline.MostSlender)} times as long as it is wide; sizes of an ellipse lie nearer together");
         }
 
-        LiteralExpression corner = PlainValue.Read(source, start, source.Text.Length, null, QuantityKind.Length);
-        double half = sizes.SkipLast(1).Min(size => size.Value) / 2;
-        string? wrong = QuantityCheck.WrongKind(corner, [QuantityKind.Length]);
-        if (wrong is null && !(corner.Value >= 0 && corner.Value <= half))
+        double sharpest = EllipseOutline.LeastRadiusOfCurvature(sizes[0].Value, sizes[1].Value);
+        return sizes[2].Value < sharpest
+            ? new EllipseTube(sizes[0].Value, sizes[1].Value, sizes[2].Value)
+            : throw new ValueException(
+                sizes[2].Start,
+                $"a {SpecNumber.Text(sizes[2].Value)} mm wall gives the bore of '{text}' a kink where the ellipse bends most; "
+                + $"use less than that bend's radius, {SpecNumber.Text(sharpest)} mm");
+    }
+
+    private static FlatSidedTube FlatSided(ExpressionSource source, LiteralExpression[] sizes, int cornerAt, int innerAt)
+    {
+        (double height, double width, LiteralExpression wall) = (sizes[0].Value, sizes[^2].Value, sizes[^1]);
+        double t = wall.Value;
+        double half = Math.Min(height, width) / 2;
+        if (cornerAt == source.Text.Length)
         {
-            wrong = $"a corner radius goes from 0 to half the smaller side, {SpecNumber.Text(half)} mm";
+            return FlatSidedTube.RuleOuterCorner(t) <= half
+                ? new FlatSidedTube(height, width, t)
+                : throw new ValueException(
+                    wall.Start,
+                    $"the corners of EN 10219-2 for a {SpecNumber.Text(t)} mm wall, of {SpecNumber.Text(FlatSidedTube.RuleOuterCorner(t))} mm radius, do not fit into "
+                    + $"a side of {SpecNumber.Text(2 * half)} mm; write the tube's own: `{source.Text.Trim()} corner {SpecNumber.Text(t)} mm`");
         }
 
-        if (wrong is not null)
+        double corner = Radius(source, cornerAt + Corner.Length, innerAt, 0, half, "a corner radius goes from 0 to half the smaller side,");
+        (double least, double most) = FlatSidedTube.InnerCornerRange(height, width, t, corner);
+        return innerAt == source.Text.Length
+            ? new FlatSidedTube(height, width, t, corner)
+            : new FlatSidedTube(
+                height, width, t, corner, Radius(source, innerAt + Inner.Length, source.Text.Length, least, most, "the inner radius of this corner goes from"));
+    }
+
+    private static double Radius(ExpressionSource source, int start, int end, double least, double most, string range)
+    {
+        LiteralExpression radius = PlainValue.Read(source, start, end, null, QuantityKind.Length);
+        string? wrong = QuantityCheck.WrongKind(radius, [QuantityKind.Length]);
+        if (wrong is null && !(radius.Value >= least && radius.Value <= most))
         {
-            throw new ValueException(corner.Start, wrong);
+            wrong = range.EndsWith("from", StringComparison.Ordinal)
+                ? $"{range} {SpecNumber.Text(least)} mm to {SpecNumber.Text(most)} mm"
+                : $"{range} {SpecNumber.Text(most)} mm";
         }
+
+        return wrong is null ? radius.Value : throw new ValueException(radius.Start, wrong);
     }
 }

@@ -7,8 +7,7 @@ namespace FrameGen.Spec.Forms;
 internal sealed class ShapeForm : Form<Placed<string>>
 {
     /// <summary>The words.</summary>
-    public static readonly WordForm<string> Shapes = new(
-        [("round", "round"), ("rod", "rod")], ["square", "rect", "ellipse"], word => $"shape: {word}");
+    public static readonly WordForm<string> Shapes = new([.. SectionForm.Shapes.Select(s => (s.Shape, s.Shape))]);
 
     /// <inheritdoc/>
     public override string Words => $"a shape: {Shapes.Words}";
