@@ -115,15 +115,21 @@ public sealed class EllipseOutline : Outline
     {
         double wanted = Math.Min(Math.Abs(distance), Perimeter / 2);
         double normal = wanted / _meanRadius;
-        for (int i = 0; i < 50; i++)
+        (double low, double high) = (0, Math.PI);
+        for (int i = 0; i < 80; i++)
         {
+            // Newton's step where it stays between what is known to be too little and too much; halfway otherwise.
             (double s, double c) = Math.SinCos(normal);
-            double step = (wanted - Round(normal)) / Curvature(s, c);
-            normal = Math.Clamp(normal + step, 0, Math.PI);
-            if (Math.Abs(step) < 1e-15)
+            double missing = wanted - Round(normal);
+            (low, high) = missing > 0 ? (normal, high) : (low, normal);
+            double next = normal + (missing / Curvature(s, c));
+            next = next >= low && next <= high ? next : low + ((high - low) / 2);
+            if (Math.Abs(next - normal) < 1e-15)
             {
                 break;
             }
+
+            normal = next;
         }
 
         (double sin, double cos) = Math.SinCos(normal);
@@ -164,6 +170,10 @@ public sealed class EllipseOutline : Outline
 
     /// <inheritdoc/>
     public override Outline Grown(double by) => by == 0 ? this : new EllipseOutline(2 * _a, 2 * _b, _offset + by);
+
+    /// <inheritdoc/>
+    public override Outline Towards(Outline inner, double share) =>
+        Grown((((EllipseOutline)inner)._offset - _offset) * share);
 
     /// <inheritdoc/>
     public override OutlineView Seen(Point2 along, Point2 across) => new View(this, along, across);

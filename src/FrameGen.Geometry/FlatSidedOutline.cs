@@ -27,13 +27,15 @@ public sealed class FlatSidedOutline : Outline
             throw new ArgumentOutOfRangeException(nameof(width), width, "A rectangle needs a width.");
         }
 
-        if (!(corner >= 0 && corner <= Math.Min(height, width) / 2))
+        // A corner that is half the smaller side but for rounding, as when both come from sums of sizes, is that.
+        double half = Math.Min(height, width) / 2;
+        if (!(corner >= 0 && corner <= half + Graze))
         {
             throw new ArgumentOutOfRangeException(nameof(corner), corner, "A corner radius goes from 0 to half the smaller side.");
         }
 
-        (HalfHeight, HalfWidth, Corner) = (height / 2, width / 2, corner);
-        (CoreHalfHeight, CoreHalfWidth) = (HalfHeight - corner, HalfWidth - corner);
+        (HalfHeight, HalfWidth, Corner) = (height / 2, width / 2, Math.Min(corner, half));
+        (CoreHalfHeight, CoreHalfWidth) = (HalfHeight - Corner, HalfWidth - Corner);
         _breaks = FindBreaks();
     }
 
@@ -199,7 +201,17 @@ public sealed class FlatSidedOutline : Outline
     /// <inheritdoc/>
     /// <remarks>Moved in by more than the corner radius, the corners are sharp.</remarks>
     public override Outline Grown(double by) =>
-        by == 0 ? this : new FlatSidedOutline(2 * (HalfHeight + by), 2 * (HalfWidth + by), GrownCorner(by));
+        by == 0 ? this : new FlatSidedOutline(2 * (HalfHeight + by), 2 * (HalfWidth + by), Math.Max(0, Corner + by));
+
+    /// <inheritdoc/>
+    public override Outline Towards(Outline inner, double share)
+    {
+        var to = (FlatSidedOutline)inner;
+        return new FlatSidedOutline(
+            2 * (HalfHeight - ((HalfHeight - to.HalfHeight) * share)),
+            2 * (HalfWidth - ((HalfWidth - to.HalfWidth) * share)),
+            Corner - ((Corner - to.Corner) * share));
+    }
 
     /// <inheritdoc/>
     public override OutlineView Seen(Point2 along, Point2 across) => new FlatSidedView(this, along, across);
@@ -213,9 +225,6 @@ public sealed class FlatSidedOutline : Outline
 
     /// <summary>+1 or −1 on either side, 0 for a direction along a flat, whose middle stands for it.</summary>
     private static int Side(double component) => Math.Abs(component) < 1e-15 ? 0 : Math.Sign(component);
-
-    private double GrownCorner(double by) =>
-        Corner + by <= 0 ? 0 : Math.Min(Corner + by, Math.Min(HalfHeight + by, HalfWidth + by));
 
     // A rectangle less, at each corner, the square that holds the arc, plus the quarter disc.
     private static double SecondMoment(double half, double across, double core, double corner)

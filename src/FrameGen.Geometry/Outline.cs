@@ -97,6 +97,11 @@ public abstract class Outline
     /// <exception cref="ArgumentOutOfRangeException">Nothing, or no smooth curve, is left.</exception>
     public abstract Outline Grown(double by);
 
+    /// <summary>A curve of the same kind between this one and one inside it, as its bore.</summary>
+    /// <param name="inner">Of the same kind; from the same ellipse, if that.</param>
+    /// <param name="share">0 for this one, 1 for the inner one.</param>
+    public abstract Outline Towards(Outline inner, double share);
+
     /// <summary>The curve as lines of one direction meet it.</summary>
     /// <param name="along">Unit vector along the lines, in the section's plane.</param>
     /// <param name="across">Unit vector square to it: which way distances of the lines from the axis grow.</param>

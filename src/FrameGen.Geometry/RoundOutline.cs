@@ -69,6 +69,10 @@ public sealed class RoundOutline : Outline
     public override Outline Grown(double by) => by == 0 ? this : new RoundOutline(Radius + by);
 
     /// <inheritdoc/>
+    public override Outline Towards(Outline inner, double share) =>
+        new RoundOutline(Radius - ((Radius - ((RoundOutline)inner).Radius) * share));
+
+    /// <inheritdoc/>
     public override OutlineView Seen(Point2 along, Point2 across) => _view;
 
     /// <summary>Half the chord that a line cuts off, mm; 0 where it grazes; negative where it misses.</summary>
