@@ -63,7 +63,7 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
 
     /// <summary>Plans the shop's work.</summary>
     public ShopPackage? Plan(CutFrame? cut) =>
-        cut is null ? null : At("planning the parts", () => ShopPlanner.Plan(cut));
+        cut is null ? null : At("planning the parts", () => ShopPlanner.Plan(cut, diagnostics));
 
     /// <summary>Lays out every file.</summary>
     /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>

@@ -7,7 +7,8 @@ namespace FrameGen.Fabrication;
 /// <param name="Cut">The cut frame.</param>
 /// <param name="Parts">Distinct parts, in the order of the cut list.</param>
 /// <param name="Totals">Of the whole frame.</param>
-public sealed record ShopPackage(CutFrame Cut, IReadOnlyList<Part> Parts, Totals Totals);
+/// <param name="Stock">Bars to buy and how each is cut.</param>
+public sealed record ShopPackage(CutFrame Cut, IReadOnlyList<Part> Parts, Totals Totals, StockPlan Stock);
 
 /// <summary>One distinct part.</summary>
 /// <param name="Mark">Its short name on every paper and in file names.</param>

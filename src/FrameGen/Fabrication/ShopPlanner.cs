@@ -1,3 +1,4 @@
+using FrameGen.Diagnostics;
 using FrameGen.Geometry;
 using FrameGen.Joints;
 using FrameGen.Mechanics.Sections;
@@ -16,7 +17,10 @@ public static class ShopPlanner
     /// then size), by material, long ones first, then by name. Lengths are compared as the cut list prints them, so that
     /// rounding noise between mirrored twins does not decide.
     /// </remarks>
-    public static ShopPackage Plan(CutFrame cut)
+    /// <param name="cut">The frame.</param>
+    /// <param name="diagnostics">A piece longer than any bar: an error.</param>
+    /// <returns>The package, or null when an error was reported.</returns>
+    public static ShopPackage? Plan(CutFrame cut, DiagnosticList diagnostics)
     {
         SizedFrame sized = cut.Sized;
         FrameModel model = sized.Model;
@@ -33,7 +37,7 @@ public static class ShopPlanner
                 .ThenBy(t => model.Tubes[t.Tube].Name, StringComparer.Ordinal)
                 .Select(t => new Part(marks[t.Tube], [t.Tube], t, SeatTwist.Degrees(t), Note(sized, t))),
         ];
-        return new ShopPackage(cut, parts, Sum(cut));
+        return new StockPlanner(sized, diagnostics).Plan(parts) is { } stock ? new ShopPackage(cut, parts, Sum(cut), stock) : null;
     }
 
     private static Totals Sum(CutFrame cut)

@@ -2,7 +2,6 @@ using System.Globalization;
 using FrameGen.Diagnostics;
 using FrameGen.Fabrication.Cutting;
 using FrameGen.Mechanics.Materials;
-using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Model.Resolving;
 using FrameGen.Sizing;

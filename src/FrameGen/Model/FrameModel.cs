@@ -31,6 +31,9 @@ public sealed record FrameModel(
     IReadOnlyList<JointRequest> Joints,
     Fabrication Fabrication)
 {
+    /// <summary>Tubes on the rack, in the order written.</summary>
+    public IReadOnlyList<RackTube> Have { get; init; } = [];
+
     /// <summary>By node: the tube ends there, in the order of <see cref="Tubes"/>; a through tube has none there.</summary>
     public IReadOnlyList<IReadOnlyList<TubeEndId>> EndsAt { get; } = EndsByNode(Nodes.Count, Tubes);
 

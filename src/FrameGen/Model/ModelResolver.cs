@@ -32,7 +32,7 @@ public static class ModelResolver
 
         var materials = new MaterialTable(spec.Materials, values);
         var stock = new StockTable(spec.Stock, materials, values);
-        RackCheck.Run(spec.Have, materials, values);
+        IReadOnlyList<RackTube> have = RackResolver.Resolve(spec.Have, materials, values);
         TubeGroup?[] groups = GroupResolver.Resolve(spec.Groups, materials, stock, values);
 
         if (spec.Mirror is not null && reflection is null)
@@ -76,7 +76,10 @@ public static class ModelResolver
             [.. cases.Select(c => c!)],
             [.. bound.Select(t => used.Renumber(t!))],
             joints,
-            shop.Value.Fabrication);
+            shop.Value.Fabrication)
+        {
+            Have = have,
+        };
     }
 
     private static Frame PlaceFrame(FrameSpec spec, Reflection? mirror, double gap, SpecValues values)

@@ -119,6 +119,12 @@ public sealed class DisplayFormat(DisplaySpec display)
         return lost < Visible ? Length(mm) : $"{Length(mm)} ({FixedDigits.Print(inches, "0.000")})";
     }
 
+    /// <summary>A length to be measured off in <see cref="LengthUnitName"/>, for a column whose head names the unit; fractions of an inch with the decimals beside them, <c>6-3/8 (6.354)</c>.</summary>
+    /// <param name="mm">Length, mm.</param>
+    public string MeasuredNumber(double mm) => display.Length == LengthUnit.Inch && display.Fraction is not null
+        ? $"{LengthNumber(mm)} ({FixedDigits.Print(UnitsNet.Length.FromMillimeters(mm).Inches, "0.000")})"
+        : LengthNumber(mm);
+
     /// <summary>A small movement in <see cref="LengthUnitName"/>, three significant digits, at most six decimals: <c>0.0312</c>, <c>1.64</c>, <c>412</c>; never a fraction.</summary>
     /// <param name="mm">Length, mm.</param>
     public string SmallLengthNumber(double mm)

@@ -9,10 +9,6 @@ using FrameGen.Sizing;
 namespace FrameGen.Output;
 
 /// <summary>frame.json: everything computed.</summary>
-/// <remarks>
-/// What is not computed yet (the stock plan, and with it the cost of priced bars) has no key:
-/// null would say that it was looked for and not found.
-/// </remarks>
 public static class FrameJson
 {
     private const int StepDegrees = 5;
@@ -28,6 +24,7 @@ public static class FrameJson
         SizingJson.WriteProperties(json, package.Cut.Sized);
         WriteTubes(json, package);
         WriteParts(json, package);
+        WriteStockPlan(json, package.Stock);
         WriteTotals(json, package);
         json.WriteEndObject();
     }
@@ -143,6 +140,25 @@ public static class FrameJson
         json.WriteEndArray();
     }
 
+    private static void WriteStockPlan(Utf8JsonWriter json, StockPlan plan)
+    {
+        json.WriteStartArray("stock_plan");
+        foreach (StockLot lot in plan.Lots)
+        {
+            json.WriteStartObject();
+            json.WriteString("material", lot.Material);
+            json.WriteString("section", lot.Section.Name);
+            json.Number("bar_mm", lot.BarLength);
+            json.WriteNumber("bars", lot.Bars.Count);
+            json.WriteNumber("lower_bound", lot.LowerBound);
+            json.StringRows("cuts", lot.Bars.Select(b => b.Cuts.Select(c => c.Part.Mark)));
+            json.Numbers("offcut_mm", [.. lot.Bars.Select(b => b.Offcut)]);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+    }
+
     private static void WriteTotals(Utf8JsonWriter json, ShopPackage package)
     {
         Totals totals = package.Totals;
@@ -152,11 +168,7 @@ public static class FrameJson
         json.Vector("centre_of_mass_mm", centre, Math.Max(1, centre.Length));
         json.Number("weld_length_mm", totals.WeldLength);
         json.Number("outer_area_m2", totals.OuterArea / 1e6);
-        if (package.Cut.Sized.Chosen.All(c => c.PricePerMetre is null))
-        {
-            json.WriteNull("cost");
-        }
-
+        json.Number("cost", package.Stock.Cost);
         json.WriteEndObject();
     }
 }

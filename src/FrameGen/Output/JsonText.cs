@@ -78,10 +78,19 @@ public static class JsonText
     /// <summary>A list of texts on one line.</summary>
     public static void Strings(this Utf8JsonWriter writer, string name, IEnumerable<string> values)
     {
-        string text = string.Join(", ", values.Select(v => $"\"{JsonEncodedText.Encode(v, JavaScriptEncoder.UnsafeRelaxedJsonEscaping)}\""));
         writer.WritePropertyName(name);
-        writer.WriteRawValue($"[{text}]");
+        writer.WriteRawValue(List(values));
     }
+
+    /// <summary>A list of lists of texts, on one line.</summary>
+    public static void StringRows(this Utf8JsonWriter writer, string name, IEnumerable<IEnumerable<string>> rows)
+    {
+        writer.WritePropertyName(name);
+        writer.WriteRawValue($"[{string.Join(", ", rows.Select(List))}]");
+    }
+
+    private static string List(IEnumerable<string> values) =>
+        $"[{string.Join(", ", values.Select(v => $"\"{JsonEncodedText.Encode(v, JavaScriptEncoder.UnsafeRelaxedJsonEscaping)}\""))}]";
 
     private static void Append(StringBuilder text, ReadOnlySpan<double> values)
     {

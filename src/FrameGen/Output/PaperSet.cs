@@ -15,12 +15,15 @@ public static class PaperSet
             OutputFile.FromText("cut-list.csv", CutListCsv.Write(package)),
             OutputFile.FromText("cut-list.md", TextTemplate.Render("cut-list.md", CutListModel.From(package))),
             OutputFile.FromText("ends.csv", EndsCsv.Write(package)),
+            OutputFile.FromText("stock-plan.csv", StockPlanCsv.Write(package)),
+            OutputFile.FromText("stock-plan.md", TextTemplate.Render("stock-plan.md", StockPlanModel.From(package))),
             OutputFile.FromText("setup.csv", SetupCsv.Write(package)),
             new("frame.json", FrameJson.Write(package)),
         };
         files.AddRange(ShapeFiles.Create(package));
         files.AddRange(copies);
         SelfCheck.Totals(package);
+        SelfCheck.Stock(package);
         SelfCheck.Equilibrium(package.Cut.Sized);
         files.Add(new OutputFile(Manifest.FileName, Manifest.Of(package.Cut.Sized.Model.Spec, includes, files).Write()));
         return files;

@@ -25,6 +25,30 @@ internal static class SelfCheck
         Require(pieces == package.Cut.Tubes.Count, $"the cut list has {pieces} pieces for {package.Cut.Tubes.Count} tubes");
     }
 
+    /// <summary>Every piece of the cut list is cut from one bar, once, and no bar is cut into more than it holds.</summary>
+    public static void Stock(ShopPackage package)
+    {
+        double kerf = package.Cut.Sized.Model.Fabrication.Kerf;
+        double trim = package.Cut.Sized.Model.Fabrication.BarTrim;
+        StockCut[] all = [.. package.Stock.Lots.SelectMany(l => l.Bars).SelectMany(b => b.Cuts)];
+        foreach (Part part in package.Parts)
+        {
+            int cut = all.Count(c => ReferenceEquals(c.Part, part));
+            Require(cut == part.Quantity, $"the stock plan has {cut} of {part.Mark} and the cut list {part.Quantity}");
+        }
+
+        Require(all.Length == package.Parts.Sum(p => p.Quantity), $"the stock plan has {all.Length} pieces");
+        foreach (StockLot lot in package.Stock.Lots)
+        {
+            foreach (StockBar bar in lot.Bars)
+            {
+                double pieces = bar.Cuts.Sum(c => c.Part.Drawn.CutLength) + ((bar.Cuts.Count - 1) * kerf) + (2 * trim);
+                bool fits = bar.Offcut >= 0 && Math.Abs(pieces + bar.Offcut - lot.BarLength) <= 0.001 * (bar.Cuts.Count + 2);
+                Require(fits, $"bar {bar.Label} of {lot.Section.Name} is {lot.BarLength} mm long and is cut into {pieces} mm and {bar.Offcut} mm");
+            }
+        }
+    }
+
     /// <summary>Reactions and loads of every case: the same within 1e-9.</summary>
     public static void Equilibrium(SizedFrame sized)
     {

@@ -1,4 +1,3 @@
-using System.Globalization;
 using FrameGen.Fabrication;
 
 namespace FrameGen.Output;

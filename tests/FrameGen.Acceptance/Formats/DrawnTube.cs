@@ -79,7 +79,7 @@ internal sealed record DrawnTube(Section Section, double Length)
         double stop = Length - to.Outer.Min;
         var tube = new CutTube(0, from, to, start, stop, 1, 1, Vector3.Zero, 1);
         var part = new Part(Mark, [.. Enumerable.Range(0, Names.Length)], tube, null, string.Empty);
-        return (new ShopPackage(new CutFrame(sized, [tube]), [part], new Totals(1, Vector3.Zero, 1, 1)), part);
+        return (new ShopPackage(new CutFrame(sized, [tube]), [part], new Totals(1, Vector3.Zero, 1, 1), new StockPlan([])), part);
     }
 
     private EndCut Cut(Func<double, double>? line)

@@ -31,7 +31,16 @@ internal static class GateFrame
         string title = "Garden gate",
         string notes = "",
         SizingStatus status = SizingStatus.Fixed,
-        bool square = false) => ShopPlanner.Plan(Cut(title, notes, status, square));
+        bool square = false) => Planned(Cut(title, notes, status, square));
+
+    /// <summary>Plans a frame that has nothing wrong with it.</summary>
+    public static ShopPackage Planned(CutFrame cut)
+    {
+        DiagnosticList diagnostics = [];
+        ShopPackage? package = ShopPlanner.Plan(cut, diagnostics);
+        Assert.Empty(diagnostics);
+        return package!;
+    }
 
     /// <summary>The same frame with its ends cut by the program.</summary>
     public static ShopPackage CopedPackage()
@@ -39,7 +48,7 @@ internal static class GateFrame
         var diagnostics = new DiagnosticList();
         CutFrame? cut = EndCoper.Cope(Sized(Model("Garden gate", string.Empty), SizingStatus.Fixed), diagnostics);
         Assert.False(diagnostics.HasErrors, string.Join('\n', diagnostics));
-        return ShopPlanner.Plan(cut!);
+        return Planned(cut!);
     }
 
     public static CutFrame Cut(

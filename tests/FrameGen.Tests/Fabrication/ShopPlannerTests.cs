@@ -20,7 +20,7 @@ public class ShopPlannerTests
         CutFrame cut = GateFrame.Cut(square: true);
         CutTube post = cut.Tubes[1];
         CutTube[] tubes = [cut.Tubes[0], post with { Stop = 500.000_000_01 }, cut.Tubes[2] with { Stop = 500 }];
-        Assert.Equal(["arm", "post", "rail"], ShopPlanner.Plan(cut with { Tubes = tubes }).Parts.Select(p => p.Mark).ToArray());
+        Assert.Equal(["arm", "post", "rail"], GateFrame.Planned(cut with { Tubes = tubes }).Parts.Select(p => p.Mark).ToArray());
     }
 
     [Fact]
@@ -46,7 +46,7 @@ public class ShopPlannerTests
     {
         CutFrame cut = GateFrame.Cut();
         double expected = cut.Tubes[1].From.OuterLength + cut.Tubes[1].To.OuterLength;
-        Assert.Equal(expected, ShopPlanner.Plan(cut).Totals.WeldLength, 1e-9);
+        Assert.Equal(expected, GateFrame.Planned(cut).Totals.WeldLength, 1e-9);
     }
 
     [Theory]
@@ -77,7 +77,7 @@ public class ShopPlannerTests
         EndCut seated = cut.Tubes[1].From;
         EndCut offset = seated with { Contacts = [seated.Contacts[0] with { Offset = 6 }] };
         CutTube[] tubes = [cut.Tubes[0], cut.Tubes[1] with { From = offset }, cut.Tubes[2]];
-        Assert.Equal("contour cut; from end wider than its seat: fill by hand", ShopPlanner.Plan(cut with { Tubes = tubes }).Parts[0].Note);
-        Assert.Equal("contour cut", ShopPlanner.Plan(cut).Parts[0].Note);
+        Assert.Equal("contour cut; from end wider than its seat: fill by hand", GateFrame.Planned(cut with { Tubes = tubes }).Parts[0].Note);
+        Assert.Equal("contour cut", GateFrame.Planned(cut).Parts[0].Note);
     }
 }

@@ -142,15 +142,16 @@ public class StockPlannerTests
             tubes.Append(CultureInfo.InvariantCulture, $"  post-{i + 1}: {{from: a{i}, to: b{i}, group: posts}}\n");
         }
 
-        string text = $$"""
+        nodes.Append('}');
+        string text = $$$"""
             framegen: 1
             groups: {posts: {material: S235, section: round 30 x 2 mm}}
             # the fence's posts
 
             tubes:
-            {{tubes.ToString().TrimEnd()}}
-            {{nodes}}}
-            {{more}}
+            {{{tubes.ToString().TrimEnd()}}}
+            {{{nodes}}}
+            {{{more}}}
 
             """;
         byte[] bytes = Encoding.UTF8.GetBytes(text);

@@ -10,12 +10,12 @@ namespace FrameGen.Tests.Output;
 public class FrameJsonTests
 {
     [Fact]
-    public void Has_the_agreed_keys_and_no_key_for_what_is_not_computed()
+    public void Has_the_agreed_keys()
     {
         using JsonDocument document = JsonDocument.Parse(FrameJson.Write(GateFrame.Package()));
         JsonElement root = document.RootElement;
         Assert.Equal(
-            ["format", "spec", "tool", "sizing", "groups", "targets", "cases", "tubes", "parts", "totals"],
+            ["format", "spec", "tool", "sizing", "groups", "targets", "cases", "tubes", "parts", "stock_plan", "totals"],
             root.EnumerateObject().Select(p => p.Name).ToArray());
         Assert.Equal("framegen-frame/1", root.GetProperty("format").GetString());
         Assert.Equal(
@@ -27,6 +27,9 @@ public class FrameJsonTests
             ["mass_kg", "centre_of_mass_mm", "weld_length_mm", "outer_area_m2", "cost"],
             root.GetProperty("totals").EnumerateObject().Select(p => p.Name).ToArray());
         Assert.Equal(JsonValueKind.Null, root.GetProperty("totals").GetProperty("cost").ValueKind);
+        Assert.Equal(
+            ["material", "section", "bar_mm", "bars", "lower_bound", "cuts", "offcut_mm"],
+            root.GetProperty("stock_plan")[0].EnumerateObject().Select(p => p.Name).ToArray());
     }
 
     [Fact]

@@ -16,7 +16,7 @@ public class PaperSetTests
         string[] paths = [.. PaperSet.Create(GateFrame.CopedPackage()).Select(f => f.Path)];
         string[] expected =
         [
-            "cut-list.csv", "cut-list.md", "ends.csv", "setup.csv", "frame.json", "manifest.json", "templates.pdf",
+            "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "frame.json", "manifest.json", "templates.pdf",
             "developed/post.dxf", "developed/arm.dxf", "developed/rail.dxf", "templates/post.dxf", "templates/arm.dxf",
             "spec/gate.yaml", "spec/gate-2.yaml", "preview/frame.stl", "preview/post.stl", "preview/arm.stl", "preview/rail.stl",
         ];
