@@ -28,6 +28,9 @@ public sealed class FrameSolver
     /// <summary>The held freedoms.</summary>
     public IReadOnlyList<Restraint> Restraints { get; }
 
+    /// <summary>All that does not depend on the design.</summary>
+    internal FrameLayout Layout => _layout;
+
     /// <summary>Assembles and factors the stiffness of one design.</summary>
     /// <param name="profiles">By <see cref="BeamElement.Profile"/>.</param>
     /// <exception cref="ArgumentException">Fewer profiles than the elements name.</exception>

@@ -1,6 +1,7 @@
 using System.Runtime.ExceptionServices;
 using FrameGen.Mechanics.Frames;
 using FrameGen.Sizing.Analysis;
+using FrameGen.Sizing.Program;
 using FrameGen.Sizing.Targets;
 
 namespace FrameGen.Sizing;
@@ -43,7 +44,7 @@ internal sealed class DesignSearch
     private enum Verdict : byte
     {
         Unseen,
-        DoesNotFit,
+        IsOut,
         Fails,
         Meets,
         Moves,
@@ -51,16 +52,18 @@ internal sealed class DesignSearch
 
     public IReadOnlyList<TargetCheck> Checks { get; }
 
+    /// <summary>Rows that every design satisfies which meets the targets: what breaks one needs no analysis.</summary>
+    public ChoiceProgram? Rows { get; init; }
+
     /// <summary>The first design in the order that fits and meets every target.</summary>
-    /// <param name="hopeless">True where none is known to: then only those that fit are counted.</param>
     /// <exception cref="MechanismException">A design before it can move without strain.</exception>
-    public SearchResult FindFirst(bool hopeless = false)
+    public SearchResult FindFirst()
     {
         var verdicts = new Verdict[_order.Length];
         int first = int.MaxValue;
         Walk(() => 0, (analysis, lastRefusal, rank) =>
         {
-            Verdict verdict = Judge(analysis, hopeless, ref lastRefusal);
+            Verdict verdict = Judge(analysis, ref lastRefusal);
             verdicts[rank] = verdict;
             if (verdict is Verdict.Meets or Verdict.Moves)
             {
@@ -71,15 +74,15 @@ internal sealed class DesignSearch
         }, rank => rank < Volatile.Read(ref first));
 
         int last = Math.Min(first, _order.Length - 1);
-        long fitting = 0;
+        long analysed = 0;
         for (int rank = 0; rank <= last; rank++)
         {
-            fitting += verdicts[rank] == Verdict.DoesNotFit ? 0 : 1;
+            analysed += verdicts[rank] == Verdict.IsOut ? 0 : 1;
         }
 
         if (first == int.MaxValue)
         {
-            return new SearchResult(null, fitting);
+            return new SearchResult(null, analysed);
         }
 
         if (verdicts[first] == Verdict.Moves)
@@ -91,7 +94,7 @@ internal sealed class DesignSearch
             throw new InvalidOperationException("A design moved without strain once and not again.");
         }
 
-        return new SearchResult(first, fitting);
+        return new SearchResult(first, analysed);
     }
 
     /// <summary>Looks at every design that fits: the least bad one, and for each target the best that can be had.</summary>
@@ -142,16 +145,11 @@ internal sealed class DesignSearch
         }
     }
 
-    private Verdict Judge(DesignAnalysis analysis, bool hopeless, ref int lastRefusal)
+    private Verdict Judge(DesignAnalysis analysis, ref int lastRefusal)
     {
-        if (!_joints.Fits(analysis.Choice, analysis.Sections))
+        if (Rows?.Keeps(analysis.Choice) == false || !_joints.Fits(analysis.Choice, analysis.Sections))
         {
-            return Verdict.DoesNotFit;
-        }
-
-        if (hopeless)
-        {
-            return Verdict.Fails;
+            return Verdict.IsOut;
         }
 
         try
@@ -273,7 +271,7 @@ internal sealed class DesignSearch
 
 /// <summary>What a search found.</summary>
 /// <param name="Rank">Place in the order of the first design that meets every target; null for none.</param>
-/// <param name="Looked">Designs that fit, up to and including it.</param>
+/// <param name="Looked">Designs analysed, up to and including it.</param>
 internal readonly record struct SearchResult(int? Rank, long Looked);
 
 /// <summary>What a survey of all designs found.</summary>

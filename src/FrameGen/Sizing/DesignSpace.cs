@@ -11,6 +11,9 @@ namespace FrameGen.Sizing;
 /// </summary>
 internal sealed class DesignSpace
 {
+    /// <summary>Units in a kilogram: far below any difference that sizes make, so that rounding decides nothing.</summary>
+    public const double UnitsPerKg = 1e9;
+
     private readonly Option[][] _options;
 
     private DesignSpace(FrameModel model, Option[][] options)
@@ -89,6 +92,18 @@ internal sealed class DesignSpace
         return mass;
     }
 
+    /// <summary>What is minimised, in whole units: sums of them are equal or not, and never nearly so.</summary>
+    public long UnitsOf(ReadOnlySpan<int> choice)
+    {
+        long units = 0;
+        for (int g = 0; g < choice.Length; g++)
+        {
+            units += _options[g][choice[g]].Units;
+        }
+
+        return units;
+    }
+
     /// <summary>
     /// Every design, lightest first; equal masses (to 1e-9 kg, far below any difference that sizes make, so that rounding decides
     /// nothing) by fewer different sizes, then by the sections' names group by group.
@@ -103,7 +118,7 @@ internal sealed class DesignSpace
         {
             Decode(design, choice);
             designs[design] = design;
-            masses[design] = (long)Math.Round(MassOf(choice) * 1e9);
+            masses[design] = UnitsOf(choice);
         }
 
         Array.Sort(masses, designs);
@@ -158,8 +173,28 @@ internal sealed class DesignSpace
                 massPerLength,
                 massPerLength * length,
                 section.OuterSize / 2,
-                names.IndexOf(section.Name));
+                names.IndexOf(section.Name))
+            {
+                Units = (long)Math.Round(massPerLength * length * UnitsPerKg),
+            };
         })];
+    }
+
+    /// <summary>Which of two designs of the same cost comes first: fewer different sizes, then the sections' names group by group.</summary>
+    public int CompareTies(ReadOnlySpan<int> a, ReadOnlySpan<int> b)
+    {
+        int order = DifferentSizes(a).CompareTo(DifferentSizes(b));
+        for (int g = 0; g < _options.Length && order == 0; g++)
+        {
+            order = _options[g][a[g]].NameRank.CompareTo(_options[g][b[g]].NameRank);
+        }
+
+        for (int g = 0; g < _options.Length && order == 0; g++)
+        {
+            order = a[g].CompareTo(b[g]);
+        }
+
+        return order;
     }
 
     private int CompareEquallyHeavy(int a, int b)
@@ -168,13 +203,7 @@ internal sealed class DesignSpace
         Span<int> choiceB = stackalloc int[_options.Length];
         Decode(a, choiceA);
         Decode(b, choiceB);
-        int order = DifferentSizes(choiceA).CompareTo(DifferentSizes(choiceB));
-        for (int g = 0; g < _options.Length && order == 0; g++)
-        {
-            order = _options[g][choiceA[g]].NameRank.CompareTo(_options[g][choiceB[g]].NameRank);
-        }
-
-        return order != 0 ? order : a.CompareTo(b);
+        return CompareTies(choiceA, choiceB);
     }
 }
 
@@ -189,4 +218,7 @@ internal sealed record Option(
     Candidate Candidate, BeamProfile Profile, double MassPerLength, double MassKg, double HalfWidth, int NameRank)
 {
     public Section Section => Candidate.Section;
+
+    /// <summary>What it adds to the objective.</summary>
+    public long Units { get; init; }
 }

@@ -9,6 +9,8 @@ namespace FrameGen.Sizing;
 /// <summary>Says which joints leave no design that can be made.</summary>
 internal static class FitReport
 {
+    private const long MostLooked = 1 << 16;
+
     /// <summary>Reports the joints that no choice of sizes suits; where each could be made alone, those that forbid something.</summary>
     public static void Explain(DesignAnalysis analysis, DiagnosticList diagnostics)
     {
@@ -54,7 +56,7 @@ internal static class FitReport
         bool some = false;
         FitProblem? nearest = null;
         Section[] at = sections;
-        for (int cell = 0; cell < node.Cells.Length; cell++)
+        for (long cell = 0; cell < Math.Min(node.Combinations, MostLooked); cell++)
         {
             node.Decode(cell, choice);
             for (int g = 0; g < sections.Length; g++)

@@ -60,12 +60,12 @@ internal sealed class JointTable
     /// <summary>The joint of one node in a design.</summary>
     public JointEntry At(NodeEntries node, ReadOnlySpan<int> choice, Section[] sections)
     {
-        int cell = node.CellOf(choice);
-        long entry = Volatile.Read(ref node.Cells[cell]);
+        long cell = node.CellOf(choice);
+        long entry = node.Read(cell);
         if (entry == 0)
         {
             entry = Find(node, sections);
-            Volatile.Write(ref node.Cells[cell], entry);
+            node.Write(cell, entry);
         }
 
         return new JointEntry(

@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using FrameGen.Model;
 
 namespace FrameGen.Sizing;
@@ -5,8 +6,13 @@ namespace FrameGen.Sizing;
 /// <summary>A node's entries, one for each combination of the groups that meet there.</summary>
 internal sealed class NodeEntries
 {
+    // More combinations than this are kept as they come up.
+    private const long MostKept = 1 << 16;
+
     private readonly int[] _groups;
-    private readonly int[] _strides;
+    private readonly long[] _strides;
+    private readonly long[] _entries;
+    private readonly ConcurrentDictionary<long, long> _rare = new();
 
     public NodeEntries(DesignSpace space, int node, int? through, IReadOnlyList<TubeEndId> ends)
     {
@@ -20,15 +26,16 @@ internal sealed class NodeEntries
 
         HasChosen = all.Any(g => !space.Model.Groups[g].IsFixed);
         _groups = [.. all.Where(g => space[g].Length > 1)];
-        _strides = new int[_groups.Length];
-        int cells = 1;
+        _strides = new long[_groups.Length];
+        long cells = 1;
         for (int i = 0; i < _groups.Length; i++)
         {
             _strides[i] = cells;
             cells = checked(cells * space[_groups[i]].Length);
         }
 
-        Cells = new long[cells];
+        Combinations = cells;
+        _entries = new long[cells <= MostKept ? cells : 0];
     }
 
     public int Node { get; }
@@ -44,11 +51,28 @@ internal sealed class NodeEntries
     /// <summary>Groups that meet here and have more than one option.</summary>
     public IReadOnlyList<int> Groups => _groups;
 
-    public long[] Cells { get; }
+    /// <summary>Combinations of the options that meet here.</summary>
+    public long Combinations { get; }
 
-    public int CellOf(ReadOnlySpan<int> choice)
+    /// <summary>What was written for a combination; 0 for nothing.</summary>
+    public long Read(long cell) => _entries.Length > 0 ? Volatile.Read(ref _entries[cell]) : _rare.GetValueOrDefault(cell);
+
+    /// <summary>Writes an entry. Threads that write the same one write the same.</summary>
+    public void Write(long cell, long entry)
     {
-        int cell = 0;
+        if (_entries.Length > 0)
+        {
+            Volatile.Write(ref _entries[cell], entry);
+        }
+        else
+        {
+            _rare[cell] = entry;
+        }
+    }
+
+    public long CellOf(ReadOnlySpan<int> choice)
+    {
+        long cell = 0;
         for (int i = 0; i < _groups.Length; i++)
         {
             cell += _strides[i] * choice[_groups[i]];
@@ -58,11 +82,11 @@ internal sealed class NodeEntries
     }
 
     /// <summary>Sets the groups that meet here to the combination of a cell.</summary>
-    public void Decode(int cell, Span<int> choice)
+    public void Decode(long cell, Span<int> choice)
     {
         for (int i = _groups.Length - 1; i >= 0; i--)
         {
-            (choice[_groups[i]], cell) = (cell / _strides[i], cell % _strides[i]);
+            (choice[_groups[i]], cell) = ((int)(cell / _strides[i]), cell % _strides[i]);
         }
     }
 

