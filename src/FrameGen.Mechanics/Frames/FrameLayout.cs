@@ -226,7 +226,7 @@ internal sealed class FrameLayout
             {
                 frontOf[column] = s;
                 int offset = Six * (column - fronts[s].First);
-                lists[s].Add(new Placement(-1, (offset * fronts[s].Stride) + offset, column, column));
+                lists[s].Add(new Placement(-1, fronts[s].OffsetOf(offset, offset), column, column));
             }
         }
 
@@ -234,7 +234,7 @@ internal sealed class FrameLayout
         {
             int s = frontOf[PairColumns[pair]];
             Front front = fronts[s];
-            int offset = (Six * (PairColumns[pair] - front.First) * front.Stride) + front.RowOf(PairRows[pair]);
+            int offset = front.OffsetOf(front.RowOf(PairRows[pair]), Six * (PairColumns[pair] - front.First));
             lists[s].Add(new Placement(pair, offset, PairRows[pair], PairColumns[pair]));
         }
 

@@ -1,8 +1,20 @@
 namespace FrameGen.Mechanics.Frames;
 
-/// <summary>One front of the factor: neighbouring columns with one pattern; places and sizes only, no values.</summary>
+/// <summary>
+/// One front of the factor (a supernode): neighbouring columns with one pattern; places and sizes only, no values.
+/// </summary>
+/// <remarks>
+/// Its panel holds the rows of its own columns, then the rows below, column by column in slices of <see cref="SliceWidth"/> columns: a slice begins
+/// at its own first row, so that little is held above the diagonal. Columns are padded to whole groups of <see cref="SymbolicFactor.Lanes"/> rows.
+/// </remarks>
 internal sealed class Front
 {
+    /// <summary>Columns of a slice, in freedoms: deep enough to be worth the memory traffic, small enough for six rows of L and eight
+    /// of W to stay in the nearest cache.</summary>
+    public const int SliceWidth = 48;
+
+    private const int Six = SymbolicFactor.Six;
+
     /// <summary>Own columns and the rows below them.</summary>
     /// <param name="first">First column, in nodes.</param>
     /// <param name="columns">Number of columns, in nodes.</param>
@@ -10,8 +22,9 @@ internal sealed class Front
     public Front(int first, int columns, int[] below)
     {
         (First, Columns, Below) = (first, columns, below);
-        OwnStride = RoundUp(SymbolicFactor.Six * columns);
-        BelowStride = RoundUp(SymbolicFactor.Six * below.Length);
+        Stride = (Rows + SymbolicFactor.Lanes - 1) / SymbolicFactor.Lanes * SymbolicFactor.Lanes;
+        int last = OwnRows / SliceWidth;
+        PanelLength = SliceStart(last) + ((OwnRows - (SliceWidth * last)) * SliceStride(last));
     }
 
     /// <summary>First own column, in nodes.</summary>
@@ -23,32 +36,39 @@ internal sealed class Front
     /// <summary>Rows below, in nodes, ascending.</summary>
     public int[] Below { get; }
 
-    /// <summary>Padded rows of the own columns.</summary>
-    public int OwnStride { get; }
+    /// <summary>Own columns, and their rows, in freedoms.</summary>
+    public int OwnRows => Six * Columns;
 
-    /// <summary>Padded rows below; the leftover's column stride.</summary>
-    public int BelowStride { get; }
+    /// <summary>All rows, in freedoms.</summary>
+    public int Rows => Six * (Columns + Below.Length);
 
-    /// <summary>The panel's column stride.</summary>
-    public int Stride => OwnStride + BelowStride;
+    /// <summary>Rows with their padding: the column stride of the first slice.</summary>
+    public int Stride { get; }
 
     /// <summary>Where the panel starts among all panels.</summary>
     public long PanelStart { get; set; }
 
-    /// <summary>Which stack the leftover is on.</summary>
-    public int Stack { get; set; }
+    /// <summary>Doubles of the panel.</summary>
+    public int PanelLength { get; }
 
-    /// <summary>Where the leftover starts on its stack.</summary>
-    public long LeftoverStart { get; set; }
+    /// <summary>Earlier fronts that reach into this one's columns, in their order.</summary>
+    public FrontUpdate[] Updates { get; set; } = [];
 
-    /// <summary>Fronts whose leftovers are added here.</summary>
-    public Front[] Children { get; set; } = [];
+    /// <summary>Where a slice starts in the panel.</summary>
+    public int SliceStart(int slice) => SliceWidth * ((Stride * slice) - (SliceWidth * (slice * (slice - 1) / 2)));
 
-    /// <summary>For each row below, in nodes: its place among the parent's own columns (from 0) and rows below (after those).</summary>
-    public int[] InParent { get; private set; } = [];
+    /// <summary>From one column of a slice to the next.</summary>
+    public int SliceStride(int slice) => Stride - (SliceWidth * slice);
 
-    /// <summary>Rows below that follow one another in the parent too.</summary>
-    public Run[] Runs { get; private set; } = [];
+    /// <summary>Where a value stands in the panel.</summary>
+    /// <param name="row">Row, in freedoms; not above the column's slice.</param>
+    /// <param name="column">Own column, in freedoms, from 0.</param>
+    public int OffsetOf(int row, int column)
+    {
+        int slice = column / SliceWidth;
+        int before = SliceWidth * slice;
+        return SliceStart(slice) + ((column - before) * SliceStride(slice)) + row - before;
+    }
 
     /// <summary>Row, in freedoms, of the front's own column or row below; −1 for one that is not in this front.</summary>
     /// <param name="column">A column of the factor, in nodes.</param>
@@ -56,43 +76,14 @@ internal sealed class Front
     {
         if (column < First + Columns)
         {
-            return column < First ? -1 : SymbolicFactor.Six * (column - First);
+            return column < First ? -1 : Six * (column - First);
         }
 
         int place = Array.BinarySearch(Below, column);
-        return place < 0 ? -1 : OwnStride + (SymbolicFactor.Six * place);
+        return place < 0 ? -1 : OwnRows + (Six * place);
     }
 
-    /// <summary>The front's panel: <see cref="Stride"/> rows for each of its own freedoms, column by column.</summary>
+    /// <summary>The front's panel.</summary>
     /// <param name="panels">All fronts' panels.</param>
-    public Span<double> PanelIn(double[] panels) => panels.AsSpan((int)PanelStart, Stride * SymbolicFactor.Six * Columns);
-
-    /// <summary>Works out where the leftover goes.</summary>
-    public void ConnectTo(Front parent)
-    {
-        InParent = new int[Below.Length];
-        var runs = new List<Run>();
-        for (int a = 0; a < Below.Length; a++)
-        {
-            int row = parent.RowOf(Below[a]);
-            InParent[a] = row < parent.OwnStride
-                ? row / SymbolicFactor.Six
-                : parent.Columns + ((row - parent.OwnStride) / SymbolicFactor.Six);
-            if (runs.Count > 0 && runs[^1] is var last && last.ParentRow + (SymbolicFactor.Six * (a - last.Start)) == row)
-            {
-                runs[^1] = last with { End = a + 1 };
-            }
-            else
-            {
-                runs.Add(new Run(a, a + 1, row));
-            }
-        }
-
-        Runs = [.. runs];
-    }
-
-    private static int RoundUp(int rows) => (rows + SymbolicFactor.Lanes - 1) / SymbolicFactor.Lanes * SymbolicFactor.Lanes;
-
-    /// <summary>Rows below, in nodes, from Start to End, that stand in the parent's front from ParentRow (in freedoms) on.</summary>
-    internal readonly record struct Run(int Start, int End, int ParentRow);
+    public Span<double> PanelIn(double[] panels) => panels.AsSpan((int)PanelStart, PanelLength);
 }

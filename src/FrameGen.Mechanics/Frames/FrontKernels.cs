@@ -130,6 +130,29 @@ internal static class FrontKernels
         AddTo(ref Unsafe.Add(ref c, Lanes), b);
     }
 
+    /// <summary>W = −L D on groups of eight rows; rows past the end give what is not asked.</summary>
+    /// <param name="l">First row, first column.</param>
+    /// <param name="stride">From one column of L to the next.</param>
+    /// <param name="pivots">D, one a column.</param>
+    /// <param name="w">First group: for each column eight rows side by side.</param>
+    /// <param name="groupStride">From one group of W to the next.</param>
+    /// <param name="groups">Number of groups.</param>
+    public static void Scale(
+        ref double l, nuint stride, ReadOnlySpan<double> pivots, ref double w, nuint groupStride, int groups)
+    {
+        for (int k = 0; k < pivots.Length; k++)
+        {
+            Vector512<double> factor = Vector512.Create(-pivots[k]);
+            ref double to = ref Unsafe.Add(ref w, k * Lanes);
+            for (nuint group = 0; group < (nuint)groups; group++)
+            {
+                (Vector512.LoadUnsafe(ref l, group * Lanes) * factor).StoreUnsafe(ref to, group * groupStride);
+            }
+
+            l = ref Unsafe.Add(ref l, stride);
+        }
+    }
+
     /// <summary>
     /// Rows below a factored 6 × 6 diagonal block: W = −A L⁻ᵀ, then A := −W D⁻¹, on groups of eight rows.
     /// </summary>

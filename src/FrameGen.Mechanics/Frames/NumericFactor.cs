@@ -15,15 +15,14 @@ internal sealed class NumericFactor
     private const int Six = SymbolicFactor.Six;
     private const int Lanes = SymbolicFactor.Lanes;
 
-    // Columns eliminated before the rest of the front is brought up to date: deep enough to be worth the memory traffic, small
-    // enough for six rows of L and eight of W to stay in the nearest cache.
-    private const int Depth = 48;
+    private const int Depth = Front.SliceWidth;
     private const int GroupStride = Lanes * Depth;
 
     private readonly SymbolicFactor _symbolic;
     private readonly double[] _panels;
-    private readonly double[][] _stacks;
     private readonly double[] _scaled;
+    private readonly double[] _product;
+    private readonly double[] _pivots;
     private readonly double[] _inversePivots;
     private readonly TriangularSolver _solver;
     private readonly List<int> _suspects = [];
@@ -32,13 +31,12 @@ internal sealed class NumericFactor
     public NumericFactor(SymbolicFactor symbolic)
     {
         _symbolic = symbolic;
-        _panels = GC.AllocateUninitializedArray<double>((int)symbolic.PanelLength);
-        _stacks =
-        [
-            GC.AllocateUninitializedArray<double>(checked((int)symbolic.StackLengths[0])),
-            GC.AllocateUninitializedArray<double>(checked((int)symbolic.StackLengths[1])),
-        ];
+
+        // Whole groups of rows are read, the last one of the last panel past its end.
+        _panels = GC.AllocateUninitializedArray<double>((int)symbolic.PanelLength + Lanes);
         _scaled = new double[(Depth * symbolic.WidestFront) + GroupStride];
+        _product = GC.AllocateUninitializedArray<double>(Depth * (symbolic.WidestFront + Lanes));
+        _pivots = new double[Six * symbolic.Order.Length];
         _inversePivots = new double[Six * symbolic.Order.Length];
         _solver = new TriangularSolver(symbolic, _panels, _inversePivots);
     }
@@ -60,16 +58,14 @@ internal sealed class NumericFactor
         {
             Front front = fronts[s];
             Span<double> panel = PanelOf(front);
-            Span<double> leftover = LeftoverOf(front);
             panel.Clear();
-            leftover.Clear();
             stiffness.AddTo(s, panel);
-            foreach (Front child in front.Children)
+            foreach (FrontUpdate update in front.Updates)
             {
-                Extend(child, LeftoverOf(child), front, panel, leftover);
+                Add(update, front, panel);
             }
 
-            Eliminate(front, panel, leftover, stiffness.Diagonal, isFixed);
+            Eliminate(front, panel, stiffness.Diagonal, isFixed);
         }
     }
 
@@ -81,138 +77,153 @@ internal sealed class NumericFactor
 
     private Span<double> PanelOf(Front front) => front.PanelIn(_panels);
 
-    private Span<double> LeftoverOf(Front front) =>
-        _stacks[front.Stack].AsSpan((int)front.LeftoverStart, front.BelowStride * Six * front.Below.Length);
-
-    /// <summary>Adds a child's leftover to its parent's front.</summary>
-    private static void Extend(Front child, ReadOnlySpan<double> from, Front parent, Span<double> panel, Span<double> leftover)
+    /// <summary>Brings a front up to date with an earlier one, as many columns as a slice has at a time.</summary>
+    private void Add(FrontUpdate update, Front front, Span<double> panel)
     {
-        int next = 0;
-        for (int b = 0; b < child.Below.Length; b++)
+        const int Nodes = Depth / Six;
+        Front source = update.Source;
+        ref double from = ref MemoryMarshal.GetReference(PanelOf(source));
+        for (int start = update.Start; start < update.End; start += Nodes)
         {
-            while (child.Runs[next].End <= b)
+            int end = Math.Min(start + Nodes, update.End);
+            int row = source.OwnRows + (Six * start);
+            int groups = (source.Rows - row + Lanes - 1) / Lanes;
+            int stride = Lanes * groups;
+            Span<double> product = _product.AsSpan(0, stride * Six * (end - start));
+            product.Clear();
+            for (int slice = 0; Depth * slice < source.OwnRows; slice++)
             {
-                next++;
+                int before = Depth * slice;
+                int depth = Math.Min(Depth, source.OwnRows - before);
+                nuint sourceStride = (nuint)source.SliceStride(slice);
+                ref double l = ref Unsafe.Add(ref from, source.SliceStart(slice) + row - before);
+                ReadOnlySpan<double> pivots = _pivots.AsSpan((Six * source.First) + before, depth);
+                FrontKernels.Scale(ref l, sourceStride, pivots, ref _scaled[0], GroupStride, groups);
+                for (int j = 0; j < Six * (end - start); j += Six)
+                {
+                    int group = j / Lanes;
+                    FrontKernels.AddProduct(
+                        ref product[(j * stride) + (Lanes * group)],
+                        (nuint)stride,
+                        ref _scaled[group * GroupStride],
+                        GroupStride,
+                        groups - group,
+                        ref Unsafe.Add(ref l, j),
+                        sourceStride,
+                        depth);
+                }
             }
 
-            int place = child.InParent[b];
-            bool own = place < parent.Columns;
-            Span<double> target = own ? panel : leftover;
-            int stride = own ? parent.Stride : parent.BelowStride;
-            int shift = own ? 0 : parent.OwnStride;
-            int column = Six * (own ? place : place - parent.Columns);
+            Scatter(update, start, end, product, stride, front, panel);
+        }
+    }
+
+    /// <summary>Adds columns of a product to the front they reach into, from the diagonal down.</summary>
+    private static void Scatter(
+        FrontUpdate update, int start, int end, ReadOnlySpan<double> product, int stride, Front front, Span<double> panel)
+    {
+        FrontUpdate.Run[] runs = update.Runs;
+        int first = 0;
+        for (int b = start; b < end; b++)
+        {
+            while (runs[first].End <= b)
+            {
+                first++;
+            }
+
+            int column = Six * (update.Source.Below[b] - front.First);
+            int targetStride = front.SliceStride(column / Depth);
+            Span<double> target = panel[front.OffsetOf(column, column)..];
             for (int c = 0; c < Six; c++)
             {
-                ReadOnlySpan<double> source = from.Slice(((Six * b) + c) * child.BelowStride, child.BelowStride);
-                Span<double> destination = target.Slice((column + c) * stride, stride);
-                for (int r = next; r < child.Runs.Length; r++)
+                ReadOnlySpan<double> source = product.Slice(((Six * (b - start)) + c) * stride, stride);
+                for (int r = first; r < runs.Length; r++)
                 {
-                    Front.Run run = child.Runs[r];
-                    int start = Math.Max(run.Start, b);
+                    FrontUpdate.Run run = runs[r];
+                    int from = Math.Max(run.Start, b);
                     FrontKernels.Add(
-                        source.Slice(Six * start, Six * (run.End - start)),
-                        destination[(run.ParentRow + (Six * (start - run.Start)) - shift)..]);
+                        source.Slice(Six * (from - start), Six * (run.End - from)),
+                        target[((c * targetStride) + run.Row + (Six * (from - run.Start)) - column)..]);
                 }
             }
         }
     }
 
-    /// <summary>Eliminates the front's own columns and leaves the Schur complement in the leftover.</summary>
-    private void Eliminate(Front front, Span<double> panel, Span<double> leftover, double[] diagonal, bool[]? isFixed)
+    /// <summary>Eliminates the front's own columns.</summary>
+    private void Eliminate(Front front, Span<double> panel, double[] diagonal, bool[]? isFixed)
     {
-        int own = Six * front.Columns;
-        int stride = front.Stride;
+        int own = front.OwnRows;
         Span<double> block = stackalloc double[Six * Six];
         for (int outer = 0; outer < own; outer += Depth)
         {
             int end = Math.Min(outer + Depth, own);
             for (int k = outer; k < end; k += Six)
             {
-                FactorBlock(panel, stride, k, (Six * front.First) + k, block, diagonal, isFixed);
+                FactorBlock(front, panel, k, block, diagonal, isFixed);
                 SolveBelow(front, panel, outer, k, block);
                 for (int j = k + Six; j < end; j += Six)
                 {
-                    UpdateColumns(panel, stride, j, k - outer, k, Six);
+                    UpdateColumns(front, panel, j, k - outer, k, Six);
                 }
             }
 
             for (int j = end; j < own; j += Six)
             {
-                UpdateColumns(panel, stride, j, 0, outer, end - outer);
+                UpdateColumns(front, panel, j, 0, outer, end - outer);
             }
-
-            UpdateLeftover(front, panel, leftover, outer, end);
         }
     }
 
     private void SolveBelow(Front front, Span<double> panel, int outer, int k, ReadOnlySpan<double> block)
     {
-        int stride = front.Stride;
+        int stride = front.SliceStride(outer / Depth);
         int firstGroup = (k + Six) / Lanes;
         ref double p = ref MemoryMarshal.GetReference(panel);
         FrontKernels.SolveBelow(
-            ref Unsafe.Add(ref p, (k * stride) + (firstGroup * Lanes)),
+            ref Unsafe.Add(ref p, front.OffsetOf(firstGroup * Lanes, k)),
             (nuint)stride,
             ref _scaled[(firstGroup * GroupStride) + ((k - outer) * Lanes)],
             GroupStride,
-            (stride / Lanes) - firstGroup,
+            (front.Stride / Lanes) - firstGroup,
             block,
             _inversePivots.AsSpan((Six * front.First) + k, Six));
 
         // The block's own L; the first group of eight rows may have begun inside of it.
+        ref double own = ref Unsafe.Add(ref p, front.OffsetOf(k, k));
         for (int c = 0; c < Six; c++)
         {
             for (int i = c + 1; i < Six; i++)
             {
-                Unsafe.Add(ref p, ((k + c) * stride) + k + i) = block[(Six * c) + i];
+                Unsafe.Add(ref own, (c * stride) + i) = block[(Six * c) + i];
             }
         }
     }
 
-    /// <summary>Six columns of the panel, brought up to date with some columns before them.</summary>
-    private void UpdateColumns(Span<double> panel, int stride, int j, int firstScaled, int firstColumn, int depth)
+    /// <summary>Six columns of the panel, brought up to date with some columns of one slice before them.</summary>
+    private void UpdateColumns(Front front, Span<double> panel, int j, int firstScaled, int firstColumn, int depth)
     {
         ref double p = ref MemoryMarshal.GetReference(panel);
         int group = j / Lanes;
         FrontKernels.AddProduct(
-            ref Unsafe.Add(ref p, (j * stride) + (group * Lanes)),
-            (nuint)stride,
+            ref Unsafe.Add(ref p, front.OffsetOf(group * Lanes, j)),
+            (nuint)front.SliceStride(j / Depth),
             ref _scaled[(group * GroupStride) + (firstScaled * Lanes)],
             GroupStride,
-            (stride / Lanes) - group,
-            ref Unsafe.Add(ref p, (firstColumn * stride) + j),
-            (nuint)stride,
+            (front.Stride / Lanes) - group,
+            ref Unsafe.Add(ref p, front.OffsetOf(j, firstColumn)),
+            (nuint)front.SliceStride(firstColumn / Depth),
             depth);
     }
 
-    private void UpdateLeftover(Front front, Span<double> panel, Span<double> leftover, int outer, int end)
-    {
-        int rows = Six * front.Below.Length;
-        int stride = front.BelowStride;
-        ref double p = ref MemoryMarshal.GetReference(panel);
-        ref double q = ref MemoryMarshal.GetReference(leftover);
-        for (int j = 0; j < rows; j += Six)
-        {
-            int group = j / Lanes;
-            FrontKernels.AddProduct(
-                ref Unsafe.Add(ref q, (j * stride) + (group * Lanes)),
-                (nuint)stride,
-                ref _scaled[((front.OwnStride / Lanes) + group) * GroupStride],
-                GroupStride,
-                (stride / Lanes) - group,
-                ref Unsafe.Add(ref p, (outer * front.Stride) + front.OwnStride + j),
-                (nuint)front.Stride,
-                end - outer);
-        }
-    }
-
     /// <summary>LDLᵀ of one node's 6 × 6 diagonal block; D⁻¹ goes to the inverse pivots.</summary>
-    private void FactorBlock(
-        Span<double> panel, int stride, int k, int freedom, Span<double> block, double[] diagonal, bool[]? isFixed)
+    private void FactorBlock(Front front, Span<double> panel, int k, Span<double> block, double[] diagonal, bool[]? isFixed)
     {
+        int freedom = (Six * front.First) + k;
+        int offset = front.OffsetOf(k, k);
+        int stride = front.SliceStride(k / Depth);
         for (int c = 0; c < Six; c++)
         {
-            panel.Slice(((k + c) * stride) + k, Six).CopyTo(block.Slice(Six * c, Six));
+            panel.Slice(offset + (c * stride), Six).CopyTo(block.Slice(Six * c, Six));
         }
 
         for (int c = 0; c < Six; c++)
@@ -230,6 +241,7 @@ internal sealed class NumericFactor
                 inverse = pivot > LostPivot * whole ? inverse : 0;
             }
 
+            _pivots[freedom + c] = inverse == 0 ? 0 : pivot;
             _inversePivots[freedom + c] = inverse;
             for (int j = c + 1; j < Six; j++)
             {

@@ -88,7 +88,7 @@ internal sealed class StiffnessBlocks
     /// <param name="panel">Its panel.</param>
     public void AddTo(int front, Span<double> panel)
     {
-        int stride = _layout.Symbolic.Fronts[front].Stride;
+        Front place = _layout.Symbolic.Fronts[front];
         foreach (FrameLayout.Placement placement in _layout.Placements[front])
         {
             bool diagonal = placement.Pair < 0;
@@ -96,6 +96,7 @@ internal sealed class StiffnessBlocks
                 ? _own.AsSpan(BlockSize * placement.Column, BlockSize)
                 : _pairs.AsSpan(BlockSize * placement.Pair, BlockSize);
             Span<double> target = panel[placement.Offset..];
+            int stride = place.SliceStride(Six * (placement.Column - place.First) / Front.SliceWidth);
             for (int c = 0; c < Six; c++)
             {
                 block.Slice(Six * c, Six).CopyTo(target.Slice(c * stride, Six));

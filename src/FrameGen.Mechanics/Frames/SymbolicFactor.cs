@@ -4,13 +4,9 @@ namespace FrameGen.Mechanics.Frames;
 
 /// <summary>
 /// The layout of the factor, made once a topology: columns with the same pattern are gathered in fronts (supernodes), each a dense
-/// panel, and every front knows where its leftover goes in its parent (the multifrontal method: I. Duff, J. Reid, ACM Trans.
-/// Math. Softw. 9 (1983) 302).
+/// panel, and every front knows which earlier ones reach into it (the left-looking supernodal method: E. Ng, B. Peyton, SIAM J. Sci. Comput.
+/// 14 (1993) 1034). Nothing is held beside the factor itself, whose memory is what limits large frames.
 /// </summary>
-/// <remarks>
-/// Rows of a front: its own columns' freedoms, padded to a multiple of eight, then the rows below, padded too. A panel holds all of
-/// them for the own columns, column by column; the leftover (Schur complement) holds the rows below for themselves. Padding is zero.
-/// </remarks>
 internal sealed class SymbolicFactor
 {
     /// <summary>Freedoms a node.</summary>
@@ -30,16 +26,14 @@ internal sealed class SymbolicFactor
         foreach (Front front in fronts)
         {
             front.PanelStart = PanelLength;
-            PanelLength += (long)front.Stride * Six * front.Columns;
+            PanelLength += front.PanelLength;
             WidestFront = Math.Max(WidestFront, front.Stride);
         }
 
-        if (PanelLength > Array.MaxLength)
+        if (PanelLength + Lanes > Array.MaxLength)
         {
             throw new InvalidOperationException("The frame's factor does not fit into one array.");
         }
-
-        StackLeftovers();
     }
 
     /// <summary>Node at each place of the elimination order.</summary>
@@ -53,9 +47,6 @@ internal sealed class SymbolicFactor
 
     /// <summary>Doubles of all panels.</summary>
     public long PanelLength { get; }
-
-    /// <summary>Doubles of the leftovers alive at one time, on each of two stacks.</summary>
-    public long[] StackLengths { get; } = new long[2];
 
     /// <summary>The largest <see cref="Front.Stride"/>.</summary>
     public int WidestFront { get; }
@@ -152,53 +143,7 @@ internal sealed class SymbolicFactor
             Array.Fill(frontOf, s, fronts[s].First, fronts[s].Columns);
         }
 
-        var children = new List<Front>[fronts.Length];
-        for (int s = 0; s < fronts.Length; s++)
-        {
-            fronts[s].Children = children[s]?.ToArray() ?? [];
-            if (fronts[s].Below.Length > 0)
-            {
-                int parent = frontOf[fronts[s].Below[0]];
-                fronts[s].ConnectTo(fronts[parent]);
-                (children[parent] ??= []).Add(fronts[s]);
-            }
-        }
-
+        FrontUpdate.Connect(fronts, frontOf);
         return fronts;
-    }
-
-    /// <summary>
-    /// A front needs its children's leftovers while its own grows: levels take turns on two stacks, so that both are stacks.
-    /// </summary>
-    private void StackLeftovers()
-    {
-        int[] depth = new int[Fronts.Length];
-        var indexes = new Dictionary<Front, int>(ReferenceEqualityComparer.Instance);
-        for (int s = 0; s < Fronts.Length; s++)
-        {
-            indexes[Fronts[s]] = s;
-        }
-
-        for (int s = Fronts.Length - 1; s >= 0; s--)
-        {
-            foreach (Front child in Fronts[s].Children)
-            {
-                depth[indexes[child]] = depth[s] + 1;
-            }
-        }
-
-        long[] tops = new long[2];
-        for (int s = 0; s < Fronts.Length; s++)
-        {
-            Front front = Fronts[s];
-            front.Stack = depth[s] & 1;
-            front.LeftoverStart = tops[front.Stack];
-            tops[front.Stack] += (long)front.BelowStride * Six * front.Below.Length;
-            StackLengths[front.Stack] = Math.Max(StackLengths[front.Stack], tops[front.Stack]);
-            if (front.Children.Length > 0)
-            {
-                tops[1 - front.Stack] = front.Children[0].LeftoverStart;
-            }
-        }
     }
 }

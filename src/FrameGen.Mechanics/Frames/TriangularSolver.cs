@@ -43,26 +43,26 @@ internal sealed class TriangularSolver
         for (int s = fronts.Length - 1; s >= 0; s--)
         {
             Front front = fronts[s];
-            int stride = front.Stride;
             ref double p = ref MemoryMarshal.GetReference(front.PanelIn(_panels));
             Span<double> mine = x.Slice(Six * front.First, Six * front.Columns);
-            Span<double> rows = _work.AsSpan(0, stride);
+            Span<double> rows = _work.AsSpan(0, front.Stride);
             rows.Clear();
             for (int a = 0; a < front.Below.Length; a++)
             {
-                x.Slice(Six * front.Below[a], Six).CopyTo(rows[(front.OwnStride + (Six * a))..]);
+                x.Slice(Six * front.Below[a], Six).CopyTo(rows[(front.OwnRows + (Six * a))..]);
             }
 
             for (int k = mine.Length - Six; k >= 0; k -= Six)
             {
                 // The first group may begin among these six rows: they are still zero.
                 int group = (k + Six) / Lanes;
+                int stride = front.SliceStride(k / Front.SliceWidth);
                 Span<double> six = mine.Slice(k, Six);
                 FrontKernels.SubtractTransposed(
-                    ref Unsafe.Add(ref p, (k * stride) + (Lanes * group)), (nuint)stride, six, ref _work[Lanes * group], (stride / Lanes) - group);
+                    ref Unsafe.Add(ref p, front.OffsetOf(Lanes * group, k)), (nuint)stride, six, ref _work[Lanes * group], (front.Stride / Lanes) - group);
                 for (int c = Six - 2; c >= 0; c--)
                 {
-                    ref double column = ref Unsafe.Add(ref p, ((k + c) * stride) + k);
+                    ref double column = ref Unsafe.Add(ref p, front.OffsetOf(k, k + c));
                     for (int i = c + 1; i < Six; i++)
                     {
                         six[c] -= Unsafe.Add(ref column, i) * six[i];
@@ -78,10 +78,9 @@ internal sealed class TriangularSolver
     {
         foreach (Front front in _symbolic.Fronts)
         {
-            int stride = front.Stride;
             ref double p = ref MemoryMarshal.GetReference(front.PanelIn(_panels));
             Span<double> mine = x.Slice(Six * front.First, Six * front.Columns);
-            Span<double> rows = _work.AsSpan(0, stride);
+            Span<double> rows = _work.AsSpan(0, front.Stride);
             rows.Clear();
             mine.CopyTo(rows);
             for (int k = 0; k < mine.Length; k += Six)
@@ -90,7 +89,7 @@ internal sealed class TriangularSolver
                 rows.Slice(k, Six).CopyTo(six);
                 for (int c = 0; c < Six - 1; c++)
                 {
-                    ref double column = ref Unsafe.Add(ref p, ((k + c) * stride) + k);
+                    ref double column = ref Unsafe.Add(ref p, front.OffsetOf(k, k + c));
                     for (int i = c + 1; i < Six; i++)
                     {
                         six[i] -= Unsafe.Add(ref column, i) * six[c];
@@ -99,14 +98,15 @@ internal sealed class TriangularSolver
 
                 // The first group may begin among these six rows, which are done with.
                 int group = (k + Six) / Lanes;
+                int stride = front.SliceStride(k / Front.SliceWidth);
                 FrontKernels.SubtractProduct(
-                    ref Unsafe.Add(ref p, (k * stride) + (Lanes * group)), (nuint)stride, six, ref _work[Lanes * group], (stride / Lanes) - group);
+                    ref Unsafe.Add(ref p, front.OffsetOf(Lanes * group, k)), (nuint)stride, six, ref _work[Lanes * group], (front.Stride / Lanes) - group);
             }
 
             for (int a = 0; a < front.Below.Length; a++)
             {
                 Span<double> target = x.Slice(Six * front.Below[a], Six);
-                ReadOnlySpan<double> source = rows.Slice(front.OwnStride + (Six * a), Six);
+                ReadOnlySpan<double> source = rows.Slice(front.OwnRows + (Six * a), Six);
                 for (int i = 0; i < Six; i++)
                 {
                     target[i] += source[i];
