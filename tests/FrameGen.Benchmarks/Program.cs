@@ -1,9 +1,14 @@
 using BenchmarkDotNet.Running;
 using FrameGen.Benchmarks.Mechanics;
 
-if (args.Contains("--ratios", StringComparer.Ordinal))
+if (args.Length > 0 && string.Equals(args[0], LatticeRun.Option, StringComparison.Ordinal))
 {
-    FrameRatios.Print(Console.Out);
+    LatticeRun.Print(args, Console.Out);
+}
+else if (args.Contains("--ratios", StringComparer.Ordinal))
+{
+    int beside = Array.IndexOf(args, "--beside");
+    FrameRatios.Print(Console.Out, beside >= 0 && beside + 1 < args.Length ? args[beside + 1] : null);
 }
 else
 {

@@ -14,6 +14,9 @@ internal static class FrontKernels
     private const int Lanes = SymbolicFactor.Lanes;
     private const int WorthGathering = 12;
 
+    // A command solves a frame once: it has no time to find out which methods are worth their compilation.
+    private const MethodImplOptions Compiled = MethodImplOptions.AggressiveOptimization;
+
     /// <summary>C += W Lᵀ on rows in groups of eight and six columns.</summary>
     /// <param name="c">First row of the first column.</param>
     /// <param name="stride">From one column of C to the next.</param>
@@ -23,6 +26,7 @@ internal static class FrontKernels
     /// <param name="l">L's first of six rows, first column k.</param>
     /// <param name="lStride">From one column of L to the next.</param>
     /// <param name="depth">Number of columns k.</param>
+    [MethodImpl(Compiled)]
     public static void AddProduct(
         ref double c, nuint stride, ref double w, nuint groupStride, int groups, ref double l, nuint lStride, int depth)
     {
@@ -55,6 +59,7 @@ internal static class FrontKernels
         }
     }
 
+    [MethodImpl(Compiled)]
     private static void AddTwo(
         ref double c, nuint stride, ref double w, ref double v, scoped ref double l, nuint lStride, int depth)
     {
@@ -95,6 +100,7 @@ internal static class FrontKernels
         AddTo(ref Unsafe.Add(ref c, 5 * stride), a5, b5);
     }
 
+    [MethodImpl(Compiled)]
     private static void AddOne(ref double c, nuint stride, ref double w, scoped ref double l, nuint lStride, int depth)
     {
         Vector512<double> a0 = default, a1 = default, a2 = default, a3 = default, a4 = default, a5 = default;
@@ -137,6 +143,7 @@ internal static class FrontKernels
     /// <param name="w">First group: for each column eight rows side by side.</param>
     /// <param name="groupStride">From one group of W to the next.</param>
     /// <param name="groups">Number of groups.</param>
+    [MethodImpl(Compiled)]
     public static void Scale(
         ref double l, nuint stride, ReadOnlySpan<double> pivots, ref double w, nuint groupStride, int groups)
     {
@@ -163,6 +170,7 @@ internal static class FrontKernels
     /// <param name="groups">Number of groups.</param>
     /// <param name="block">The diagonal block's L, 36 values by columns, below the diagonal.</param>
     /// <param name="inverse">Six values of D⁻¹.</param>
+    [MethodImpl(Compiled)]
     public static void SolveBelow(
         ref double a, nuint stride, ref double w, nuint groupStride, int groups, ReadOnlySpan<double> block, ReadOnlySpan<double> inverse)
     {
@@ -202,6 +210,7 @@ internal static class FrontKernels
     }
 
     /// <summary>y += x.</summary>
+    [MethodImpl(Compiled)]
     public static void Add(ReadOnlySpan<double> x, Span<double> y)
     {
         ref double from = ref MemoryMarshal.GetReference(x);
@@ -225,6 +234,7 @@ internal static class FrontKernels
     /// <param name="x">Six values.</param>
     /// <param name="y">First row.</param>
     /// <param name="groups">Number of groups.</param>
+    [MethodImpl(Compiled)]
     public static void SubtractProduct(ref double a, nuint stride, ReadOnlySpan<double> x, ref double y, int groups)
     {
         Vector512<double> x0 = Vector512.Create(-x[0]);
@@ -253,6 +263,7 @@ internal static class FrontKernels
     /// <param name="x">Six values.</param>
     /// <param name="y">First row.</param>
     /// <param name="groups">Number of groups.</param>
+    [MethodImpl(Compiled)]
     public static void SubtractTransposed(ref double a, nuint stride, Span<double> x, ref double y, int groups)
     {
         Vector512<double> s0 = default, s1 = default, s2 = default, s3 = default, s4 = default, s5 = default;
