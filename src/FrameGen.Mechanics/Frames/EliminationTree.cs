@@ -38,6 +38,13 @@ internal sealed class EliminationTree
         return new EliminationTree(newOrder, newParents, Patterns(newOrder, newParents, starts, neighbours));
     }
 
+    /// <summary>Multiplications that a factor in some order takes, about: half a front's square for each of its freedoms.</summary>
+    public static double WorkOf(int[] order, int[] starts, int[] neighbours)
+    {
+        int[] parents = ParentsOf(order, Inverse(order), starts, neighbours);
+        return Sizes(order, parents, starts, neighbours).Sum(rows => 108.0 * (rows + 1) * (rows + 1));
+    }
+
     /// <summary>The inverse of a permutation.</summary>
     public static int[] Inverse(int[] permutation)
     {

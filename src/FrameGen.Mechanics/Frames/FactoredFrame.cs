@@ -56,6 +56,9 @@ public sealed class FactoredFrame
     /// <summary>Solves K x = b in place: six values an active node in elimination order, zero in held freedoms.</summary>
     internal void Solve(Span<double> x) => _factor.Solve(x);
 
+    /// <summary>Solves K x = b in place for several b at once, each to the same digits as alone.</summary>
+    internal void Solve(ReadOnlySpan<double[]> all) => _factor.Solve(all);
+
     internal bool IsOf(FrameLayout other) => ReferenceEquals(_layout, other);
 
     internal void Factor(IReadOnlyList<BeamProfile> profiles)

@@ -72,6 +72,9 @@ internal sealed class NumericFactor
     /// <summary>Solves L D Lᵀ x = b in place, in elimination order.</summary>
     public void Solve(Span<double> x) => _solver.Solve(x);
 
+    /// <summary>Solves L D Lᵀ x = b in place for several b, in elimination order, each to the same digits as alone.</summary>
+    public void Solve(ReadOnlySpan<double[]> all) => _solver.Solve(all);
+
     /// <summary>Solves Lᵀ x = b in place, in elimination order.</summary>
     public void Backward(Span<double> x) => _solver.Backward(x);
 

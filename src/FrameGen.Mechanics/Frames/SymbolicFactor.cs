@@ -51,9 +51,6 @@ internal sealed class SymbolicFactor
     /// <summary>The largest <see cref="Front.Stride"/>.</summary>
     public int WidestFront { get; }
 
-    /// <summary>Multiplications the numeric factor takes, about.</summary>
-    public double Work { get; private set; }
-
     /// <summary>Orders the nodes and lays out the fronts.</summary>
     /// <param name="positions">Of the nodes, mm.</param>
     /// <param name="starts">One offset into <paramref name="neighbours"/> more than nodes.</param>
@@ -61,8 +58,8 @@ internal sealed class SymbolicFactor
     public static SymbolicFactor Build(Vector3[] positions, int[] starts, int[] neighbours)
     {
         int count = positions.Length;
-        var tree = EliminationTree.Build(MinimumDegree.Order(count, starts, neighbours), starts, neighbours);
-        double work = WorkOf(tree);
+        int[] order = MinimumDegree.Order(count, starts, neighbours);
+        double work = EliminationTree.WorkOf(order, starts, neighbours);
         if (count > SmallFrame)
         {
             // Solid lattices are better cut in two, long ones swept from end to end, most others neither. The pattern tells.
@@ -70,18 +67,15 @@ internal sealed class SymbolicFactor
             Try(SweepOrder.Order(count, starts, neighbours));
         }
 
-        return new SymbolicFactor(tree.Order, Gather(tree)) { Work = work };
+        var tree = EliminationTree.Build(order, starts, neighbours);
+        return new SymbolicFactor(tree.Order, Gather(tree));
 
-        void Try(int[] order)
+        void Try(int[] other)
         {
-            var other = EliminationTree.Build(order, starts, neighbours);
-            double workOfOther = WorkOf(other);
-            (tree, work) = workOfOther < work ? (other, workOfOther) : (tree, work);
+            double workOfOther = EliminationTree.WorkOf(other, starts, neighbours);
+            (order, work) = workOfOther < work ? (other, workOfOther) : (order, work);
         }
     }
-
-    private static double WorkOf(EliminationTree tree) =>
-        tree.Rows.Sum(rows => 108.0 * (rows.Length + 1) * (rows.Length + 1));
 
     private static Front[] Gather(EliminationTree tree)
     {

@@ -94,6 +94,7 @@ internal sealed class BlockLanczos
     {
         FrameLayout layout = _frame.Layout;
         uint state = 12345;
+        double[][] products = new double[Block][];
         for (int b = 0; b < Block; b++)
         {
             double[] mixed = new double[Size];
@@ -113,9 +114,14 @@ internal sealed class BlockLanczos
                 }
             }
 
-            double[] product = new double[Size];
-            _s.Multiply(mixed, product);
-            Append(product, -1);
+            products[b] = new double[Size];
+            _s.Multiply(mixed, products[b]);
+        }
+
+        double[][] vectors = Solved(products);
+        for (int b = 0; b < Block; b++)
+        {
+            Append(vectors[b], products[b], -1);
         }
     }
 
@@ -125,31 +131,44 @@ internal sealed class BlockLanczos
         int first = _settled;
         int last = _vectors.Count;
         Array.Clear(_coupling);
+        double[][] products = new double[last - first][];
         for (int j = first; j < last; j++)
         {
-            double[] product = new double[Size];
-            _s.Multiply(_vectors[j], product);
+            products[j - first] = new double[Size];
+            _s.Multiply(_vectors[j], products[j - first]);
+        }
+
+        double[][] vectors = Solved(products);
+        for (int j = first; j < last; j++)
+        {
             for (int i = 0; i < last; i++)
             {
-                double h = VectorKernels.Dot(_vectors[i], product);
+                double h = VectorKernels.Dot(_vectors[i], products[j - first]);
                 _projected[(Stride * j) + i] = h;
                 _projected[(Stride * i) + j] = h;
             }
 
             _settled = last;
-            Append(product, j - first);
+            Append(vectors[j - first], products[j - first], j - first);
         }
 
         _settled = last;
     }
 
-    /// <summary>Takes K⁻¹ of a vector into the basis, unless it has nothing new.</summary>
-    /// <param name="product">The vector; kept as the new one's product with K.</param>
-    /// <param name="column">Of <see cref="_coupling"/>, where it is noted what of it went to the next block; −1 for the start.</param>
-    private void Append(double[] product, int column)
+    /// <summary>K⁻¹ of some vectors.</summary>
+    private double[][] Solved(double[][] products)
     {
-        double[] vector = (double[])product.Clone();
-        _frame.Solve(vector);
+        double[][] vectors = Array.ConvertAll(products, product => (double[])product.Clone());
+        _frame.Solve(vectors);
+        return vectors;
+    }
+
+    /// <summary>Takes a vector into the basis, unless it has nothing new.</summary>
+    /// <param name="vector">The vector.</param>
+    /// <param name="product">Its product with K.</param>
+    /// <param name="column">Of <see cref="_coupling"/>, where it is noted what of it went to the next block; −1 for the start.</param>
+    private void Append(double[] vector, double[] product, int column)
+    {
         double whole = Norm(vector, product);
         for (int pass = 0; pass < 2; pass++)
         {
