@@ -26,19 +26,24 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
     /// <summary>The chosen section of each group, and how sure the choice is.</summary>
     public void PrintSizes()
     {
+        bool measured = sized.Chosen.Any(c => c.IsMeasured);
+        string[] inHand = measured ? ["=measured"] : [];
         var table = new ReportTable(
-            "Sizes", "group", "material", "=section", ">" + _display.MassPerLengthUnitName, ">tubes", "from");
+            "Sizes", ["group", "material", "=section", .. inHand, ">" + _display.MassPerLengthUnitName, ">tubes", "from"]);
         for (int i = 0; i < _model.Groups.Count; i++)
         {
             TubeGroup group = _model.Groups[i];
             Section section = sized.Sections[i];
-            table.Row(
+            inHand = measured ? [_display.Measured(sized.Chosen[i])] : [];
+            table.Row([
                 group.Name,
                 group.Material.Name,
-                _display.Section(section),
+                _display.Section(sized.Chosen[i].Nominal),
+                .. inHand,
                 _display.MassPerLengthNumber(section.MassPerMetre(group.Material.Density)),
                 Whole(_model.Tubes.Count(t => t.Group == i)),
-                group.IsFixed ? "the spec" : $"{Whole(group.Candidates.Count)} in {sized.Chosen[i].StockList}");
+                group.IsFixed ? "the spec" : $"{Whole(group.Candidates.Count)} in {sized.Chosen[i].StockList}",
+            ]);
         }
 
         table.Draw(terminal);

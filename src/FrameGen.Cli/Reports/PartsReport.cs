@@ -23,7 +23,7 @@ internal sealed class PartsReport(Terminal terminal, ShopPackage package)
         {
             table.Row(
                 part.Quantity == 1 ? part.Mark : string.Create(CultureInfo.InvariantCulture, $"{part.Quantity} x {part.Mark}"),
-                _display.Section(package.Cut.Sized.SectionOf(part.Drawn.Tube)),
+                _display.Section(package.Cut.Sized.ChosenFor(part.Drawn.Tube).Nominal),
                 _display.LengthNumber(part.Drawn.CutLength),
                 _display.MassNumber(part.Drawn.MassKg),
                 $"{EndText.Kind(part.Drawn.From.Kind)}, {EndText.Kind(part.Drawn.To.Kind)}");

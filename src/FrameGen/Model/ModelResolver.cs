@@ -43,6 +43,7 @@ public static class ModelResolver
 
         Frame frame = PlaceFrame(spec, reflection, shop?.Gap ?? 0, values);
         var groupNames = NameIndex.Of("group", spec.Groups.Select(g => g.Name), diagnostics);
+        MeasuredSizes.Apply(spec.Measured, groupNames, groups, values);
         int?[] groupOfTube = BindGroups(frame, groupNames);
         WarnOfUnusedGroups(spec.Groups, groupOfTube, diagnostics);
 

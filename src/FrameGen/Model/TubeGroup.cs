@@ -27,4 +27,17 @@ public sealed record TubeGroup(
 /// <param name="StockList">The list it comes from; empty for a section of the spec that no list holds.</param>
 /// <param name="BarLength">Usual bar, mm.</param>
 /// <param name="PricePerMetre">In the shop's own money; null where unknown.</param>
-public sealed record Candidate(Section Section, string StockList, double BarLength, double? PricePerMetre);
+public sealed record Candidate(Section Section, string StockList, double BarLength, double? PricePerMetre)
+{
+    /// <summary>
+    /// The section as it is named and bought; <see cref="Section"/>, which every number is made from, differs from it where the
+    /// tube in hand was measured.
+    /// </summary>
+    public Section Nominal { get; init; } = Section;
+
+    /// <summary>True where <see cref="Section"/> is the size of a tube in hand.</summary>
+    public bool IsMeasured => !Section.Equals(Nominal);
+
+    /// <summary>The same bar, by the size measured on it.</summary>
+    public Candidate MeasuredAs(Section measured) => this with { Section = measured };
+}

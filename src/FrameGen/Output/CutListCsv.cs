@@ -22,7 +22,7 @@ internal static class CutListCsv
                 part.Quantity.ToString(CultureInfo.InvariantCulture),
                 string.Join(' ', part.Tubes.Select(t => model.Tubes[t].Name)),
                 CsvTable.Words(model.Groups[tube.Group].Material.Name),
-                package.Cut.Sized.SectionOf(part.Drawn.Tube).Name,
+                package.Cut.Sized.ChosenFor(part.Drawn.Tube).Nominal.Name,
                 FixedDigits.Length(part.Drawn.CutLength),
                 FixedDigits.Length(tube.Length),
                 FixedDigits.Mass(part.Drawn.MassKg),
@@ -31,9 +31,17 @@ internal static class CutListCsv
                 EndText.WithMates(model, part.Drawn.From),
                 EndText.WithMates(model, part.Drawn.To),
                 part.TwistDegrees is { } twist ? FixedDigits.Angle(twist) : string.Empty,
-                CsvTable.Words(part.Note));
+                CsvTable.Words(Note(package, part)));
         }
 
         return table.ToString();
+    }
+
+    /// <summary>The part's note, and the size of the tube in hand: the section's own column has the nominal one.</summary>
+    private static string Note(ShopPackage package, Part part)
+    {
+        Candidate chosen = package.Cut.Sized.ChosenFor(part.Drawn.Tube);
+        string measured = chosen.IsMeasured ? $"measured {chosen.Section.Name}" : string.Empty;
+        return string.Join("; ", new[] { part.Note, measured }.Where(n => n.Length > 0));
     }
 }

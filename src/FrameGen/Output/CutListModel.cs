@@ -103,7 +103,7 @@ public sealed record CutListPart(
             part.Quantity,
             string.Join(' ', part.Tubes.Select(t => model.Tubes[t].Name)),
             model.Groups[tube.Group].Material.Name,
-            display.Section(package.Cut.Sized.SectionOf(part.Drawn.Tube)),
+            display.Section(package.Cut.Sized.ChosenFor(part.Drawn.Tube)),
             display.LengthNumber(part.Drawn.CutLength),
             display.LengthNumber(tube.Length),
             display.MassNumber(part.Drawn.MassKg),
@@ -126,7 +126,7 @@ public sealed record CutListSection(string Section, string Material, int Pieces,
     internal static IReadOnlyList<CutListSection> Of(ShopPackage package, DisplayFormat display) =>
     [
         .. package.Parts
-            .Select(p => (Part: p, Section: package.Cut.Sized.SectionOf(p.Drawn.Tube), Material: MaterialOf(package, p)))
+            .Select(p => (Part: p, Section: package.Cut.Sized.ChosenFor(p.Drawn.Tube).Nominal, Material: MaterialOf(package, p)))
             .GroupBy(p => (p.Section.Name, p.Material))
             .Select(g => new CutListSection(
                 display.Section(g.First().Section),

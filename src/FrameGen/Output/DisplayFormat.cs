@@ -1,5 +1,6 @@
 using System.Globalization;
 using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
 using FrameGen.Spec;
 using UnitsNet;
 
@@ -185,6 +186,35 @@ public sealed class DisplayFormat(DisplaySpec display)
             double printed = Math.Round(inches, 4);
             return Math.Abs(inches - printed) <= Rounding * Math.Max(inches, 1) ? printed.ToString("0.####", CultureInfo.InvariantCulture) : null;
         }
+    }
+
+    /// <summary>A section as a shop asks for it, and the size of the tube in hand where that was measured.</summary>
+    /// <param name="chosen">The section as bought and as it is.</param>
+    /// <returns><c>round 38 x 1.5 mm (measured 38.06 x 1.47 mm)</c>; <see cref="Section(Mechanics.Sections.Section)"/> where nothing was measured.</returns>
+    public string Section(Candidate chosen) =>
+        chosen.IsMeasured ? $"{Section(chosen.Nominal)} (measured {Measured(chosen)})" : Section(chosen.Nominal);
+
+    /// <summary>What a caliper reads on the tube in hand, to 0.001 mm or 0.0001 in: <c>38.06 x 1.47 mm</c>; empty where nothing was measured.</summary>
+    /// <param name="chosen">The section as bought and as it is.</param>
+    public string Measured(Candidate chosen)
+    {
+        if (!chosen.IsMeasured)
+        {
+            return string.Empty;
+        }
+
+        bool inches = display.Length == LengthUnit.Inch;
+        Section section = chosen.Section;
+        double[] sizes = section switch
+        {
+            Rod => [section.Height],
+            RoundTube => [section.Height, section.Wall],
+            _ => [section.Height, section.Width, section.Wall],
+        };
+        IEnumerable<string> numbers = sizes.Select(mm => inches
+            ? FixedDigits.Print(UnitsNet.Length.FromMillimeters(mm).Inches, "0.####")
+            : FixedDigits.Print(mm, "0.###"));
+        return $"{string.Join(" x ", numbers)} {(inches ? "in" : "mm")}";
     }
 
     /// <summary>What a target's value is multiplied with to be shown, and the unit it then has.</summary>

@@ -66,7 +66,7 @@ internal static class SizingJson
             Section section = sized.Sections[i];
             json.WriteStartObject(group.Name);
             json.WriteString("material", group.Material.Name);
-            json.WriteString("section", section.Name);
+            json.WriteString("section", sized.Chosen[i].Nominal.Name);
             json.WriteString("shape", section.Shape);
             if (section is RoundTube or Rod)
             {

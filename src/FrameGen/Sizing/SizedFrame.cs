@@ -46,6 +46,9 @@ public sealed record SizedFrame(
     /// <summary>Section by group.</summary>
     public IReadOnlyList<Section> Sections { get; } = [.. Chosen.Select(c => c.Section)];
 
-    /// <summary>The section of a tube.</summary>
+    /// <summary>What a tube is made of: its section as bought and as it is.</summary>
+    public Candidate ChosenFor(int tube) => Chosen[Model.Tubes[tube].Group];
+
+    /// <summary>The section of a tube as it is: what its numbers are made from.</summary>
     public Section SectionOf(int tube) => Sections[Model.Tubes[tube].Group];
 }

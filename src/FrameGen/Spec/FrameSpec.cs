@@ -43,7 +43,11 @@ public sealed record FrameSpec(
     IReadOnlyList<CaseSpec> Cases,
     IReadOnlyList<TargetSpec> Targets,
     IReadOnlyList<JointSpec> Joints,
-    FabricationSpec Fabrication);
+    FabricationSpec Fabrication)
+{
+    /// <summary>Sizes of tubes in hand, in the order written.</summary>
+    public IReadOnlyList<MeasuredSpec> Measured { get; init; } = [];
+}
 
 /// <summary>A named quantity; its kind follows from its value.</summary>
 public sealed record ParameterSpec(Placed<string> Name, Expression Value, SourcePlace At);

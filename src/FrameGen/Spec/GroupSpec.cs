@@ -7,6 +7,14 @@ namespace FrameGen.Spec;
 public sealed record GroupSpec(
     Placed<string> Name, Placed<string> Material, Placed<Section>? Section, ChooseSpec? Choose, bool Welded);
 
+/// <summary>The size of a group's tube in hand, as measured; null where a measure was not taken.</summary>
+/// <param name="Group">The group.</param>
+/// <param name="Od">Outside diameter.</param>
+/// <param name="Height">Outer size along the top line.</param>
+/// <param name="Width">Outer size across.</param>
+/// <param name="Wall">Wall.</param>
+public sealed record MeasuredSpec(Placed<string> Group, SpecQuantity? Od, SpecQuantity? Height, SpecQuantity? Width, SpecQuantity? Wall);
+
 /// <summary>What a group may choose from.</summary>
 /// <param name="Lists">Names of stock lists, at least one.</param>
 /// <param name="Shape">Only this shape; null for any.</param>

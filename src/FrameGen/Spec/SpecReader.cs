@@ -56,5 +56,8 @@ public static class SpecReader
         root.Items(FileKeys.Cases),
         root.Items(FileKeys.Targets),
         root.Items(FileKeys.Joints),
-        root.Find(FileKeys.Fabrication) ?? new FabricationSpec(null, null, null, null, null, null, null, null, null));
+        root.Find(FileKeys.Fabrication) ?? new FabricationSpec(null, null, null, null, null, null, null, null, null))
+    {
+        Measured = root.Items(FileKeys.Measured),
+    };
 }

@@ -143,7 +143,6 @@ public class KeyErrorTests
         { "group: posts, ends: {to: {cut: {plane: [1, 0, 0]}}}", "plane", "plane" },
         { "group: posts, ends: {to: {vent: 4 mm}}", "vent", "vent" },
         { "\nsupports: {foot: {spring: {z: 40 N/mm, rx: 12 N.m/deg}}}", "spring", "spring" },
-        { "\nmeasured: {posts: {od: 38.06 mm, wall: 1.47 mm}}", "measured", "measured" },
         { "\nsizing: {objective: cost}", "cost", "objective: cost" },
         { "\nsizing: {different_sizes: 3}", "different_sizes", "different_sizes" },
     };

@@ -34,7 +34,7 @@ internal static class PartWords
 
     /// <summary>Section and material.</summary>
     public static string Section(PartPattern pattern) =>
-        $"{pattern.Display.Section(pattern.Section)}, {pattern.Sized.Model.Groups[pattern.Tube.Group].Material.Name}";
+        $"{pattern.Display.Section(pattern.Sized.ChosenFor(pattern.Part.Drawn.Tube))}, {pattern.Sized.Model.Groups[pattern.Tube.Group].Material.Name}";
 
     /// <summary>What an end is cut to.</summary>
     public static string Mates(PartPattern pattern, EndCut cut)

@@ -53,6 +53,9 @@ internal static class FileKeys
     public static readonly Key<IReadOnlyList<RackSpec>> Have = new(
         "have", StockKeys.Have, "tubes on the rack, used first", "[{section: round 28 x 2 mm, material: E235+N, lengths: [1850 mm]}]");
 
+    public static readonly Key<IReadOnlyList<MeasuredSpec>> Measured =
+        new("measured", StockKeys.Measured, "sizes of the tubes in hand", "{rails: {od: 38.06 mm, wall: 1.47 mm}}");
+
     public static readonly Key<IReadOnlyList<SupportSpec>> Supports =
         new("supports", LoadKeys.Supports, "held nodes", "{axle-l: {hold: [y, z]}}");
 
@@ -70,9 +73,6 @@ internal static class FileKeys
 
     public static readonly Key<FabricationSpec> Fabrication =
         new("fabrication", ShopKeys.Fabrication, "how ends are cut and papers drawn", "{cut: radial, kerf: 2 mm}");
-
-    private static readonly Key<IReadOnlyList<bool>> Measured =
-        new("measured", StockKeys.Measured, "sizes of the tubes in hand", "{rails: {od: 38.06 mm, wall: 1.47 mm}}") { IsNotSupportedYet = true };
 
     private static readonly Key<bool> Sizing = new("sizing", StockKeys.Sizing, "how sizes are chosen", "{objective: mass}");
 

@@ -139,13 +139,14 @@ internal static class StockKeys
     private static readonly Key<SpecQuantity> MeasuredWall = new("wall", Positive(QuantityKind.Length), "wall as measured", "1.47 mm");
 
     /// <summary>Sizes of the tubes in hand.</summary>
-    public static readonly NamedForm<bool> Measured = new(
+    public static readonly NamedForm<MeasuredSpec> Measured = new(
         "measured group",
         GroupName,
-        new MapForm<bool>(
+        new MapForm<MeasuredSpec>(
             "a measured size",
             [MeasuredOd, MeasuredHeight, MeasuredWidth, MeasuredWall],
-            _ => true,
+            map => new MeasuredSpec(
+                map.Owner, map.Find(MeasuredOd), map.Find(MeasuredHeight), map.Find(MeasuredWidth), map.Find(MeasuredWall)),
             map => map.AtLeastOne(MeasuredOd, MeasuredHeight, MeasuredWidth, MeasuredWall)));
 
     private static readonly Key<bool> Objective = new(
