@@ -19,6 +19,7 @@ internal static class Commands
             Build(terminal),
             Check(terminal),
             Size(terminal),
+            Freeze(terminal),
             Verify(terminal),
             new VersionOption { Description = "Print the version.", Action = new PrintVersion() },
         };
@@ -84,6 +85,35 @@ internal static class Commands
         var command = new Command("size", "Choose the lightest sections that meet the targets, and say why. Writes nothing.") { spec, json };
         command.SetAction((Func<ParseResult, int>)(r => new SizeCommand(terminal, r.GetRequiredValue(spec), r.GetValue(json)).Run()));
         Examples(command, "framegen size specs/quayside-trailer.yaml");
+        return command;
+    }
+
+    private static Command Freeze(Terminal terminal)
+    {
+        Argument<string> spec = Spec();
+        var add = new Option<bool>("--add")
+        {
+            Description = "Keep the sizes that are frozen, and choose sizes for new groups beside them.",
+        };
+        var replace = new Option<bool>("--replace")
+        {
+            Description = "Choose all sizes anew; the old file is moved to NAME.kept beside the spec.",
+        };
+        var anyway = new Option<bool>("--anyway") { Description = "Freeze the sizes even when a target is not met." };
+        Option<bool> json = Json();
+        var command = new Command(
+            "freeze",
+            "Pin the sizes of a frame that is built: writes NAME.frozen.yaml beside the spec. From then on build, check and size use these sizes, "
+                + "check every target with them, and say what would be chosen today.")
+        {
+            spec, add, replace, anyway, json,
+        };
+        command.SetAction((Func<ParseResult, int>)(r => new FreezeCommand(
+            terminal, r.GetRequiredValue(spec), r.GetValue(add), r.GetValue(replace), r.GetValue(anyway), r.GetValue(json)).Run()));
+        Examples(
+            command,
+            "framegen freeze specs/quayside-trailer.yaml",
+            "framegen freeze specs/quayside-trailer.yaml --add     after a rack was added to the frame");
         return command;
     }
 

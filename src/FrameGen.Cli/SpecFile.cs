@@ -1,4 +1,5 @@
 using FrameGen.Output.Folders;
+using FrameGen.Spec;
 
 namespace FrameGen.Cli;
 
@@ -12,6 +13,11 @@ internal static class SpecFile
         if (Directory.Exists(path))
         {
             throw new WrongInputException($"{path} is a folder; name a spec file in it");
+        }
+
+        if (FrozenSpec.IsNamedSo(path))
+        {
+            throw new WrongInputException($"{path} holds the sizes of a frame, not the frame; name the spec that it lies beside");
         }
 
         if (!File.Exists(path))

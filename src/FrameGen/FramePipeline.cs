@@ -32,13 +32,23 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
     public FrameSpec? Read(string path, Func<string, byte[]?> content) =>
         At("reading the spec", () => SpecReader.Read(path, content, diagnostics));
 
+    /// <summary>Reads a spec as if no sizes were pinned beside it.</summary>
+    /// <exception cref="IOException">The file can't be read.</exception>
+    public FrameSpec? ReadUnfrozen(string path)
+    {
+        string frozen = FrozenSpec.PathBeside(path);
+        return Read(path, file => string.Equals(file, frozen, StringComparison.Ordinal) ? null : SpecFiles.FromDisk(file));
+    }
+
     /// <summary>Gives the spec its meaning.</summary>
-    public FrameModel? Resolve(FrameSpec? spec) =>
-        spec is null ? null : At("working out the frame", () => ModelResolver.Resolve(spec, diagnostics));
+    /// <param name="spec">As read.</param>
+    /// <param name="newGroupsChoose">True where groups without a size may choose one beside others whose sizes are pinned.</param>
+    public FrameModel? Resolve(FrameSpec? spec, bool newGroupsChoose = false) =>
+        spec is null ? null : At("working out the frame", () => ModelResolver.Resolve(spec, newGroupsChoose, diagnostics));
 
     /// <summary>Chooses the sections.</summary>
     public SizedFrame? Size(FrameModel? model) =>
-        model is null ? null : At("choosing sections", () => SectionSizer.Size(model, diagnostics, Designs()));
+        model is null ? null : At("choosing sections", () => FrozenSizing.Size(model, diagnostics, Designs()));
 
     /// <summary>True where the ends of a frame's tubes can be cut: of round tubes and rods, so far.</summary>
     public static bool CanCope(SizedFrame sized) => sized.Sections.All(s => s is RoundTube or Rod);

@@ -42,7 +42,7 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
                 .. inHand,
                 _display.MassPerLengthNumber(section.MassPerMetre(group.Material.Density)),
                 Whole(_model.Tubes.Count(t => t.Group == i)),
-                group.IsFixed ? "the spec" : $"{Whole(group.Candidates.Count)} in {sized.Chosen[i].StockList}",
+                group.IsFrozen ? "frozen" : group.IsFixed ? "the spec" : $"{Whole(group.Candidates.Count)} in {sized.Chosen[i].StockList}",
             ]);
         }
 
@@ -192,9 +192,11 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
         string looked = sized.Analyses == 1 ? "1 analysis" : string.Create(CultureInfo.InvariantCulture, $"{sized.Analyses:N0} analyses");
         return sized.Status switch
         {
+            SizingStatus.Fixed when _model.Frozen is { } frozen => $"Frozen by {frozen.FileName}: {mass}",
             SizingStatus.Fixed => $"Given by the spec: {mass}",
             SizingStatus.ProvenLightest => $"Proven lightest: {mass} ({looked})",
             SizingStatus.BestFound => $"Best found: {mass}; nothing lighter than {_display.Mass(sized.BoundKg ?? 0)} can do ({looked})",
+            _ when _model.Frozen is { } frozen => $"NOT MEETING TARGETS with the sizes that {frozen.FileName} pins: {mass}",
             _ when _model.Groups.All(g => g.IsFixed) => $"NOT MEETING TARGETS with the sections that the spec gives: {mass}",
             _ => $"NOT MEETING TARGETS; the least bad: {mass} ({looked})",
         };

@@ -26,7 +26,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
         var lots = new List<StockLot>();
         bool isSound = true;
         var used = new HashSet<RackTube>(ReferenceEqualityComparer.Instance);
-        foreach (Part[] same in parts.GroupBy(p => (sized.SectionOf(p.Drawn.Tube).Name, MaterialOf(p).Name)).Select(g => g.ToArray()))
+        foreach (Part[] same in parts.GroupBy(p => (sized.ChosenFor(p.Drawn.Tube).Nominal.Name, MaterialOf(p).Name)).Select(g => g.ToArray()))
         {
             RackTube[] rack = [.. _model.Have.Where(r => IsOf(r, same[0]))];
             used.UnionWith(rack);
@@ -48,7 +48,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
     private Material MaterialOf(Part part) => _model.Groups[_model.Tubes[part.Drawn.Tube].Group].Material;
 
     private bool IsOf(RackTube rack, Part part) =>
-        string.Equals(rack.Section.Name, sized.SectionOf(part.Drawn.Tube).Name, StringComparison.Ordinal)
+        string.Equals(rack.Section.Name, sized.ChosenFor(part.Drawn.Tube).Nominal.Name, StringComparison.Ordinal)
         && string.Equals(rack.Material, MaterialOf(part).Name, StringComparison.Ordinal);
 
     // Groups of one section and material are bought together, where it is cheapest.
@@ -88,7 +88,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
             ];
             if (bars.Length > 0)
             {
-                lots.Add(new StockLot(MaterialOf(same[0]).Name, buy.Section, length, IsRack: true, bars, 0, PricePerMetre: null, massPerMm));
+                lots.Add(new StockLot(MaterialOf(same[0]).Name, buy.Nominal, length, IsRack: true, bars, 0, PricePerMetre: null, massPerMm));
             }
         }
 
@@ -101,7 +101,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
         if (bought.Length > 0)
         {
             lots.Add(new StockLot(
-                MaterialOf(same[0]).Name, buy.Section, buy.BarLength, IsRack: false, bought, plan.LowerBound, buy.PricePerMetre, massPerMm));
+                MaterialOf(same[0]).Name, buy.Nominal, buy.BarLength, IsRack: false, bought, plan.LowerBound, buy.PricePerMetre, massPerMm));
         }
 
         return ReportTooLong(queues, buy, rack.Length > 0);
@@ -146,7 +146,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
                 tube.At,
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"tube {tube.Name}: its piece is {part.Drawn.CutLength:0.###} mm long, and a bar of {buy.Section.Name} has {buy.BarLength:0.###} mm{trimmed}; ")
+                    $"tube {tube.Name}: its piece is {part.Drawn.CutLength:0.###} mm long, and a bar of {buy.Nominal.Name} has {buy.BarLength:0.###} mm{trimmed}; ")
                 + $"divide the tube at a node, or choose from a stock list with longer bars (bar: ...); {rack}");
         }
 

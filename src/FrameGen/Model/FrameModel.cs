@@ -34,6 +34,12 @@ public sealed record FrameModel(
     /// <summary>Tubes on the rack, in the order written.</summary>
     public IReadOnlyList<RackTube> Have { get; init; } = [];
 
+    /// <summary>The stock lists that candidates come from, by the order of the groups.</summary>
+    public IReadOnlyList<StockVersion> Stock { get; init; } = [];
+
+    /// <summary>Where the sizes are pinned; null where they are free.</summary>
+    public FrozenSizes? Frozen { get; init; }
+
     /// <summary>By node: the tube ends there, in the order of <see cref="Tubes"/>; a through tube has none there.</summary>
     public IReadOnlyList<IReadOnlyList<TubeEndId>> EndsAt { get; } = EndsByNode(Nodes.Count, Tubes);
 

@@ -12,10 +12,17 @@ public static class ModelResolver
     /// <param name="spec">As written.</param>
     /// <param name="diagnostics">Takes errors, warnings and notes, each with its place, in the order of the text.</param>
     /// <returns>The model, or null when an error was reported.</returns>
-    public static FrameModel? Resolve(FrameSpec spec, DiagnosticList diagnostics)
+    public static FrameModel? Resolve(FrameSpec spec, DiagnosticList diagnostics) => Resolve(spec, newGroupsChoose: false, diagnostics);
+
+    /// <summary>Resolves a spec beside which sizes may be pinned.</summary>
+    /// <param name="spec">As written.</param>
+    /// <param name="newGroupsChoose">True where groups without a pinned size may choose one; else that is an error.</param>
+    /// <param name="diagnostics">As for any spec.</param>
+    /// <returns>The model, or null when an error was reported.</returns>
+    public static FrameModel? Resolve(FrameSpec spec, bool newGroupsChoose, DiagnosticList diagnostics)
     {
         var found = new DiagnosticList();
-        FrameModel? model = ResolveAll(spec, found);
+        FrameModel? model = ResolveAll(spec, newGroupsChoose, found);
         foreach (Diagnostic diagnostic in TextOrder.Sort(found, spec.Files.Select(f => f.Path)))
         {
             diagnostics.Add(diagnostic);
@@ -24,7 +31,7 @@ public static class ModelResolver
         return model;
     }
 
-    private static FrameModel? ResolveAll(FrameSpec spec, DiagnosticList diagnostics)
+    private static FrameModel? ResolveAll(FrameSpec spec, bool newGroupsChoose, DiagnosticList diagnostics)
     {
         var values = new SpecValues(ParameterTable.Evaluate(spec.Parameters, diagnostics), diagnostics);
         var reflection = Reflection.Of(spec.Mirror, diagnostics);
@@ -43,21 +50,17 @@ public static class ModelResolver
 
         Frame frame = PlaceFrame(spec, reflection, shop?.Gap ?? 0, values);
         var groupNames = NameIndex.Of("group", spec.Groups.Select(g => g.Name), diagnostics);
-        MeasuredSizes.Apply(spec.Measured, groupNames, groups, values);
         int?[] groupOfTube = BindGroups(frame, groupNames);
+        var frozen = spec.Frozen is null ? null : new FrozenGroups(spec.Frozen, stock, values);
+        TubeGroup?[] free = groups;
+        groups = frozen?.Pin(spec.Groups, groupNames, free, groupOfTube.ToHashSet(), newGroupsChoose) ?? groups;
+        MeasuredSizes.Apply(spec.Measured, groupNames, groups, values);
         WarnOfUnusedGroups(spec.Groups, groupOfTube, diagnostics);
 
         var supports = SupportResolver.Of(spec.Supports, frame);
         IReadOnlyList<CarriedMass> masses = MassResolver.Resolve(spec.Masses, frame);
         LoadCase?[] cases = CaseResolver.Resolve(spec.Cases, frame, supports, out NameIndex caseNames);
-        var targets = new TargetResolver(
-            frame,
-            caseNames,
-            supports,
-            new MemberTargets(frame, groupNames, groupOfTube, spec.Targets),
-            new StrengthTargets(frame, caseNames, spec.Groups, groups, groupNames, groupOfTube),
-            new StabilityTargets(frame, caseNames, supports, groups, groupOfTube));
-        Target?[] bound = [.. spec.Targets.Select((target, index) => targets.Resolve(index, target))];
+        Target?[] bound = BindTargets(spec, frame, caseNames, supports, groupNames, groups, groupOfTube);
         IReadOnlyList<JointRequest> joints = JointResolver.Resolve(spec.Joints, frame);
 
         if (diagnostics.HasErrors || shop is null)
@@ -66,7 +69,7 @@ public static class ModelResolver
         }
 
         var used = UsedGroups.Of(groups, groupOfTube);
-        return new FrameModel(
+        var model = new FrameModel(
             Identify(spec),
             spec.Display,
             ModelBuilder.Nodes(frame),
@@ -80,8 +83,27 @@ public static class ModelResolver
             shop.Value.Fabrication)
         {
             Have = have,
+            Stock = StockOf(used.Groups, stock),
         };
+        return frozen is null ? model : model with { Frozen = frozen.Describe(spec.Files[0], Free(model, free, groups, groupOfTube)) };
     }
+
+    // The frame as it would be sized without pins; what the spec gives is as it is, measured or not.
+    private static FrameModel Free(FrameModel model, TubeGroup?[] written, TubeGroup?[] pinned, int?[] groupOfTube)
+    {
+        TubeGroup?[] groups = [.. written.Zip(pinned, (free, fixedSize) => free is { IsFixed: true } ? fixedSize : free)];
+        return model with { Groups = UsedGroups.Of(groups, groupOfTube).Groups };
+    }
+
+    private static StockVersion[] StockOf(IReadOnlyList<TubeGroup> groups, StockTable stock) =>
+    [
+        .. groups
+            .SelectMany(g => g.Candidates)
+            .Select(c => c.StockList)
+            .Where(l => l.Length > 0)
+            .Distinct(StringComparer.Ordinal)
+            .Select(l => new StockVersion(l, stock.VersionOf(l)!)),
+    ];
 
     private static Frame PlaceFrame(FrameSpec spec, Reflection? mirror, double gap, SpecValues values)
     {
@@ -116,6 +138,25 @@ public static class ModelResolver
         return groups;
     }
 
+    private static Target?[] BindTargets(
+        FrameSpec spec,
+        Frame frame,
+        NameIndex caseNames,
+        SupportResolver supports,
+        NameIndex groupNames,
+        TubeGroup?[] groups,
+        int?[] groupOfTube)
+    {
+        var targets = new TargetResolver(
+            frame,
+            caseNames,
+            supports,
+            new MemberTargets(frame, groupNames, groupOfTube, spec.Targets),
+            new StrengthTargets(frame, caseNames, spec.Groups, groups, groupNames, groupOfTube),
+            new StabilityTargets(frame, caseNames, supports, groups, groupOfTube));
+        return [.. spec.Targets.Select((target, index) => targets.Resolve(index, target))];
+    }
+
     private static void WarnOfUnusedGroups(IReadOnlyList<GroupSpec> specs, int?[] groupOfTube, DiagnosticList diagnostics)
     {
         var used = new HashSet<int?>(groupOfTube);
@@ -139,6 +180,9 @@ public static class ModelResolver
             Convert.ToHexStringLower(SHA256.HashData(root.Bytes.Span)),
             title,
             spec.Revision,
-            spec.Notes);
+            spec.Notes)
+        {
+            Frozen = spec.Frozen?.File,
+        };
     }
 }

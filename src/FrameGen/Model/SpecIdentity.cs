@@ -17,4 +17,8 @@ public sealed record SpecIdentity(
     string Sha256,
     string Title,
     string Revision,
-    string Notes);
+    string Notes)
+{
+    /// <summary>The pinned sizes beside the root file; null where there are none.</summary>
+    public SourceFile? Frozen { get; init; }
+}

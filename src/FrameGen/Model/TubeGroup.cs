@@ -9,7 +9,7 @@ namespace FrameGen.Model;
 /// <param name="Name">Unique.</param>
 /// <param name="Material">Of all its tubes.</param>
 /// <param name="Candidates">One for a fixed section; else those to choose from, by mass per metre, then by name.</param>
-/// <param name="IsFixed">True where the spec gives the section.</param>
+/// <param name="IsFixed">True where the spec gives the section, or the file beside it that pins sizes.</param>
 /// <param name="Choose">What the spec lets it choose from; null for a fixed section.</param>
 /// <param name="Welded">False for tubes joined without heat.</param>
 /// <param name="At">Where it is written.</param>
@@ -20,7 +20,11 @@ public sealed record TubeGroup(
     bool IsFixed,
     ChooseSpec? Choose,
     bool Welded,
-    SourcePlace At);
+    SourcePlace At)
+{
+    /// <summary>True where the size is pinned by the file beside the spec; it is fixed then.</summary>
+    public bool IsFrozen { get; init; }
+}
 
 /// <summary>A section that can be bought, or the one that the spec gives.</summary>
 /// <param name="Section">Its section.</param>

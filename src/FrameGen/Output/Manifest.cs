@@ -1,6 +1,7 @@
 using System.Security.Cryptography;
 using System.Text.Json;
 using FrameGen.Model;
+using FrameGen.Spec;
 
 namespace FrameGen.Output;
 
@@ -24,6 +25,9 @@ public sealed record Manifest(
 
     private const string Format = "framegen-manifest/1";
 
+    /// <summary>Where the copy of the pinned sizes is in the folder; null where sizes were not pinned.</summary>
+    public string? Frozen { get; init; }
+
     /// <summary>Describes the files of a build.</summary>
     public static Manifest Of(SpecIdentity spec, IReadOnlyList<(string Path, string File)> includes, IEnumerable<OutputFile> files) =>
         new(
@@ -32,7 +36,10 @@ public sealed record Manifest(
             includes,
             ToolIdentity.Name,
             ToolIdentity.Version,
-            [.. files.OrderBy(f => f.Path, StringComparer.Ordinal).Select(f => new ManifestEntry(f.Path, Hash(f.Bytes.Span)))]);
+            [.. files.OrderBy(f => f.Path, StringComparer.Ordinal).Select(f => new ManifestEntry(f.Path, Hash(f.Bytes.Span)))])
+        {
+            Frozen = spec.Frozen is null ? null : SpecCopies.Folder + FrozenSpec.PathBeside(spec.FileName),
+        };
 
     /// <summary>SHA-256 in lower-case hex.</summary>
     public static string Hash(ReadOnlySpan<byte> bytes) => Convert.ToHexStringLower(SHA256.HashData(bytes));
@@ -57,6 +64,11 @@ public sealed record Manifest(
             }
 
             json.WriteEndArray();
+        }
+
+        if (Frozen is not null)
+        {
+            json.WriteString("frozen", Frozen);
         }
 
         json.WriteEndObject();
@@ -99,7 +111,10 @@ public sealed record Manifest(
                     : [],
                 Text(tool, "name"),
                 Text(tool, "version"),
-                [.. root.GetProperty("files").EnumerateArray().Select(f => new ManifestEntry(Text(f, "path"), Text(f, "sha256")))]);
+                [.. root.GetProperty("files").EnumerateArray().Select(f => new ManifestEntry(Text(f, "path"), Text(f, "sha256")))])
+            {
+                Frozen = spec.TryGetProperty("frozen", out _) ? Text(spec, "frozen") : null,
+            };
         }
         catch (Exception e) when (e is JsonException or KeyNotFoundException or InvalidOperationException)
         {

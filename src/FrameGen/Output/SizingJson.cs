@@ -54,6 +54,35 @@ internal static class SizingJson
         json.Number("mass_kg", sized.MassKg);
         json.Number("bound_kg", sized.BoundKg);
         json.WriteNumber("analyses", sized.Analyses);
+        if (sized.Model.Frozen is { } frozen)
+        {
+            WriteFrozen(json, sized, frozen);
+        }
+
+        json.WriteEndObject();
+    }
+
+    private static void WriteFrozen(Utf8JsonWriter json, SizedFrame sized, FrozenSizes frozen)
+    {
+        json.WriteStartObject("frozen");
+        json.WriteString("file", frozen.FileName);
+        json.WriteString("sha256", frozen.Sha256);
+        json.WriteString("tool", frozen.Tool);
+        if (sized.Today is { } today)
+        {
+            json.WriteStartObject("today");
+            json.WriteString("status", StatusWord(today.Status));
+            json.Number("mass_kg", today.MassKg);
+            json.WriteStartObject("groups");
+            for (int g = 0; g < today.Chosen.Count; g++)
+            {
+                json.WriteString(today.Model.Groups[g].Name, today.Chosen[g].Nominal.Name);
+            }
+
+            json.WriteEndObject();
+            json.WriteEndObject();
+        }
+
         json.WriteEndObject();
     }
 

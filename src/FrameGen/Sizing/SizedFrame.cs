@@ -43,6 +43,9 @@ public sealed record SizedFrame(
     /// <summary>The lowest natural frequencies, Hz, lowest first; null when no target asks for them.</summary>
     public IReadOnlyList<double>? Frequencies { get; init; }
 
+    /// <summary>What would be chosen today, where the sizes are pinned; null where they are not, or where nothing could be chosen.</summary>
+    public SizedFrame? Today { get; init; }
+
     /// <summary>Section by group.</summary>
     public IReadOnlyList<Section> Sections { get; } = [.. Chosen.Select(c => c.Section)];
 

@@ -51,6 +51,9 @@ internal static class UnmetReport
     /// <summary>Warns of every target that a frame of given sections misses.</summary>
     public static void ExplainFixed(IReadOnlyList<TargetResult> targets, IReadOnlyList<TargetCheck> checks, DiagnosticList diagnostics)
     {
+        string advice = checks.Any(c => c.Model.Frozen is not null)
+            ? "the sizes are frozen: change the target or the layout, or choose anew (framegen freeze --replace)"
+            : "the sections are fixed: give a group stouter ones, or let it `choose`";
         for (int t = 0; t < targets.Count; t++)
         {
             if (!targets[t].Met)
@@ -58,7 +61,7 @@ internal static class UnmetReport
                 string where = targets[t].Where.Length == 0 ? "" : $" ({targets[t].Where})";
                 diagnostics.Warning(
                     checks[t].Target.At,
-                    $"{targets[t].Kind} {targets[t].Label}: {Amount(targets[t])}{where}; the sections are fixed: give a group stouter ones, or let it `choose`");
+                    $"{targets[t].Kind} {targets[t].Label}: {Amount(targets[t])}{where}; {advice}");
             }
         }
     }

@@ -47,6 +47,9 @@ public sealed record FrameSpec(
 {
     /// <summary>Sizes of tubes in hand, in the order written.</summary>
     public IReadOnlyList<MeasuredSpec> Measured { get; init; } = [];
+
+    /// <summary>The pinned sizes beside the spec; null where there are none.</summary>
+    public FrozenSpec? Frozen { get; init; }
 }
 
 /// <summary>A named quantity; its kind follows from its value.</summary>

@@ -41,6 +41,20 @@ internal sealed class IncludedFiles(Func<string, byte[]?> content)
     /// <returns>The root's keys as far as they could be read; null where nothing could.</returns>
     public MapReading? ReadRoot(string path, byte[] bytes) => Read(path, bytes, FileKeys.Spec);
 
+    /// <summary>Reads the pinned sizes beside the root file.</summary>
+    /// <returns>Null where there are none, or where they are wrong.</returns>
+    public FrozenSpec? ReadFrozen(string root)
+    {
+        string path = FrozenSpec.PathBeside(root);
+        if (content(path) is not { } bytes || SpecFile.Read(path, bytes, FrozenKeys.File, Problems) is not { IsSound: true } read)
+        {
+            return null;
+        }
+
+        return new FrozenSpec(
+            new SourceFile(path, bytes), read.Get(FrozenKeys.Freezes), read.Items(FrozenKeys.Stock), read.Get(FrozenKeys.Groups));
+    }
+
     private MapReading? Read(string path, byte[] bytes, MapForm<MapReading> form)
     {
         _files.Add(new SourceFile(path, bytes));

@@ -18,7 +18,7 @@ public static class SpecReader
     /// <param name="path">The root file.</param>
     /// <param name="content">
     /// Gives the bytes of a file by its path (an included file's is relative to the same place as the root's), or null where
-    /// there is none. Of a file over 1 MiB it need not give more than that and a byte.
+    /// there is none. Of a file over 1 MiB it need not give more than that and a byte. It is asked for pinned sizes beside the root too.
     /// </param>
     /// <param name="diagnostics">Everything wrong with it, each with its place, in the order of the text.</param>
     /// <returns>The spec, or null when an error was reported.</returns>
@@ -32,8 +32,9 @@ public static class SpecReader
         byte[] bytes = content(path) ?? throw new FileNotFoundException($"There is no file '{path}'.", path);
         var files = new IncludedFiles(content);
         MapReading? root = files.ReadRoot(path, bytes);
-        files.Problems.TellInOrder([.. files.Files.Select(file => file.Path)], diagnostics);
-        return root is { IsSound: true } && files.Problems.Count == 0 ? Spec(root, files) : null;
+        FrozenSpec? frozen = files.ReadFrozen(path);
+        files.Problems.TellInOrder([.. files.Files.Select(file => file.Path), FrozenSpec.PathBeside(path)], diagnostics);
+        return root is { IsSound: true } && files.Problems.Count == 0 ? Spec(root, files) with { Frozen = frozen } : null;
     }
 
     private static FrameSpec Spec(MapReading root, IncludedFiles files) => new(

@@ -1,3 +1,6 @@
+using System.Globalization;
+using System.Security.Cryptography;
+using System.Text;
 using FrameGen.Mechanics.Sections;
 
 namespace FrameGen.Stock;
@@ -10,6 +13,19 @@ public sealed record StockList(string Name, IReadOnlyList<string> Materials, IRe
 {
     /// <summary>True where the list is sold in the material; names are compared without regard to case.</summary>
     public bool IsSoldIn(string material) => Materials.Contains(material, StringComparer.OrdinalIgnoreCase);
+
+    /// <summary>What the list's contents are known by: changes with any material, size, bar or price.</summary>
+    public string Version()
+    {
+        const int Characters = 12;
+        var text = new StringBuilder().AppendJoin(' ', Materials).Append('\n');
+        foreach (StockSize size in Sizes)
+        {
+            text.Append(CultureInfo.InvariantCulture, $"{size.Section.Name} {size.BarLength:R} {size.PricePerMetre:R}\n");
+        }
+
+        return Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text.ToString())))[..Characters];
+    }
 }
 
 /// <summary>A size in a stock list.</summary>

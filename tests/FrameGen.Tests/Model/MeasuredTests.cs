@@ -33,6 +33,14 @@ public sealed class MeasuredTests
         Assert.Equal("round 38 x 1.5 mm", wall.Nominal.Name);
     }
 
+    [Theory]
+    [InlineData("square 40 x 2 mm", "{height: 40.1 mm}", "square 40.1 x 2 mm")]
+    [InlineData("square 40 x 2 mm", "{height: 40.1 mm, width: 39.9 mm, wall: 1.9 mm}", "rect 40.1 x 39.9 x 1.9 mm corner 4 mm")]
+    [InlineData("rect 60 x 40 x 2 mm", "{width: 40.2 mm}", "rect 60 x 40.2 x 2 mm")]
+    [InlineData("ellipse 45 x 28 x 1.5 mm", "{height: 44.8 mm, width: 28.1 mm, wall: 1.48 mm}", "ellipse 44.8 x 28.1 x 1.48 mm")]
+    public void Other_shapes_are_measured_by_height_width_and_wall(string section, string measures, string measured) => Assert.Equal(
+        measured, Resolve($"measured: {{posts: {measures}}}", out _, section)!.Groups[0].Candidates[0].Section.Name);
+
     [Fact]
     public void A_rod_is_measured_by_its_diameter() => Assert.Equal(
         new Rod(15.97), Resolve("measured: {posts: {od: 15.97 mm}}", out _, "rod 16 mm")!.Groups[0].Candidates[0].Section);
@@ -43,6 +51,7 @@ public sealed class MeasuredTests
     [InlineData("{posts: {wall: 2 mm}}", "round 38 x 1.5 mm", "wall 2 mm is 33.3 % off round 38 x 1.5 mm: that is another tube")]
     [InlineData("{posts: {wall: 4 mm}}", "rod 16 mm", "rod 16 mm has no wall")]
     [InlineData("{posts: {height: 38 mm}}", "round 38 x 1.5 mm", "round 38 x 1.5 mm has no height: it is measured by od")]
+    [InlineData("{posts: {od: 40 mm}}", "square 40 x 2 mm", "square 40 x 2 mm has no od: it is measured by height and width")]
     [InlineData("{posts: {od: 9.6 mm, wall: 4.85 mm}}", "round 10 x 4.5 mm", "a wall of 4.85 mm leaves no bore in a tube of 9.6 mm")]
     [InlineData("{posts: {od: =1 mm - 1 mm}}", "round 38 x 1.5 mm", "must be more than 0")]
     public void Says_what_can_not_have_been_measured(string measured, string section, string message)
@@ -114,6 +123,6 @@ public sealed class MeasuredTests
         FrameModel model = Resolve(Loaded + added, out DiagnosticList diagnostics)!;
         CutFrame? cut = EndCoper.Cope(SectionSizer.Size(model, diagnostics)!, diagnostics);
         Assert.DoesNotContain(diagnostics, d => d.Severity == Severity.Error);
-        return ShopPlanner.Plan(cut!);
+        return ShopPlanner.Plan(cut!, diagnostics)!;
     }
 }

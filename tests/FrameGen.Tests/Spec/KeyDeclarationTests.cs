@@ -11,7 +11,7 @@ namespace FrameGen.Tests.Spec;
 /// <summary>The keys are data: what they say of themselves must be true.</summary>
 public class KeyDeclarationTests
 {
-    /// <summary>All keys of a spec file, with the way to each.</summary>
+    /// <summary>All keys of a spec file and of the pinned sizes beside it, with the way to each.</summary>
     public static TheoryData<string> Ways => [.. All().Select(found => found.Way).Distinct(StringComparer.Ordinal)];
 
     [Theory]
@@ -51,6 +51,7 @@ public class KeyDeclarationTests
     {
         var found = new List<(string Way, Key Key)>();
         Walk(FileKeys.Spec, string.Empty, found);
+        Walk(FrozenKeys.File, "frozen", found);
         return found;
     }
 

@@ -35,8 +35,8 @@ internal static class MeasuredSizes
             {
                 values.Diagnostics.Error(
                     spec.Group.At,
-                    $"measured: group {group.Name} still chooses its size, so that there is no tube of it to measure; give the group the section "
-                    + "that you hold (section: ...) in place of choose");
+                    $"measured: group {group.Name} still chooses its size, so that there is no tube of it to measure; freeze the sizes, or give the "
+                    + "group the section that you hold (section: ...) in place of choose");
             }
             else if (Measure(spec, group.Candidates[0].Nominal, values) is { } measured)
             {
@@ -48,27 +48,36 @@ internal static class MeasuredSizes
     private static Section? Measure(MeasuredSpec spec, Section nominal, SpecValues values)
     {
         var measure = new Measuring(spec, nominal, values);
-        double height = measure.Outer("od", spec.Od, nominal.Height, IsRound(nominal)) ?? nominal.Height;
-        height = measure.Outer("height", spec.Height, nominal.Height, !IsRound(nominal)) ?? height;
-        double width = measure.Outer("width", spec.Width, nominal.Width, !IsRound(nominal)) ?? nominal.Width;
+        double? od = measure.Outer("od", spec.Od, nominal.Height, IsRound(nominal));
+        double? height = measure.Outer("height", spec.Height, nominal.Height, !IsRound(nominal));
+        double? width = measure.Outer("width", spec.Width, nominal.Width, !IsRound(nominal));
         double wall = measure.Wall(spec.Wall) ?? nominal.Wall;
         if (!measure.IsSound)
         {
             return null;
         }
 
-        if (nominal is not Rod && !(wall < Math.Min(height, IsRound(nominal) ? height : width) / 2))
+        // One side of a square stands for both.
+        bool square = nominal is FlatSidedTube && nominal.Height == nominal.Width;
+        double h = od ?? height ?? (square ? width : null) ?? nominal.Height;
+        double w = od ?? width ?? (square ? height : null) ?? nominal.Width;
+        try
         {
-            measure.Error(spec.Wall?.At ?? spec.Group.At, $"a wall of {wall:0.###} mm leaves no bore in a tube of {height:0.###} mm; measure again");
+            return nominal switch
+            {
+                RoundTube => new RoundTube(h, wall),
+                Rod => new Rod(h),
+                FlatSidedTube tube => new FlatSidedTube(h, w, wall, tube.OuterCorner),
+                EllipseTube => new EllipseTube(h, w, wall),
+                _ => throw new InvalidOperationException($"How a {nominal.Shape} is measured is not written yet."),
+            };
+        }
+        catch (ArgumentOutOfRangeException)
+        {
+            string size = IsRound(nominal) ? $"{h:0.###} mm" : $"{h:0.###} x {w:0.###} mm";
+            measure.Error(spec.Wall?.At ?? spec.Group.At, $"a wall of {wall:0.###} mm leaves no bore in a tube of {size}; measure again");
             return null;
         }
-
-        return nominal switch
-        {
-            RoundTube => new RoundTube(height, wall),
-            Rod => new Rod(height),
-            _ => throw new InvalidOperationException($"A {nominal.Shape} can't be measured yet."),
-        };
     }
 
     private static bool IsRound(Section section) => section is RoundTube or Rod;

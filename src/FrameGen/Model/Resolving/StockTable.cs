@@ -57,6 +57,9 @@ internal sealed class StockTable
         return list;
     }
 
+    /// <summary>What a list's contents are known by; null where there is no such list.</summary>
+    public string? VersionOf(string name) => (FindWritten(name) ?? StockCatalogue.Find(name))?.Version();
+
     /// <summary>True for a list that the spec writes out.</summary>
     public bool IsWritten(StockList list) => _written.Contains(list);
 
