@@ -9,10 +9,11 @@ namespace FrameGen.Acceptance.Builds;
 /// <summary>A spec built into a temporary folder through the command line, and what a reader of its papers needs.</summary>
 internal sealed class BuiltFrame : IDisposable
 {
-    private readonly string _place = Directory.CreateTempSubdirectory("framegen-").FullName;
+    private readonly string _place;
 
-    private BuiltFrame(string specPath)
+    private BuiltFrame(string place, string specPath)
     {
+        _place = place;
         SpecPath = specPath;
         Folder = Path.Combine(_place, "papers");
         var stdout = new StringWriter();
@@ -33,19 +34,25 @@ internal sealed class BuiltFrame : IDisposable
     public string Stderr { get; }
 
     /// <summary>Builds a spec of the checkout.</summary>
-    public static BuiltFrame FromFile(string specPath) => new(specPath);
+    public static BuiltFrame FromFile(string specPath) => new(NewPlace(), specPath);
 
     /// <summary>Builds a spec given as text.</summary>
     public static BuiltFrame FromText(string text)
     {
-        string path = Path.Combine(Directory.CreateTempSubdirectory("framegen-spec-").FullName, "frame.yaml");
+        string place = NewPlace();
+        string path = Path.Combine(place, "frame.yaml");
         File.WriteAllText(path, text);
-        return new BuiltFrame(path);
+        return new BuiltFrame(place, path);
     }
 
     /// <summary>Stops the test with the build's own words when it failed.</summary>
     public BuiltFrame Succeeded()
     {
+        if (ExitCode != 0)
+        {
+            Dispose();
+        }
+
         Xunit.Assert.True(ExitCode == 0, $"exit {ExitCode}\n{Stdout}\n{Stderr}");
         return this;
     }
@@ -72,4 +79,6 @@ internal sealed class BuiltFrame : IDisposable
     }
 
     public void Dispose() => Directory.Delete(_place, recursive: true);
+
+    private static string NewPlace() => Directory.CreateTempSubdirectory("framegen-").FullName;
 }

@@ -53,6 +53,37 @@ public class FrameLawTests
         Assert.InRange(solution.BackwardError, 0, 1e-14);
     }
 
+    // Each property adds to the stiffness matrix what no motion can make negative, so the loads' work, f u, only falls as it grows.
+    [Theory]
+    [MemberData(nameof(Samples))]
+    public void No_property_of_a_section_makes_a_frame_softer_as_it_grows(ulong seed, int nodes)
+    {
+        FrameSolver solver = SolverTestFrames.Random(seed, nodes).Solver();
+        var loads = new BeamLoads(SolverTestFrames.Loads(solver.Frame).NodalLoads, []);
+        double before = Work(Design);
+        BeamProfile one = Design[0];
+        BeamProfile[] stouter =
+        [
+            one with { Area = 1.3 * one.Area },
+            one with { Iy = 1.3 * one.Iy },
+            one with { Iz = 1.3 * one.Iz },
+            one with { J = 1.3 * one.J },
+            one with { ShearAreaY = 1.3 * one.ShearAreaY },
+            one with { ShearAreaZ = 1.3 * one.ShearAreaZ },
+        ];
+        Assert.All(stouter, profile => Assert.InRange(Work([profile, Design[1]]), 0, before * (1 + 1e-12)));
+        Assert.InRange(Work([one with { Iy = 1.3 * one.Iy, Iz = 1.3 * one.Iz }, Design[1]]), 0, before * (1 - 1e-6));
+
+        // All of them together, in every tube: the whole matrix grows by that factor.
+        Assert.Equal(before / 1.3, Work([.. Design.Select(p => p with { E = 1.3 * p.E, G = 1.3 * p.G })]), 1e-9 * before);
+
+        double Work(BeamProfile[] design)
+        {
+            FrameSolution solution = solver.Factor(design).Solve(loads);
+            return loads.NodalLoads.Sum(l => l.Force.Dot(solution.Displacement(l.Node)) + l.Moment.Dot(solution.Rotation(l.Node)));
+        }
+    }
+
     [Theory]
     [MemberData(nameof(Samples))]
     public void Held_freedoms_stay_and_free_ones_get_no_reaction(ulong seed, int nodes)

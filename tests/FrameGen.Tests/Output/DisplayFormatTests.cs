@@ -89,6 +89,21 @@ public class DisplayFormatTests
         Assert.Equal("rod 16 mm", Imperial.Section(new Rod(16)));
     }
 
+    // 2 in = 50.8 mm, 3 in = 76.2 mm, 1/8 in = 3.175 mm with the rule's corner of 1/4 in, 3/16 in = 4.7625 mm.
+    [Fact]
+    public void Names_other_inch_shapes_in_inches()
+    {
+        Assert.Equal("square 2 x 0.125 in", Imperial.Section(new FlatSidedTube(50.8, 50.8, 3.175)));
+        Assert.Equal("rect 3 x 2 x 0.125 in", Imperial.Section(new FlatSidedTube(76.2, 50.8, 3.175)));
+        Assert.Equal("square 2 x 0.125 in corner 0.1875 in", Imperial.Section(new FlatSidedTube(50.8, 50.8, 3.175, 4.7625)));
+        Assert.Equal("square 2 x 0.125 in corner 0 in", Imperial.Section(new FlatSidedTube(50.8, 50.8, 3.175, 0)));
+        Assert.Equal("square 2 x 0.125 in corner 0.1875 in inner 0.125 in", Imperial.Section(new FlatSidedTube(50.8, 50.8, 3.175, 4.7625, 3.175)));
+        Assert.Equal("square 2 x 0.125 in corner 5 mm", Imperial.Section(new FlatSidedTube(50.8, 50.8, 3.175, 5)));
+        Assert.Equal("square 50 x 3 mm", Imperial.Section(new FlatSidedTube(50, 50, 3)));
+        Assert.Equal("ellipse 2 x 1 x 0.0625 in", Imperial.Section(new EllipseTube(50.8, 25.4, 1.5875)));
+        Assert.Equal("ellipse 45 x 28 x 1.5 mm", Imperial.Section(new EllipseTube(45, 28, 1.5)));
+    }
+
     // 1 lbf/in = 4.4482216152605 N / 25.4 mm = 0.1751268 N/mm; 1 lbf.ft = 1.3558179 N.m.
     [Fact]
     public void Shows_targets_in_the_units_of_the_papers()
