@@ -22,7 +22,7 @@ internal sealed class PartsReport(Terminal terminal, ShopPackage package)
         foreach (Part part in package.Parts)
         {
             table.Row(
-                part.Quantity == 1 ? part.Mark : string.Create(CultureInfo.InvariantCulture, $"{part.Quantity} x {part.Mark}"),
+                part.Quantity == 1 ? part.Name : string.Create(CultureInfo.InvariantCulture, $"{part.Quantity} x {part.Name}"),
                 _display.Section(package.Cut.Sized.ChosenFor(part.Drawn.Tube).Nominal),
                 _display.LengthNumber(part.Drawn.CutLength),
                 _display.MassNumber(part.Drawn.MassKg),

@@ -13,9 +13,9 @@ public static class ShopPlanner
 {
     /// <summary>Plans the shop's work.</summary>
     /// <remarks>
-    /// Every tube is a part of its own, marked with its name (<see cref="Marks"/>). Parts stand in the order a shop cuts them: by section (shape,
-    /// then size), by material, long ones first, then by name. Lengths are compared as the cut list prints them, so that
-    /// rounding noise between mirrored twins does not decide.
+    /// Tubes of one shape are one part (<see cref="PartSorter"/>). Parts stand in the order a shop cuts them: by section (shape,
+    /// then size), by material, long ones first, then by mark and hand. Lengths are compared as the cut list prints them, so that
+    /// rounding noise does not decide.
     /// </remarks>
     /// <param name="cut">The frame.</param>
     /// <param name="diagnostics">A piece longer than any bar: an error.</param>
@@ -24,20 +24,36 @@ public static class ShopPlanner
     {
         SizedFrame sized = cut.Sized;
         FrameModel model = sized.Model;
-        IReadOnlyList<string> marks = Marks.Of(model);
+        IReadOnlyList<PartGroup> groups = PartSorter.Sort(cut);
+        IReadOnlyList<string> marks = Marks.Of(model, groups);
         IReadOnlyList<Part> parts =
         [
-            .. cut.Tubes
-                .OrderBy(t => sized.SectionOf(t.Tube).Shape, StringComparer.Ordinal)
-                .ThenBy(t => sized.SectionOf(t.Tube).Height)
-                .ThenBy(t => sized.SectionOf(t.Tube).Width)
-                .ThenBy(t => sized.SectionOf(t.Tube).Wall)
-                .ThenBy(t => model.Groups[model.Tubes[t.Tube].Group].Material.Name, StringComparer.Ordinal)
-                .ThenByDescending(t => Math.Round(t.CutLength, 3))
-                .ThenBy(t => model.Tubes[t.Tube].Name, StringComparer.Ordinal)
-                .Select(t => new Part(marks[t.Tube], [t.Tube], t, SeatTwist.Degrees(t), Note(sized, t))),
+            .. groups.SelectMany((g, i) => Hands(sized, g, marks[i]))
+                .OrderBy(p => sized.SectionOf(p.Drawn.Tube).Shape, StringComparer.Ordinal)
+                .ThenBy(p => sized.SectionOf(p.Drawn.Tube).Height)
+                .ThenBy(p => sized.SectionOf(p.Drawn.Tube).Width)
+                .ThenBy(p => sized.SectionOf(p.Drawn.Tube).Wall)
+                .ThenBy(p => model.Groups[model.Tubes[p.Drawn.Tube].Group].Material.Name, StringComparer.Ordinal)
+                .ThenByDescending(p => Math.Round(p.Drawn.CutLength, 3))
+                .ThenBy(p => p.Mark, StringComparer.Ordinal)
+                .ThenBy(p => p.Hand, StringComparer.Ordinal),
         ];
         return new StockPlanner(sized, diagnostics).Plan(parts) is { } stock ? new ShopPackage(cut, parts, Sum(cut), stock) : null;
+    }
+
+    /// <summary>One part, or two that are opposite hands. Which is A lies in the shape, so that it stays when tubes are added.</summary>
+    private static IEnumerable<Part> Hands(SizedFrame sized, PartGroup group, string mark)
+    {
+        if (group.Opposite is not { } opposite)
+        {
+            return [Make(group, string.Empty)];
+        }
+
+        (string first, string second) = group.Shape.Chirality < 0 ? ("B", "A") : ("A", "B");
+        return [Make(group, first), Make(opposite, second)];
+
+        Part Make(PartGroup of, string hand) =>
+            new(mark, hand, of.Placed, of.Shape.Cut, SeatTwist.Degrees(of.Shape.Cut), Note(sized, of.Shape.Cut));
     }
 
     private static Totals Sum(CutFrame cut)

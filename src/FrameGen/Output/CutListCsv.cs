@@ -27,7 +27,7 @@ internal static class CutListCsv
                 FixedDigits.Length(tube.Length),
                 FixedDigits.Mass(part.Drawn.MassKg),
                 FixedDigits.Mass(part.Drawn.MassKg * part.Quantity),
-                string.Empty,
+                part.Hand,
                 EndText.WithMates(model, part.Drawn.From),
                 EndText.WithMates(model, part.Drawn.To),
                 part.TwistDegrees is { } twist ? FixedDigits.Angle(twist) : string.Empty,

@@ -18,6 +18,7 @@ namespace FrameGen.Output;
 /// <param name="MassUnit">Of all masses.</param>
 /// <param name="Parts">One a distinct part, in the order of cutting.</param>
 /// <param name="Sections">One a section and material, in the same order: what the parts are cut from.</param>
+/// <param name="Placements">Tubes that take a part otherwise than it is drawn.</param>
 /// <param name="Pieces">How many pieces in all.</param>
 /// <param name="TotalLength">Sum of the cut lengths.</param>
 /// <param name="TotalMass">Of the cut frame.</param>
@@ -37,6 +38,7 @@ public sealed record CutListModel(
     string MassUnit,
     IReadOnlyList<CutListPart> Parts,
     IReadOnlyList<CutListSection> Sections,
+    IReadOnlyList<CutListPlacement> Placements,
     int Pieces,
     string TotalLength,
     string TotalMass,
@@ -63,6 +65,7 @@ public sealed record CutListModel(
             display.MassUnitName,
             [.. package.Parts.Select(p => CutListPart.From(package, p, display))],
             CutListSection.Of(package, display),
+            CutListPlacement.Of(package),
             package.Parts.Sum(p => p.Quantity),
             display.LengthNumber(package.Parts.Sum(p => p.Quantity * p.Drawn.CutLength)),
             display.MassNumber(package.Totals.MassKg),
@@ -72,7 +75,7 @@ public sealed record CutListModel(
 }
 
 /// <summary>One row of the cut list; lengths and masses in the list's units.</summary>
-/// <param name="Mark">On every paper of the part.</param>
+/// <param name="Mark">On every paper of the part, with its hand where it has one.</param>
 /// <param name="Quantity">How many to make.</param>
 /// <param name="Tubes">Names, separated by spaces.</param>
 /// <param name="Material">Name.</param>
@@ -105,7 +108,7 @@ public sealed record CutListPart(
         FrameModel model = package.Cut.Sized.Model;
         Tube tube = model.Tubes[part.Drawn.Tube];
         return new CutListPart(
-            part.Mark,
+            part.Name,
             part.Quantity,
             string.Join(' ', part.Tubes.Select(t => model.Tubes[t].Name)),
             model.Groups[tube.Group].Material.Name,
@@ -118,6 +121,32 @@ public sealed record CutListPart(
             EndText.ForPeople(model, part.Drawn.To),
             part.TwistDegrees is { } twist ? FixedDigits.Tenths(twist) : string.Empty,
             part.Note);
+    }
+}
+
+/// <summary>How a tube takes a part that is drawn for another one.</summary>
+/// <param name="Tube">Its name.</param>
+/// <param name="Mark">Of the part, with its hand where it has one.</param>
+/// <param name="Drawn">Name of the tube that the part is drawn for.</param>
+/// <param name="Swapped">True where the drawing's FROM end is at the tube's <c>to</c> node.</param>
+/// <param name="Turn">Degrees: clock angle on the tube less that on the drawing (negated where swapped).</param>
+public sealed record CutListPlacement(string Tube, string Mark, string Drawn, bool Swapped, string Turn)
+{
+    internal static IReadOnlyList<CutListPlacement> Of(ShopPackage package)
+    {
+        FrameModel model = package.Cut.Sized.Model;
+        return
+        [
+            .. from part in package.Parts
+               from placed in part.Placed
+               where placed.Swapped || placed.Turn != 0
+               select new CutListPlacement(
+                   model.Tubes[placed.Tube].Name,
+                   part.Name,
+                   model.Tubes[part.Drawn.Tube].Name,
+                   placed.Swapped,
+                   FixedDigits.Tenths(double.RadiansToDegrees(placed.Turn))),
+        ];
     }
 }
 

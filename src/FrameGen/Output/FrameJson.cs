@@ -120,16 +120,16 @@ public static class FrameJson
             json.WriteString("mark", part.Mark);
             json.WriteNumber("quantity", part.Quantity);
             json.Strings("tubes", part.Tubes.Select(t => model.Tubes[t].Name));
-            json.WriteString("hand", string.Empty);
+            json.WriteString("hand", part.Hand);
             json.Number("cut_length_mm", part.Drawn.CutLength);
             json.Number("mass_kg", part.Drawn.MassKg);
             json.WriteStartArray("placed");
-            foreach (int tube in part.Tubes)
+            foreach (Placement placed in part.Placed)
             {
                 json.WriteStartObject();
-                json.WriteString("tube", model.Tubes[tube].Name);
-                json.WriteNumber("turn_deg", 0);
-                json.WriteBoolean("swapped", value: false);
+                json.WriteString("tube", model.Tubes[placed.Tube].Name);
+                json.Number("turn_deg", double.RadiansToDegrees(placed.Turn));
+                json.WriteBoolean("swapped", placed.Swapped);
                 json.WriteEndObject();
             }
 

@@ -21,16 +21,16 @@ internal static class ShapeFiles
         {
             SelfCheck.NoInterference(cut, part.Drawn);
             Drawing developed = DevelopedPattern.Draw(package, part);
-            SelfCheck.DevelopedWidth(part.Mark, developed, cut.Sized.SectionOf(part.Drawn.Tube));
-            yield return new OutputFile($"developed/{part.Mark}.dxf", DxfWriter.Write(developed));
+            SelfCheck.DevelopedWidth(part.Name, developed, cut.Sized.SectionOf(part.Drawn.Tube));
+            yield return new OutputFile($"developed/{part.Name}.dxf", DxfWriter.Write(developed));
             if (TemplatePieces.Draw(package, part) is { } pieces)
             {
-                yield return new OutputFile($"templates/{part.Mark}.dxf", DxfWriter.Write(pieces));
+                yield return new OutputFile($"templates/{part.Name}.dxf", DxfWriter.Write(pieces));
             }
 
             TriangleMesh mesh = meshes[part.Drawn.Tube] = TubeMesher.Mesh(cut, part.Drawn.Tube);
-            SelfCheck.Mesh(part.Mark, mesh, part.Drawn.Volume);
-            yield return new OutputFile($"preview/{part.Mark}.stl", StlWriter.Write(mesh));
+            SelfCheck.Mesh(part.Name, mesh, part.Drawn.Volume);
+            yield return new OutputFile($"preview/{part.Name}.stl", StlWriter.Write(mesh));
         }
 
         yield return new OutputFile(

@@ -61,6 +61,30 @@ internal sealed class BuiltFrame : IDisposable
 
     public JsonElement FrameJson() => JsonDocument.Parse(File.ReadAllBytes(PathOf("frame.json"))).RootElement;
 
+    /// <summary>The part that a tube is: its name in files, and how the tube takes what is drawn.</summary>
+    public static (string File, double TurnDegrees, bool Swapped) PartOf(JsonElement frame, string tube)
+    {
+        foreach (JsonElement part in frame.GetProperty("parts").EnumerateArray())
+        {
+            foreach (JsonElement placed in part.GetProperty("placed").EnumerateArray())
+            {
+                if (placed.GetProperty("tube").GetString() == tube)
+                {
+                    return (FileOf(part), placed.GetProperty("turn_deg").GetDouble(), placed.GetProperty("swapped").GetBoolean());
+                }
+            }
+        }
+
+        throw new InvalidOperationException($"{tube} is no part");
+    }
+
+    /// <summary>A part's name in files: its mark, with its hand where it has one.</summary>
+    public static string FileOf(JsonElement part)
+    {
+        string hand = part.GetProperty("hand").GetString()!;
+        return part.GetProperty("mark").GetString() + (hand.Length == 0 ? string.Empty : "-" + hand);
+    }
+
     /// <summary>Rows of a CSV file by column name; the files hold no quoted commas in these tests.</summary>
     public IReadOnlyList<IReadOnlyDictionary<string, string>> Csv(string file)
     {

@@ -31,7 +31,7 @@ public class DemoBuildTests
             "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "templates.pdf", "preview/frame.stl", "frame.json", $"spec/{name}.yaml", "manifest.json",
         ];
         Assert.All(expected, file => Assert.True(File.Exists(built.PathOf(file)), file));
-        foreach (string mark in built.Csv("cut-list.csv").Select(row => row["mark"]))
+        foreach (string mark in built.Csv("cut-list.csv").Select(row => row["hand"].Length == 0 ? row["mark"] : $"{row["mark"]}-{row["hand"]}"))
         {
             Assert.True(File.Exists(built.PathOf("developed", mark + ".dxf")), mark);
             Assert.True(File.Exists(built.PathOf("preview", mark + ".stl")), mark);
@@ -68,14 +68,16 @@ public class DemoBuildTests
     {
         using BuiltFrame built = Build(name);
         JsonElement frame = built.FrameJson();
-        var volumes = frame.GetProperty("tubes").EnumerateObject()
-            .ToDictionary(t => t.Value.GetProperty("mark").GetString()!, t => t.Value.GetProperty("volume_mm3").GetDouble(), StringComparer.Ordinal);
+        JsonElement tubes = frame.GetProperty("tubes");
+        double Volume(string tube) => tubes.GetProperty(tube).GetProperty("volume_mm3").GetDouble();
+        var volumes = frame.GetProperty("parts").EnumerateArray()
+            .ToDictionary(BuiltFrame.FileOf, p => Volume(p.GetProperty("tubes")[0].GetString()!), StringComparer.Ordinal);
         foreach (string file in Directory.EnumerateFiles(built.PathOf("preview"), "*.stl").Order(StringComparer.Ordinal))
         {
             StlReport report = StlReport.Of(file);
             Assert.True(report.Clean, $"{Path.GetFileName(file)}: {report}");
             string mark = Path.GetFileNameWithoutExtension(file);
-            double volume = mark == "frame" ? volumes.Values.Sum() : volumes[mark];
+            double volume = mark == "frame" ? tubes.EnumerateObject().Sum(t => Volume(t.Name)) : volumes[mark];
             Assert.InRange(report.Volume / volume, 0.999, 1.001);
         }
     }

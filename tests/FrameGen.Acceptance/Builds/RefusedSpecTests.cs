@@ -90,7 +90,7 @@ public class RefusedSpecTests
             doc = ezdxf.readfile(sys.argv[1])
             print("\n".join(e.plain_text() for e in doc.modelspace().query("TEXT")))
             """;
-        string text = ForeignProgram.Python("ezdxf").Run("-c", ReadText, built.PathOf("developed", "boom.dxf"));
+        string text = ForeignProgram.Python("ezdxf").Run("-c", ReadText, built.PathOf("developed", BuiltFrame.PartOf(built.FrameJson(), "boom").File + ".dxf"));
         Assert.Contains("{{ 1 + 1 }}", text, StringComparison.Ordinal);
         Assert.Contains("<b>", text, StringComparison.Ordinal);
         Assert.DoesNotContain("°", text.Split('\n').First(l => l.Contains("<b>", StringComparison.Ordinal)), StringComparison.Ordinal);

@@ -118,11 +118,17 @@ public class RollBackTests
         Tube tube = model.Tubes.Single(t => t.Name == name);
         (double outer, double wall) = Size(frame, model, tube);
         JsonElement top = json.GetProperty("top");
+        var up = new Vector3(top[0].GetDouble(), top[1].GetDouble(), top[2].GetDouble());
+
+        // The drawing's top line lies at the turn's clock angle on the tube; seen along the tube, clock angles grow clockwise.
+        (string file, double turn, bool swapped) = BuiltFrame.PartOf(frame, name);
+        (double sin, double cos) = Math.SinCos(double.DegreesToRadians(turn));
+        Vector3 along = (tube.To.Point - tube.From.Point).Normalized();
         var pattern = new RolledPattern(
-            built.PathOf("developed", json.GetProperty("mark").GetString() + ".dxf"),
-            tube.From.Point,
-            tube.To.Point,
-            new Vector3(top[0].GetDouble(), top[1].GetDouble(), top[2].GetDouble()),
+            built.PathOf("developed", file + ".dxf"),
+            swapped ? tube.To.Point : tube.From.Point,
+            swapped ? tube.From.Point : tube.To.Point,
+            (cos * up) + (sin * along.Cross(up)),
             outer);
         Assert.Equal(1, pattern.CutLines);
 
@@ -132,7 +138,7 @@ public class RollBackTests
         bool radial = model.Fabrication.Cut == CutMode.Radial;
         double gap = 0;
         double interference = 0;
-        foreach (Point2 point in pattern.EndCurve(atFrom))
+        foreach (Point2 point in pattern.EndCurve(atFrom != swapped))
         {
             // Contour: the skin itself lies on a mate. Radial: somewhere in the wall it touches one, and nowhere is it inside.
             double nearest = double.PositiveInfinity;

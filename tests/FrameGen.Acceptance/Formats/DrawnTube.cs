@@ -78,7 +78,7 @@ internal sealed record DrawnTube(Section Section, double Length)
         double start = from.Outer.Min;
         double stop = Length - to.Outer.Min;
         var tube = new CutTube(0, from, to, start, stop, 1, 1, Vector3.Zero, 1);
-        var part = new Part(Mark, [.. Enumerable.Range(0, Names.Length)], tube, null, string.Empty);
+        var part = new Part(Mark, string.Empty, [.. Names.Select((_, i) => new Placement(i, 0, Swapped: false))], tube, null, string.Empty);
         return (new ShopPackage(new CutFrame(sized, [tube]), [part], new Totals(1, Vector3.Zero, 1, 1), new StockPlan([])), part);
     }
 

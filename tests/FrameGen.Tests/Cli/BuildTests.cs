@@ -52,7 +52,7 @@ public sealed class BuildTests : IDisposable
         Assert.Contains("Bench stand", output, StringComparison.Ordinal);
         Assert.Contains("Cautions:", output, StringComparison.Ordinal);
         Assert.All(output.Split('\n'), l => Assert.InRange(l.Length, 0, Math.Max(80, Out.Length + 30)));
-        Assert.True(File.Exists(Path.Join(Out, "preview/mast.stl")));
+        Assert.Equal(2, Directory.GetFiles(Path.Join(Out, "developed"), "tubes-*.dxf").Length);
         (int verified, string said, _) = Run("verify", Out, "--spec", SpecPath);
         Assert.Equal(0, verified);
         Assert.Contains("the same bytes", said, StringComparison.Ordinal);
@@ -68,7 +68,7 @@ public sealed class BuildTests : IDisposable
         Assert.Equal(1, code);
         using JsonDocument document = JsonDocument.Parse(output);
         string[] paths = [.. document.RootElement.GetProperty("differences").EnumerateArray().Select(d => d.GetProperty("path").GetString()!)];
-        Assert.Contains(paths, p => p is "developed/base.dxf");
+        Assert.Contains(paths, p => p.StartsWith("developed/tubes-", StringComparison.Ordinal));
         Assert.Contains(paths, p => p is "spec/sizes.yaml");
         Assert.DoesNotContain(paths, p => p is "spec/stand.yaml");
     }

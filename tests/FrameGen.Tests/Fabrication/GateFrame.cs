@@ -51,6 +51,10 @@ internal static class GateFrame
         return Planned(cut!);
     }
 
+    /// <summary>What the part of a tube is called on papers and in file names.</summary>
+    public static string PartOf(ShopPackage package, string tube) => package.Parts.Single(
+        p => p.Tubes.Any(t => string.Equals(package.Cut.Sized.Model.Tubes[t].Name, tube, StringComparison.Ordinal))).Name;
+
     public static CutFrame Cut(
         string title = "Garden gate", string notes = "", SizingStatus status = SizingStatus.Fixed, bool square = false)
     {

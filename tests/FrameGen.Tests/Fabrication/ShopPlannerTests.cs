@@ -7,20 +7,11 @@ namespace FrameGen.Tests.Fabrication;
 public class ShopPlannerTests
 {
     [Fact]
-    public void Every_tube_is_a_part_small_sections_first_then_long_ones()
+    public void Small_sections_stand_first_then_long_parts()
     {
         ShopPackage package = GateFrame.Package();
-        Assert.Equal(["post", "arm", "rail"], package.Parts.Select(p => p.Mark).ToArray());
+        Assert.Equal([1, 2, 0], package.Parts.Select(p => p.Drawn.Tube).ToArray());
         Assert.All(package.Parts, p => Assert.Equal(1, p.Quantity));
-    }
-
-    [Fact]
-    public void Twins_whose_lengths_differ_by_noise_stand_by_name()
-    {
-        CutFrame cut = GateFrame.Cut(square: true);
-        CutTube post = cut.Tubes[1];
-        CutTube[] tubes = [cut.Tubes[0], post with { Stop = 500.000_000_01 }, cut.Tubes[2] with { Stop = 500 }];
-        Assert.Equal(["arm", "post", "rail"], GateFrame.Planned(cut with { Tubes = tubes }).Parts.Select(p => p.Mark).ToArray());
     }
 
     [Fact]
@@ -66,8 +57,8 @@ public class ShopPlannerTests
     public void An_end_without_a_seat_has_no_twist()
     {
         ShopPackage package = GateFrame.Package();
-        Assert.Null(package.Parts.Single(p => p.Mark is "rail").TwistDegrees);
-        Assert.Equal(0, package.Parts.Single(p => p.Mark is "post").TwistDegrees);
+        Assert.Null(package.Parts.Single(p => p.Drawn.Tube == 0).TwistDegrees);
+        Assert.Equal(0, package.Parts.Single(p => p.Drawn.Tube == 1).TwistDegrees);
     }
 
     [Fact]

@@ -7,15 +7,17 @@ namespace FrameGen.Tests.Output;
 
 public class CutListMarkdownTests
 {
+    private static readonly string Post = GateFrame.PartOf(GateFrame.Package(), "post");
+
     [Fact]
     public void Has_a_row_a_part_and_the_cautions()
     {
         string[] lines = Render().Split('\n');
         Assert.Equal("# Cut list: Garden gate, revision B", lines[0]);
-        string[] row = Cells(Assert.Single(lines, l => l.StartsWith("| post ", StringComparison.Ordinal)));
+        string[] row = Cells(Assert.Single(lines, l => l.StartsWith($"| {Post} ", StringComparison.Ordinal)));
 
         // The post's mass is checked where it is computed.
-        Assert.Equal(["post", "round 30 x 1.5 mm", "S235", "601.8"], row[..4]);
+        Assert.Equal([Post, "round 30 x 1.5 mm", "S235", "601.8"], row[..4]);
         Assert.Equal(["cope to rail", "miter with arm", "0.0", "contour cut"], row[5..]);
         Assert.All(lines, l => Assert.Equal(l.TrimEnd(), l));
         Assert.DoesNotContain("\n\n\n", string.Join('\n', lines), StringComparison.Ordinal);

@@ -13,15 +13,18 @@ public class PaperSetTests
     [Fact]
     public void Writes_every_file_that_belongs_to_a_package()
     {
-        string[] paths = [.. PaperSet.Create(GateFrame.CopedPackage()).Select(f => f.Path)];
+        ShopPackage package = GateFrame.CopedPackage();
+        string[] paths = [.. PaperSet.Create(package).Select(f => f.Path)];
+        (string post, string arm, string rail) =
+            (GateFrame.PartOf(package, "post"), GateFrame.PartOf(package, "arm"), GateFrame.PartOf(package, "rail"));
         string[] expected =
         [
             "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "frame.json", "manifest.json", "templates.pdf",
-            "developed/post.dxf", "developed/arm.dxf", "developed/rail.dxf", "templates/post.dxf", "templates/arm.dxf",
-            "spec/gate.yaml", "spec/gate-2.yaml", "preview/frame.stl", "preview/post.stl", "preview/arm.stl", "preview/rail.stl",
+            $"developed/{post}.dxf", $"developed/{arm}.dxf", $"developed/{rail}.dxf", $"templates/{post}.dxf", $"templates/{arm}.dxf",
+            "spec/gate.yaml", "spec/gate-2.yaml", "preview/frame.stl", $"preview/{post}.stl", $"preview/{arm}.stl", $"preview/{rail}.stl",
         ];
         Assert.All(expected, e => Assert.Contains(paths, p => p.Equals(e, StringComparison.Ordinal)));
-        Assert.DoesNotContain(paths, p => p is "templates/rail.dxf");
+        Assert.DoesNotContain(paths, p => string.Equals(p, $"templates/{rail}.dxf", StringComparison.Ordinal));
         Assert.Equal(paths.Length, paths.Distinct(StringComparer.OrdinalIgnoreCase).Count());
     }
 

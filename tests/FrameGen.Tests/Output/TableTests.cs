@@ -1,3 +1,4 @@
+using FrameGen.Fabrication;
 using FrameGen.Output;
 using FrameGen.Tests.Fabrication;
 using Xunit;
@@ -35,17 +36,18 @@ public class TableTests
     [Fact]
     public void Cut_list_has_the_agreed_columns_and_digits()
     {
-        string[] lines = CutListCsv.Write(GateFrame.Package()).Split('\n');
+        ShopPackage package = GateFrame.Package();
+        string[] lines = CutListCsv.Write(package).Split('\n');
         Assert.Equal(
             "mark,quantity,tubes,material,section,cut_length_mm,node_length_mm,mass_each_kg,mass_total_kg,hand,from_end,to_end,twist_deg,note",
             lines[0]);
 
         // The post: shortest at the saddle's sides, sqrt(20^2 - 15^2) = 13.2288 from the rail's axis; longest 15 past the miter's point.
         string[] post = lines[1].Split(',');
-        Assert.Equal(["post", "1", "post", "S235", "round 30 x 1.5 mm", "601.771", "600.000"], post[..7]);
+        Assert.Equal([GateFrame.PartOf(package, "post"), "1", "post", "S235", "round 30 x 1.5 mm", "601.771", "600.000"], post[..7]);
         Assert.Equal(["", "cope rail", "miter arm", "0.000", "contour cut"], post[9..]);
         string[] rail = lines[3].Split(',');
-        Assert.Equal(["rail", "1", "rail", "S235", "round 40 x 2 mm", "1000.000", "1000.000"], rail[..7]);
+        Assert.Equal([GateFrame.PartOf(package, "rail"), "1", "rail", "S235", "round 40 x 2 mm", "1000.000", "1000.000"], rail[..7]);
 
         // 7.85e-6 x pi x 2 x 38 x 1000 = 1.87427 kg
         Assert.Equal(["1.8743", "1.8743", "", "square", "square", "", ""], rail[7..]);
@@ -55,16 +57,19 @@ public class TableTests
     [Fact]
     public void Ends_have_a_row_a_mate_and_one_where_nothing_cuts()
     {
-        string[] lines = EndsCsv.Write(GateFrame.Package()).Split('\n');
+        ShopPackage package = GateFrame.Package();
+        (string post, string arm, string rail) =
+            (GateFrame.PartOf(package, "post"), GateFrame.PartOf(package, "arm"), GateFrame.PartOf(package, "rail"));
+        string[] lines = EndsCsv.Write(package).Split('\n');
         Assert.Equal(
             [
                 "tube,end,mark,cut,mate,angle_deg,offset_mm,clock_deg,saw_mm,gap_mm",
-                "rail,from,rail,square,,,,,,",
-                "rail,to,rail,square,,,,,,",
-                "post,from,post,cope,rail,90.000,0.000,0.000,40.000,0.000",
-                "post,to,post,miter,arm,90.000,0.000,0.000,,",
-                "arm,from,arm,miter,post,90.000,0.000,180.000,,",
-                "arm,to,arm,square,,,,,,",
+                $"rail,from,{rail},square,,,,,,",
+                $"rail,to,{rail},square,,,,,,",
+                $"post,from,{post},cope,rail,90.000,0.000,0.000,40.000,0.000",
+                $"post,to,{post},miter,arm,90.000,0.000,0.000,,",
+                $"arm,from,{arm},miter,post,90.000,0.000,180.000,,",
+                $"arm,to,{arm},square,,,,,,",
                 string.Empty,
             ],
             lines);

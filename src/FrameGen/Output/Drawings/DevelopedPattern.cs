@@ -102,7 +102,7 @@ internal static class DevelopedPattern
             words.Add(Cautions.NotMeetingTargets);
         }
 
-        words.Add($"{pattern.Part.Mark}: outside, {PartWords.Section(pattern)}, cut length {pattern.Display.Length(pattern.Part.Drawn.CutLength)}");
+        words.Add($"{pattern.Part.Name}: outside, {PartWords.Section(pattern)}, cut length {pattern.Display.Length(pattern.Part.Drawn.CutLength)}");
         words.Add(PartWords.Tubes(pattern));
         words.Add($"y counts along the axis from node {PartWords.NodeName(pattern, End.From)}; TOP faces {PartWords.TopFaces(pattern.Tube)} in the frame");
         words.Add(EndWords(pattern, pattern.From));

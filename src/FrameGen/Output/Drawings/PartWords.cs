@@ -11,6 +11,11 @@ namespace FrameGen.Output.Drawings;
 /// <summary>What papers say about a part and its ends.</summary>
 internal static class PartWords
 {
+    /// <summary>More names than this are not listed on a piece of paper, but the first of them and how many more.</summary>
+    private const int MostNames = 12;
+
+    private const int FirstNames = 8;
+
     /// <summary>True when the frame misses a target.</summary>
     public static bool IsUnmet(SizedFrame sized) => sized.Status == SizingStatus.Unmet;
 
@@ -26,10 +31,13 @@ internal static class PartWords
     /// <summary>The tubes that are this part, and how many.</summary>
     public static string Tubes(PartPattern pattern)
     {
-        string names = string.Join(", ", pattern.Part.Tubes.Select(t => pattern.Sized.Model.Tubes[t].Name));
-        return pattern.Part.Quantity == 1
+        int count = pattern.Part.Quantity;
+        int named = count <= MostNames ? count : FirstNames;
+        string names = string.Join(", ", pattern.Part.Tubes.Take(named).Select(t => pattern.Sized.Model.Tubes[t].Name));
+        string more = named < count ? string.Create(CultureInfo.InvariantCulture, $" and {count - named} more of the cut list") : string.Empty;
+        return count == 1
             ? $"Tube {names}"
-            : string.Create(CultureInfo.InvariantCulture, $"Tubes {names} (make {pattern.Part.Quantity}, drawn for the first)");
+            : string.Create(CultureInfo.InvariantCulture, $"Tubes {names}{more} (make {count}, drawn for the first)");
     }
 
     /// <summary>Section and material.</summary>

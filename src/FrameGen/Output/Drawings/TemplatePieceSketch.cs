@@ -134,7 +134,7 @@ internal sealed class TemplatePieceSketch
             words.Add(new(Cautions.NotMeetingTargets, 1.4));
         }
 
-        words.Add(new($"{_pattern.Part.Mark}  {PartWords.Name(_end.End)} END", 1.9));
+        words.Add(new($"{_pattern.Part.Name}  {PartWords.Name(_end.End)} END", 1.9));
         words.Add(new("THIS SIDE OUT", 1.4));
         words.Add(new(
             apart > 0 ? $"Datum to {otherDatum}: {Measure(apart)}" : $"Datum lies {Measure(-apart)} beyond {otherDatum}", main));

@@ -38,7 +38,7 @@ internal static class TemplatesPdf
         int count = pieces.Sum(p => p.Tiling.Count);
         foreach ((Part part, TemplatePiece piece, PageTiling tiling) in pieces)
         {
-            AddPages(pages, frame, $"{part.Mark}  {PartWords.Name(piece.End)} END", piece, tiling, count);
+            AddPages(pages, frame, $"{part.Name}  {PartWords.Name(piece.End)} END", piece, tiling, count);
         }
 
         return PdfWriter.Write(pages, title);

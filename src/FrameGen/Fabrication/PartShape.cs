@@ -1,0 +1,127 @@
+using System.Numerics;
+using FrameGen.Joints;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Model;
+
+namespace FrameGen.Fabrication;
+
+/// <summary>A cut tube as a loose piece: what can be compared of it whatever way it lies on the bench.</summary>
+internal sealed class PartShape
+{
+    /// <summary>Harmonics of an end curve that are kept, from 0.</summary>
+    public const int Harmonics = 13;
+
+    private const int Samples = 64;
+
+    private static readonly Complex[] Roots =
+        [.. Enumerable.Range(0, Samples).Select(i => Complex.FromPolarCoordinates(1, -2 * Math.PI * i / Samples))];
+
+    private readonly Complex[] _from;
+    private readonly Complex[] _to;
+
+    /// <summary>Measures a tube of a frame.</summary>
+    public PartShape(CutFrame cut, CutTube tube)
+    {
+        Tube own = cut.Sized.Model.Tubes[tube.Tube];
+        Cut = tube;
+        Section = cut.Sized.SectionOf(tube.Tube);
+        Length = own.Length;
+        (_from, _to) = (Spectrum(tube.From.Surface), Spectrum(tube.To.Surface));
+    }
+
+    /// <summary>The cut tube.</summary>
+    public CutTube Cut { get; }
+
+    /// <summary>Its section.</summary>
+    public Section Section { get; }
+
+    /// <summary>Of the axis between its own ends, mm.</summary>
+    public double Length { get; }
+
+    /// <summary>Of the outer skin, mm.</summary>
+    public double Outer => Section.OuterSize / 2;
+
+    /// <summary>Of the inner skin, mm; 0 for a rod.</summary>
+    public double Inner => Outer - Section.Wall;
+
+    /// <summary>Fourier coefficients of an end's outer curve over the clock angle, mm: t = Σ c(k) exp(ikθ).</summary>
+    public ReadOnlySpan<Complex> Spectrum(End end) => end == End.From ? _from : _to;
+
+    /// <summary>
+    /// Which hand it is: changes sign in a mirror, keeps it however the piece is turned or its ends are swapped. 0 where it is its own
+    /// mirror image, or can't be told from it by the first harmonics.
+    /// </summary>
+    public int Chirality
+    {
+        get
+        {
+            // Between the two ends, then of each end by itself; a mirror conjugates every coefficient.
+            for (int k = 1; k < Harmonics; k++)
+            {
+                if (SignOf(_from[k] * Complex.Conjugate(_to[k])) is var sign and not 0)
+                {
+                    return sign;
+                }
+            }
+
+            for (int k = 1; 2 * k < Harmonics; k++)
+            {
+                Complex from = _from[k] * _from[k] * Complex.Conjugate(_from[2 * k]);
+                Complex to = _to[k] * _to[k] * Complex.Conjugate(_to[2 * k]);
+                if (SignOf(from + Complex.Conjugate(to)) is var sign and not 0)
+                {
+                    return sign;
+                }
+            }
+
+            return 0;
+        }
+    }
+
+    /// <summary>
+    /// Whole numbers that tell the shape from others of its length: the same however it is turned, swapped or mirrored. Steps are far
+    /// wider than any tolerance, and do not begin at the round numbers at which real sizes lie.
+    /// </summary>
+    public IEnumerable<long> Fingerprint()
+    {
+        yield return Step(Cut.Volume / Section.Area, 1);
+        yield return Step(Math.Min(Cut.From.OuterLength, Cut.To.OuterLength), 1);
+        yield return Step(Math.Max(Cut.From.OuterLength, Cut.To.OuterLength), 1);
+        for (int k = 1; k <= 3; k++)
+        {
+            yield return Step((_from[k] * Complex.Conjugate(_to[k])).Real, 8);
+        }
+    }
+
+    private static long Step(double value, double step) => (long)Math.Floor((value / step) + 0.237);
+
+    private static int SignOf(Complex product)
+    {
+        // mm² and mm³: an end that is turned by a hundredth of a degree shows, rounding does not.
+        const double Visible = 1e-4;
+        return Math.Abs(product.Imaginary) <= Visible + (1e-6 * Complex.Abs(product)) ? 0 : Math.Sign(product.Imaginary);
+    }
+
+    private Complex[] Spectrum(EndSurface surface)
+    {
+        Span<double> samples = stackalloc double[Samples];
+        for (int i = 0; i < Samples; i++)
+        {
+            samples[i] = surface.At(2 * Math.PI * i / Samples, Outer);
+        }
+
+        var spectrum = new Complex[Harmonics];
+        for (int k = 0; k < Harmonics; k++)
+        {
+            Complex sum = Complex.Zero;
+            for (int i = 0; i < Samples; i++)
+            {
+                sum += samples[i] * Roots[i * k % Samples];
+            }
+
+            spectrum[k] = sum / Samples;
+        }
+
+        return spectrum;
+    }
+}
