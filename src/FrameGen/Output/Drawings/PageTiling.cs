@@ -44,13 +44,14 @@ internal sealed record PageTiling(double PageWidth, double PageHeight, int Colum
     public (double Left, double Bottom) Corner(int column, int row) =>
         (column * (Window.Width - Overlap), row * (Window.Height - Overlap));
 
+    /// <summary>The part of a page of that size that a piece may cover.</summary>
+    public static Box2 WindowOf(double width, double height) => new(Margin, Margin + Foot, width - Margin, height - Margin - Head);
+
     private static PageTiling On(double pageWidth, double pageHeight, double width, double height)
     {
         Box2 window = WindowOf(pageWidth, pageHeight);
         return new PageTiling(pageWidth, pageHeight, Tiles(width, window.Width), Tiles(height, window.Height));
     }
-
-    private static Box2 WindowOf(double width, double height) => new(Margin, Margin + Foot, width - Margin, height - Margin - Head);
 
     private static int Tiles(double size, double window) =>
         size <= window ? 1 : 1 + (int)Math.Ceiling((size - window) / (window - Overlap));

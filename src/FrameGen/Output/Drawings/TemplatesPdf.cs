@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text;
 using FrameGen.Fabrication;
 using FrameGen.Formats.Drawings;
@@ -7,21 +8,24 @@ using FrameGen.Model;
 
 namespace FrameGen.Output.Drawings;
 
-/// <summary>All wrapped pieces at 1:1 on pages, one piece a page, or spread over several where it is larger.</summary>
+/// <summary>All wrapped pieces at 1:1 on pages: small ones side by side, one that is larger than a page spread over several.</summary>
 internal static class TemplatesPdf
 {
-    /// <summary>Writes the pieces of all parts, in the order of the cut list; one page that says so where there is none.</summary>
+    /// <summary>Marks named above the pieces of one page, at most.</summary>
+    private const int MostNamed = 4;
+
+    /// <summary>Writes the pieces of all parts, near the order of the cut list; one page that says so where there is none.</summary>
     /// <param name="package">The frame's papers.</param>
     /// <returns>The file.</returns>
     public static byte[] Write(ShopPackage package)
     {
         FrameModel model = package.Cut.Sized.Model;
         (double Width, double Height) paper = PageFrame.Paper(model.Fabrication.Page);
-        List<(Part Part, TemplatePiece Piece, PageTiling Tiling)> pieces =
+        List<PaperPiece> pieces =
         [
             .. from part in package.Parts
                from piece in TemplatePieces.Of(package, part)
-               select (part, piece, PageTiling.For(piece.Bounds.Width, piece.Bounds.Height, paper)),
+               select new PaperPiece(part, piece, PageTiling.For(piece.Bounds.Width, piece.Bounds.Height, paper)),
         ];
 
         var frame = new PageFrame(package.Cut.Sized);
@@ -34,11 +38,23 @@ internal static class TemplatesPdf
             return PdfWriter.Write([new PdfPage(paper.Width, paper.Height, [new PdfView(PageFrame.ToDrawing(shapes), default, null)])], title);
         }
 
+        List<int> small = [.. Enumerable.Range(0, pieces.Count).Where(i => pieces[i].Tiling.Count == 1)];
+        IReadOnlyList<PackedSheet> sheets =
+            SheetPacking.Pack([.. small.Select(i => (pieces[i].Piece.Bounds.Width, pieces[i].Piece.Bounds.Height))], model.Fabrication.Page);
+        int count = sheets.Count + pieces.Sum(p => p.Tiling.Count > 1 ? p.Tiling.Count : 0);
         var pages = new List<PdfPage>();
-        int count = pieces.Sum(p => p.Tiling.Count);
-        foreach ((Part part, TemplatePiece piece, PageTiling tiling) in pieces)
+        int next = 0;
+        for (int i = 0; i < pieces.Count; i++)
         {
-            AddPages(pages, frame, $"{part.Name}  {PartWords.Name(piece.End)} END", piece, tiling, count);
+            if (pieces[i].Tiling.Count > 1)
+            {
+                AddPages(pages, frame, pieces[i], count);
+            }
+            else if (next < sheets.Count && small[sheets[next].Pieces[0].Piece] == i)
+            {
+                PackedSheet sheet = sheets[next++];
+                pages.Add(Page(frame, sheet, [.. sheet.Pieces.Select(p => pieces[small[p.Piece]])], pages.Count + 1, count));
+            }
         }
 
         return PdfWriter.Write(pages, title);
@@ -55,17 +71,47 @@ internal static class TemplatesPdf
         return drawing with { Shapes = [.. drawing.Shapes.Where(s => s is not Text || s.Bounds().Overlaps(seen))] };
     }
 
-    private static void AddPages(List<PdfPage> pages, PageFrame frame, string subject, TemplatePiece piece, PageTiling tiling, int count)
+    /// <summary>A page of pieces that lie side by side; one alone stands in the middle.</summary>
+    private static PdfPage Page(PageFrame frame, PackedSheet sheet, IReadOnlyList<PaperPiece> pieces, int number, int count)
     {
+        Box2 window = sheet.Window;
+        var views = new List<PdfView>(pieces.Count + 1);
+        for (int i = 0; i < pieces.Count; i++)
+        {
+            Box2 bounds = pieces[i].Piece.Bounds;
+            (double left, double down) = pieces.Count > 1
+                ? (sheet.Pieces[i].Left, sheet.Pieces[i].Down)
+                : ((window.Width - bounds.Width) / 2, (window.Height - bounds.Height) / 2);
+            views.Add(new PdfView(
+                pieces[i].Piece.Drawing, new Point2(window.Left + left - bounds.Left, window.Top - down - bounds.Top), Clip(window)));
+        }
+
+        string subject = string.Join(",  ", pieces.Take(MostNamed).Select(p => p.Name));
+        if (pieces.Count > MostNamed)
+        {
+            subject += string.Create(CultureInfo.InvariantCulture, $"  and {pieces.Count - MostNamed} more");
+        }
+
+        var tiling = new PageTiling(sheet.Width, sheet.Height, 1, 1);
+        views.Add(new PdfView(PageFrame.ToDrawing(frame.Draw(tiling, subject, number, count)), default, null));
+        return new PdfPage(sheet.Width, sheet.Height, views);
+    }
+
+    /// <summary>Half a heavy line's width more, so that a line on the window's edge keeps its width.</summary>
+    private static Box2 Clip(Box2 window) => new(window.Left - 0.3, window.Bottom - 0.3, window.Right + 0.3, window.Top + 0.3);
+
+    /// <summary>The pages of a piece that is larger than one.</summary>
+    private static void AddPages(List<PdfPage> pages, PageFrame frame, PaperPiece paper, int count)
+    {
+        (TemplatePiece piece, PageTiling tiling, string subject) = (paper.Piece, paper.Tiling, paper.Name);
         Box2 window = tiling.Window;
         Box2 bounds = piece.Bounds;
         int first = pages.Count + 1;
 
-        // Half a heavy line's width more, so that a line on the window's edge keeps its width.
-        var clip = new Box2(window.Left - 0.3, window.Bottom - 0.3, window.Right + 0.3, window.Top + 0.3);
+        Box2 clip = Clip(window);
 
-        // A piece that fits stands in the middle of its page; one that does not begins in the left corner that has its label, so that
-        // the label is not spread over two pages.
+        // It begins in the left corner that has its label, so that the label is not spread over two pages; where one row or column is
+        // enough it stands in its middle.
         double restX = tiling.Columns == 1 ? (window.Width - bounds.Width) / 2 : 0;
         double spareY = (tiling.Rows * window.Height) - ((tiling.Rows - 1) * PageTiling.Overlap) - bounds.Height;
         double restY = tiling.Rows == 1 ? spareY / 2 : piece.End == End.From ? spareY : 0;
@@ -77,7 +123,7 @@ internal static class TemplatesPdf
             {
                 (double left, double bottom) = tiling.Corner(column, row);
                 var origin = new Point2(window.Left + restX - left - bounds.Left, window.Bottom + restY - bottom - bounds.Bottom);
-                string where = tiling.Count == 1 ? subject : $"{subject}, sheet {pages.Count - first + 2} of {tiling.Count}";
+                string where = $"{subject}, sheet {pages.Count - first + 2} of {tiling.Count}";
                 List<Shape> around = frame.Draw(tiling, where, pages.Count + 1, count);
                 PageFrame.JoinMarks(around, tiling, column, row, first);
                 pages.Add(new PdfPage(
@@ -86,5 +132,11 @@ internal static class TemplatesPdf
                     [new PdfView(Seen(piece.Drawing, origin, clip), origin, clip), new PdfView(PageFrame.ToDrawing(around), default, null)]));
             }
         }
+    }
+
+    /// <summary>A piece, whose it is, and the pages it would take alone.</summary>
+    private sealed record PaperPiece(Part Part, TemplatePiece Piece, PageTiling Tiling)
+    {
+        public string Name => $"{Part.Name}  {PartWords.Name(Piece.End)} END";
     }
 }
