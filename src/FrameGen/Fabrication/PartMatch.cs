@@ -21,10 +21,7 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
 
     /// <summary>How the other piece is the drawn one; null where it is not.</summary>
     /// <param name="mirrored">True to ask for the drawn one's mirror image.</param>
-    public Placement? Find(bool mirrored)
-    {
-        return Find(mirrored, swapped: false) ?? Find(mirrored, swapped: true);
-    }
+    public Placement? Find(bool mirrored) => Find(mirrored, swapped: false) ?? Find(mirrored, swapped: true);
 
     private Placement? Find(bool mirrored, bool swapped)
     {
@@ -213,8 +210,8 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
         foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
         {
             (EndCut a, EndCut b) = (drawn.Cut[Source(end, swapped)], other.Cut[end]);
-            if (!OnSkin(a.Surface, b.Outer, drawn.Outer, turn, negated)
-                || !OnSkin(b.Surface, a.Outer, drawn.Outer, negated ? turn : -turn, negated))
+            if (!OnSkin(a.Surface, b.Outer, 0, turn, negated)
+                || !OnSkin(b.Surface, a.Outer, 0, negated ? turn : -turn, negated))
             {
                 return false;
             }
@@ -222,7 +219,7 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
             // A radial cut is the same through the wall; a rod's axis belongs to every clock angle.
             bool isRadial = a.Surface is CutSurface { IsRadial: true } && b.Surface is CutSurface { IsRadial: true };
             if (!isRadial
-                && ((drawn.Inner > 0 && !OnSkin(a.Surface, b.Inner, drawn.Inner, turn, negated)) || !InWall(a, b, turn, negated)))
+                && ((!drawn.Section.Bore.IsPoint && !OnSkin(a.Surface, b.Inner, 1, turn, negated)) || !InWall(a, b, turn, negated)))
             {
                 return false;
             }
@@ -232,11 +229,11 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
     }
 
     /// <summary>Whether a line lies on a cut within the tolerance, where the line's clock angle is the cut's (or its negative) + turn.</summary>
-    private bool OnSkin(EndSurface cut, EndCurve line, double radius, double turn, bool negated)
+    private bool OnSkin(EndSurface cut, EndCurve line, double depth, double turn, bool negated)
     {
         foreach (CurvePoint point in line.Points)
         {
-            if (!Near(cut, negated ? turn - point.Clock : point.Clock - turn, radius, point.T))
+            if (!Near(cut, negated ? turn - point.Clock : point.Clock - turn, depth, point.T))
             {
                 return false;
             }
@@ -248,11 +245,10 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
     private bool InWall(EndCut a, EndCut b, double turn, bool negated)
     {
         const int Looks = 48;
-        double middle = (drawn.Inner + drawn.Outer) / 2;
         for (int i = 0; i < Looks; i++)
         {
             double clock = 2 * Math.PI * i / Looks;
-            if (!Near(a.Surface, negated ? turn - clock : clock - turn, middle, b.Surface.At(clock, middle)))
+            if (!Near(a.Surface, negated ? turn - clock : clock - turn, 0.5, b.Surface.At(clock, other.Radius(clock, 0.5))))
             {
                 return false;
             }
@@ -262,18 +258,20 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
     }
 
     /// <summary>True where a cut passes a place within the tolerance; beside it too, where the cut is steep or steps.</summary>
-    private bool Near(EndSurface cut, double clock, double radius, double t)
+    private bool Near(EndSurface cut, double clock, double depth, double t)
     {
-        double here = cut.At(clock, radius);
+        double here = At(cut, clock, depth);
         if (Math.Abs(here - t) <= tolerance)
         {
             return true;
         }
 
-        double aside = tolerance / drawn.Outer;
-        (double left, double right) = (cut.At(clock - aside, radius), cut.At(clock + aside, radius));
+        double aside = 2 * tolerance / drawn.Section.OuterSize;
+        (double left, double right) = (At(cut, clock - aside, depth), At(cut, clock + aside, depth));
         return t >= Math.Min(here, Math.Min(left, right)) - tolerance && t <= Math.Max(here, Math.Max(left, right)) + tolerance;
     }
+
+    private double At(EndSurface cut, double clock, double depth) => cut.At(clock, drawn.Radius(clock, depth));
 
     private static End Source(End end, bool swapped) => swapped == (end == End.From) ? End.To : End.From;
 }

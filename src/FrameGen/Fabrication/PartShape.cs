@@ -38,11 +38,15 @@ internal sealed class PartShape
     /// <summary>Of the axis between its own ends, mm.</summary>
     public double Length { get; }
 
-    /// <summary>Of the outer skin, mm.</summary>
-    public double Outer => Section.OuterSize / 2;
-
-    /// <summary>Of the inner skin, mm; 0 for a rod.</summary>
-    public double Inner => Outer - Section.Wall;
+    /// <summary>Distance from the axis of a place in the wall, mm.</summary>
+    /// <param name="clock">Its clock angle, rad.</param>
+    /// <param name="depth">0 on the outer skin, 1 on the inner one.</param>
+    public double Radius(double clock, double depth)
+    {
+        (double sin, double cos) = Math.SinCos(clock);
+        double outer = Section.Outline.RadiusAt(sin, cos);
+        return depth <= 0 || Section.Bore.IsPoint ? (1 - depth) * outer : outer - (depth * (outer - Section.Bore.RadiusAt(sin, cos)));
+    }
 
     /// <summary>Fourier coefficients of an end's outer curve over the clock angle, mm: t = Σ c(k) exp(ikθ).</summary>
     public ReadOnlySpan<Complex> Spectrum(End end) => end == End.From ? _from : _to;
@@ -107,7 +111,8 @@ internal sealed class PartShape
         Span<double> samples = stackalloc double[Samples];
         for (int i = 0; i < Samples; i++)
         {
-            samples[i] = surface.At(2 * Math.PI * i / Samples, Outer);
+            double clock = 2 * Math.PI * i / Samples;
+            samples[i] = surface.At(clock, Radius(clock, 0));
         }
 
         var spectrum = new Complex[Harmonics];
