@@ -102,7 +102,7 @@ internal sealed class SheetPacking
             for (int i = 0; i < _steps.Count; i++)
             {
                 double left = _steps[i].Left;
-                double down = DownAt(i, left + width);
+                double down = DownAt(i, left + width + Apart);
                 if (left + width <= _window.Width && down + height <= _window.Height && (best is null || down < best.Value.Down))
                 {
                     best = (left, down);
