@@ -100,7 +100,7 @@ public sealed record StockBarCut(string Label, int Count, bool Rack, string Leng
                 display.MeasuredNumber(lot.BarLength),
                 [
                     .. bar.Cuts.Select(c => new StockPieceCut(
-                        c.Part.Mark,
+                        c.Part.Name,
                         display.MeasuredNumber(c.To - c.From),
                         display.MeasuredNumber(c.From),
                         display.MeasuredNumber(c.To))),
@@ -111,7 +111,7 @@ public sealed record StockBarCut(string Label, int Count, bool Rack, string Leng
     }
 
     private static bool IsCutAlike(StockBar a, StockBar b) =>
-        a.Cuts.Select(c => c.Part.Mark).SequenceEqual(b.Cuts.Select(c => c.Part.Mark), StringComparer.Ordinal);
+        a.Cuts.Select(c => c.Part.Name).SequenceEqual(b.Cuts.Select(c => c.Part.Name), StringComparer.Ordinal);
 }
 
 /// <summary>One piece of a bar.</summary>

@@ -37,7 +37,7 @@ public class PartSorterTests
         Between(near[5], far[5]);
         Brace(500 - lean);
         Brace(500 + lean);
-        return ShopPlanner.Plan(frame.Cut());
+        return GateFrame.Planned(frame.Cut());
 
         int[] Nodes(double y, int through) =>
             [.. new double[] { 0, 200, 500 - lean, 500, 500 + lean, 800, 1000 }.Select(
@@ -123,7 +123,7 @@ public class PartSorterTests
             Groups = [one],
             Tubes = [.. cut.Sized.Model.Tubes.Select(t => t with { Group = 0 })],
         };
-        ShopPackage package = ShopPlanner.Plan(cut with { Sized = cut.Sized with { Model = model, Chosen = [cut.Sized.Chosen[0]] } });
+        ShopPackage package = GateFrame.Planned(cut with { Sized = cut.Sized with { Model = model, Chosen = [cut.Sized.Chosen[0]] } });
         Assert.Equal(40, package.Parts.Count);
         Assert.Equal(40, package.Parts.Select(p => p.Name).Distinct(StringComparer.OrdinalIgnoreCase).Count());
     }
