@@ -67,19 +67,11 @@ public static class ShopPlanner
             mass += tube.MassKg;
             moment += tube.MassKg * tube.Centroid;
             area += tube.OuterArea;
-            weld += WeldLength(tube.Tube, tube.From) + WeldLength(tube.Tube, tube.To);
+            weld += WeldPlanner.LengthOf(tube.Tube, tube.From) + WeldPlanner.LengthOf(tube.Tube, tube.To);
         }
 
         return new Totals(mass, mass > 0 ? moment / mass : Vector3.Zero, weld, area);
     }
-
-    /// <summary>The outer curve of a coped or mitred end; a miter is counted at the first of its two tubes only.</summary>
-    private static double WeldLength(int tube, EndCut end) => end.Kind switch
-    {
-        CutKind.Cope => end.OuterLength,
-        CutKind.Miter when end.Contacts.All(c => c.Tube > tube) => end.OuterLength,
-        _ => 0,
-    };
 
     private static string Note(SizedFrame sized, CutTube tube)
     {

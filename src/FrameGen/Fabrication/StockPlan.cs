@@ -18,13 +18,13 @@ public sealed record StockPlan(IReadOnlyList<StockLot> Lots)
 
 /// <summary>Bars of one section, material and length that come from one place.</summary>
 /// <param name="Material">Name.</param>
-/// <param name="Section">Section.</param>
+/// <param name="Section">As it is named and bought.</param>
 /// <param name="BarLength">Of each, mm.</param>
 /// <param name="IsRack">True where they are on the rack already.</param>
 /// <param name="Bars">How each is cut.</param>
 /// <param name="LowerBound">No plan buys fewer; 0 on the rack.</param>
 /// <param name="PricePerMetre">In the shop's own money; null where unknown.</param>
-/// <param name="MassKgPerMm">Of the section.</param>
+/// <param name="MassKgPerMm">Of the tube; of the one in hand where it was measured.</param>
 public sealed record StockLot(
     string Material,
     Section Section,

@@ -47,6 +47,8 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
 
     private Material MaterialOf(Part part) => _model.Groups[_model.Tubes[part.Drawn.Tube].Group].Material;
 
+    private Candidate ChosenFor(Part part) => sized.ChosenFor(part.Drawn.Tube);
+
     private bool IsOf(RackTube rack, Part part) =>
         string.Equals(rack.Section.Name, sized.ChosenFor(part.Drawn.Tube).Nominal.Name, StringComparison.Ordinal)
         && string.Equals(rack.Material, MaterialOf(part).Name, StringComparison.Ordinal);
@@ -57,7 +59,7 @@ internal sealed class StockPlanner(SizedFrame sized, DiagnosticList diagnostics)
         Candidate? best = null;
         foreach (Part part in same)
         {
-            Candidate candidate = sized.Chosen[_model.Tubes[part.Drawn.Tube].Group];
+            Candidate candidate = ChosenFor(part);
             best = best is null || StockTable.IsCheaper(candidate.PricePerMetre, best.PricePerMetre) ? candidate : best;
         }
 

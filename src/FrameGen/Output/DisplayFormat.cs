@@ -48,6 +48,16 @@ public sealed class DisplayFormat(DisplaySpec display)
     /// <param name="mm">Length, mm.</param>
     public string Length(double mm) => $"{LengthNumber(mm)} {LengthUnitName}";
 
+    /// <summary>An area with its unit: <c>0.87 m2</c>, <c>9.3 ft2</c> where papers are in inches.</summary>
+    /// <param name="squareMillimetres">Area, mm².</param>
+    public string Area(double squareMillimetres)
+    {
+        UnitsNet.Area area = UnitsNet.Area.FromSquareMillimeters(squareMillimetres);
+        return display.Length == LengthUnit.Inch
+            ? $"{FixedDigits.Print(area.SquareFeet, "0.0")} ft2"
+            : $"{FixedDigits.Print(area.SquareMeters, "0.00")} m2";
+    }
+
     /// <summary>A mass with its unit: <c>1.204 kg</c>, <c>2.654 lb</c>.</summary>
     /// <param name="kg">Mass, kg.</param>
     public string Mass(double kg) => $"{MassNumber(kg)} {MassUnitName}";
@@ -77,6 +87,15 @@ public sealed class DisplayFormat(DisplaySpec display)
     /// <param name="kg">Mass, kg.</param>
     public string MassNumber(double kg) =>
         FixedDigits.Print(display.Mass == MassUnit.Kilogram ? kg : UnitsNet.Mass.FromKilograms(kg).Pounds, "0.000");
+
+    /// <summary>Unit of <see cref="SmallMassNumber"/>: g or oz.</summary>
+    public string SmallMassUnitName => display.Mass == MassUnit.Kilogram ? "g" : "oz";
+
+    /// <summary>A mass of grams in <see cref="SmallMassUnitName"/>, for a column whose head names the unit.</summary>
+    /// <param name="kg">Mass, kg.</param>
+    public string SmallMassNumber(double kg) => display.Mass == MassUnit.Kilogram
+        ? FixedDigits.Print(UnitsNet.Mass.FromKilograms(kg).Grams, "0.0")
+        : FixedDigits.Print(UnitsNet.Mass.FromKilograms(kg).Ounces, "0.00");
 
     /// <summary>Mass per length in <see cref="MassPerLengthUnitName"/>.</summary>
     /// <param name="kgPerMetre">kg/m.</param>

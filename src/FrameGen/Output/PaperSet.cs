@@ -10,6 +10,7 @@ public static class PaperSet
     public static IReadOnlyList<OutputFile> Create(ShopPackage package)
     {
         var (copies, includes) = SpecCopies.Make(package.Cut.Sized.Model.Spec);
+        WeldList welds = WeldPlanner.Plan(package.Cut);
         var files = new List<OutputFile>
         {
             OutputFile.FromText("cut-list.csv", CutListCsv.Write(package)),
@@ -18,12 +19,16 @@ public static class PaperSet
             OutputFile.FromText("stock-plan.csv", StockPlanCsv.Write(package)),
             OutputFile.FromText("stock-plan.md", TextTemplate.Render("stock-plan.md", StockPlanModel.From(package))),
             OutputFile.FromText("setup.csv", SetupCsv.Write(package)),
+            OutputFile.FromText("setup.md", TextTemplate.Render("setup.md", SetupModel.From(package))),
+            OutputFile.FromText("welds.csv", WeldsCsv.Write(package.Cut, welds)),
+            OutputFile.FromText("welds.md", TextTemplate.Render("welds.md", WeldsModel.From(package, welds))),
             new("frame.json", FrameJson.Write(package)),
         };
         files.AddRange(ShapeFiles.Create(package));
         files.AddRange(copies);
         SelfCheck.Totals(package);
         SelfCheck.Stock(package);
+        SelfCheck.Welds(package, welds);
         SelfCheck.Equilibrium(package.Cut.Sized);
         files.Add(new OutputFile(Manifest.FileName, Manifest.Of(package.Cut.Sized.Model.Spec, includes, files).Write()));
         return files;

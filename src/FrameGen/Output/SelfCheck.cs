@@ -59,6 +59,13 @@ internal static class SelfCheck
         }
     }
 
+    /// <summary>The seams of the weld list are as long as the frame's weld length.</summary>
+    public static void Welds(ShopPackage package, WeldList welds)
+    {
+        double frame = package.Totals.WeldLength;
+        Require(Math.Abs(welds.Length - frame) <= 1e-6 * frame, $"the weld list is {welds.Length} mm long and the frame's seams {frame} mm");
+    }
+
     /// <summary>Reactions and loads of every case: the same within 1e-9.</summary>
     public static void Equilibrium(SizedFrame sized)
     {

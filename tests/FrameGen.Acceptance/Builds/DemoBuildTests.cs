@@ -28,7 +28,7 @@ public class DemoBuildTests
         using BuiltFrame built = Build(name);
         string[] expected =
         [
-            "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "templates.pdf", "preview/frame.stl", "frame.json", $"spec/{name}.yaml", "manifest.json",
+            "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "setup.md", "welds.csv", "welds.md", "templates.pdf", "preview/frame.stl", "frame.json", $"spec/{name}.yaml", "manifest.json",
         ];
         Assert.All(expected, file => Assert.True(File.Exists(built.PathOf(file)), file));
         foreach (string mark in built.Csv("cut-list.csv").Select(row => row["hand"].Length == 0 ? row["mark"] : $"{row["mark"]}-{row["hand"]}"))

@@ -154,8 +154,6 @@ public class StockPlannerTests
             {{{more}}}
 
             """;
-        byte[] bytes = Encoding.UTF8.GetBytes(text);
-        var pipeline = new FramePipeline(diagnostics);
-        return pipeline.Plan(pipeline.Cope(pipeline.Size(pipeline.Resolve(pipeline.Read("fence.yaml", path => path is "fence.yaml" ? bytes : null)))));
+        return PlannedText.Run(text, diagnostics, "fence.yaml");
     }
 }

@@ -19,7 +19,8 @@ public class PaperSetTests
             (GateFrame.PartOf(package, "post"), GateFrame.PartOf(package, "arm"), GateFrame.PartOf(package, "rail"));
         string[] expected =
         [
-            "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "frame.json", "manifest.json", "templates.pdf",
+            "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "setup.md",
+            "welds.csv", "welds.md", "frame.json", "manifest.json", "templates.pdf",
             $"developed/{post}.dxf", $"developed/{arm}.dxf", $"developed/{rail}.dxf", $"templates/{post}.dxf", $"templates/{arm}.dxf",
             "spec/gate.yaml", "spec/gate-2.yaml", "preview/frame.stl", $"preview/{post}.stl", $"preview/{arm}.stl", $"preview/{rail}.stl",
         ];
