@@ -29,6 +29,17 @@ internal readonly ref struct ElementFields
         _phiZ = Phi(s[3], s[5]);
     }
 
+    /// <summary>Fields of one element with six stiffnesses.</summary>
+    /// <param name="element">The element.</param>
+    /// <param name="length">L, mm.</param>
+    /// <param name="stiffness">Six values, in the order of its modes.</param>
+    public ElementFields(BeamElement element, double length, ReadOnlySpan<double> stiffness)
+    {
+        (_element, _length) = (element, length);
+        _phiY = Phi(stiffness[2], stiffness[4]);
+        _phiZ = Phi(stiffness[3], stiffness[5]);
+    }
+
     /// <summary>Displacement along local x at ξ = x/L.</summary>
     public void Along(double xi, Span<double> field) => Linear(_element.Axes.X, xi, asRotation: false, field);
 

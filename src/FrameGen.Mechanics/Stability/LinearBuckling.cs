@@ -48,6 +48,24 @@ public static class LinearBuckling
             : null;
     }
 
+    /// <summary>∫ (1 − ξ)(v'² + w'²) dx and ∫ ξ (v'² + w'²) dx along one element, the shape given at its nodes.</summary>
+    internal static (double Start, double End) SlopesOf(ElementFields fields, double length, ReadOnlySpan<double> nodes)
+    {
+        Span<double> field = stackalloc double[ElementModes.Freedoms];
+        (double start, double end) = (0, 0);
+        for (int i = 0; i < Points.Length; i++)
+        {
+            fields.SlopeY(Points[i], field);
+            double squares = NaturalFrequencies.Square(field, nodes);
+            fields.SlopeZ(Points[i], field);
+            squares += NaturalFrequencies.Square(field, nodes);
+            start += Weights[i] * length * (1 - Points[i]) * squares;
+            end += Weights[i] * length * Points[i] * squares;
+        }
+
+        return (start, end);
+    }
+
     /// <summary>−Kg: what a compression takes from the stiffness.</summary>
     private static SymmetricBlocks Softening(FactoredFrame frame, IReadOnlyList<AxialForce> forces, double noise)
     {

@@ -92,6 +92,44 @@ public static class NaturalFrequencies
         }
     }
 
+    /// <summary>φᵀMφ of one element, φ given at its nodes.</summary>
+    internal static double EnergyOf(ElementFields fields, BeamInertia inertia, double length, ReadOnlySpan<double> nodes)
+    {
+        Span<double> field = stackalloc double[ElementModes.Freedoms];
+        double energy = 0;
+        for (int i = 0; i < Points.Length; i++)
+        {
+            double x = Points[i];
+            double weight = Weights[i] * length;
+            fields.Along(x, field);
+            double squares = Square(field, nodes);
+            fields.AcrossY(x, field);
+            squares += Square(field, nodes);
+            fields.AcrossZ(x, field);
+            squares += Square(field, nodes);
+            fields.Twist(x, field);
+            energy += weight * ((inertia.MassPerLength * squares) + (inertia.Polar * Square(field, nodes)));
+            fields.TurnY(x, field);
+            energy += weight * inertia.RotaryY * Square(field, nodes);
+            fields.TurnZ(x, field);
+            energy += weight * inertia.RotaryZ * Square(field, nodes);
+        }
+
+        return energy;
+    }
+
+    /// <summary>The square of what a field gives at its place.</summary>
+    internal static double Square(ReadOnlySpan<double> field, ReadOnlySpan<double> nodes)
+    {
+        double sum = 0;
+        for (int i = 0; i < field.Length; i++)
+        {
+            sum += field[i] * nodes[i];
+        }
+
+        return sum * sum;
+    }
+
     // Abramowitz and Stegun, table 25.4, moved to [0, 1].
     private static double[] FourPoints()
     {

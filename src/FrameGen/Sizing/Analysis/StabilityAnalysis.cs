@@ -105,21 +105,34 @@ internal sealed class StabilityAnalysis
         return _factored[solver]!;
     }
 
-    private FrameMass Mass()
+    /// <summary>What is carried along each tube, kg/mm.</summary>
+    public double[] CarriedPerLength()
+    {
+        FrameModel model = _analysis.Space.Model;
+        var carried = new double[model.Tubes.Count];
+        foreach (CarriedMass mass in model.Masses)
+        {
+            if (mass.Tube is { } tube)
+            {
+                carried[tube] += mass.Kg / model.Tubes[tube].Length;
+            }
+        }
+
+        return carried;
+    }
+
+    /// <summary>All the mass of the design.</summary>
+    public FrameMass Mass()
     {
         StructuralModel structure = _analysis.Structure!;
         FrameModel model = structure.Model;
-        var carried = new double[model.Tubes.Count];
+        double[] carried = CarriedPerLength();
         var points = new List<PointMass>();
         foreach (CarriedMass mass in model.Masses)
         {
             if (mass.Node is { } node)
             {
                 points.Add(new PointMass(structure.Topology.JointOfNode[node], mass.Kg));
-            }
-            else if (mass.Tube is { } tube)
-            {
-                carried[tube] += mass.Kg / model.Tubes[tube].Length;
             }
         }
 

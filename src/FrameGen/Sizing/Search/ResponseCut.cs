@@ -43,10 +43,9 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
             return null;
         }
 
-        double kappa = fields.Kappa;
-        double stretch = (kappa - 1) / kappa;
-        double constant = (response.Own is null ? fields.Value / kappa : 0) + (weights.Given(load, adjoint) / kappa)
-            - (fields.Springs / (kappa * kappa)) - (0.25 * (1 + fields.Theta) * stretch * stretch * fields.SpringsOfW);
+        (double kappa, double scaleZ) = (fields.Kappa, fields.ScaleZ);
+        double constant = (response.Own is null ? fields.Value / kappa : 0) + (weights.Given(load, adjoint) * scaleZ) - (fields.Springs * scaleZ / kappa)
+            - (0.25 * (1 + fields.Theta) * (kappa - 1) * (kappa - 1) * fields.SpringsOfW);
         double[] own = weights.Own(load, adjoint);
         var options = new double[OptionCount()];
         double size = Math.Abs(constant) + response.Limit;
@@ -57,8 +56,8 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
             double softest = load.IsCase ? weights.SoftestEnergy(load.Index)[g] : 0;
             for (int c = 0; c < space[g].Length; c++)
             {
-                (double straight, double bent) = Terms(design, response.Own, g, c, fields);
-                straight += space[g][c].MassPerLength * own[g] / kappa;
+                (double straight, double bent) = Terms(design, response, g, c, fields);
+                straight += space[g][c].MassPerLength * own[g] * scaleZ;
                 bent *= 1 + fields.Theta;
                 if (fields.Theta > 0)
                 {
@@ -99,20 +98,27 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
 
         double onActual = Work(response.Functional, actual);
         double onAdjoint = Work(response.Functional, adjoint);
-        double value = onActual + (response.Own is { } at ? at.Constants[at.At] : 0);
+        double value = onActual;
+        for (int g = 0; g < space.Groups && response.Own is not null; g++)
+        {
+            value += response.Own.Constant(g, design.Choice[g]);
+        }
+
+        double kappa = response.Scale ?? (value / response.Limit);
+        double scaleZ = response.GrowsWithStiffness ? 1 : 1 / kappa;
 
         // What springs resist with is the rest of the energy: the same in every design.
         (double zu, double zz, double uu) = Energies(design, z, u);
-        double sigma = Math.Sqrt(Math.Sqrt(onAdjoint / work));
+        double sigma = Math.Sqrt(scaleZ * kappa * Math.Sqrt(onAdjoint / work));
         double springs = onActual - zu;
-        double springsOfW = Math.Max(0, ((onAdjoint - zz) / (sigma * sigma)) - (2 * springs) + (sigma * sigma * (work - uu)));
-        return new Fields(u, z, sigma, value / response.Limit, Theta(design, response.Load, sigma, u, z))
+        double springsOfW = (scaleZ * scaleZ * (onAdjoint - zz) / (sigma * sigma)) - (2 * scaleZ * springs / kappa) + (sigma * sigma * (work - uu) / (kappa * kappa));
+        return new Fields(u, z, sigma, kappa, scaleZ, Theta(design, response, sigma, kappa, scaleZ, u, z))
         {
             Value = onActual,
             AdjointEnergy = onAdjoint,
             Work = work,
             Springs = springs,
-            SpringsOfW = springsOfW,
+            SpringsOfW = Math.Max(0, springsOfW),
         };
     }
 
@@ -162,47 +168,44 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
     }
 
     // What an option of a group adds: the straight terms, and the square that is taken off.
-    private (double Straight, double Bent) Terms(
-        DesignAnalysis design, SectionResponse? own, int group, int option, in Fields fields)
+    private (double Straight, double Bent) Terms(DesignAnalysis design, Response response, int group, int option, in Fields fields)
     {
         ReadOnlySpan<int> elements = table.Elements(group);
         ReadOnlySpan<double> s = table.Of(group, option);
         ReadOnlySpan<double> s0 = table.Of(group, design.Choice[group]);
-        (double straight, double bent) = (0, 0);
+        ReadOnlySpan<double> k = response.Own is { } own ? own.Factors(group, option) : [];
+        ReadOnlySpan<double> k0 = response.Own is { } there ? there.Factors(group, design.Choice[group]) : [];
+        (double straight, double bent) = (response.Own?.Constant(group, option) ?? 0, 0);
         (double kappa, double sigma) = (fields.Kappa, fields.Sigma);
         double perKappa = 1 / kappa;
-        for (int i = 0; i < elements.Length; i++)
+        double scaleK = fields.ScaleZ * kappa;
+        for (int i = 0; i < s.Length; i++)
         {
-            int first = Modes * elements[i];
-            bool isOwn = own is not null && elements[i] == own.Element;
-            for (int m = 0; m < Modes; m++)
+            int at = (Modes * elements[i / Modes]) + (i % Modes);
+            double z = fields.Z[at] * fields.ScaleZ;
+            double u = fields.U[at] * perKappa;
+            double y = ((kappa * s0[i]) - s[i]) * ((z / sigma) - (sigma * u));
+            straight -= s[i] * z * u;
+            if (k.Length > 0)
             {
-                double stiffness = s[(Modes * i) + m];
-                double zm = fields.Z[first + m] * perKappa;
-                double um = fields.U[first + m] * perKappa;
-                double y = ((kappa * s0[(Modes * i) + m]) - stiffness) * ((zm / sigma) - (sigma * um));
-                straight -= stiffness * zm * um;
-                if (isOwn)
-                {
-                    double k = own!.Factors[(Modes * option) + m];
-                    straight += k * um;
-                    y += (k - own.Factors[(Modes * own.At) + m]) / sigma;
-                }
+                straight += k[i] * u;
+                y += (k[i] - (scaleK * k0[i])) / sigma;
+            }
 
-                if (y != 0)
-                {
-                    bent += y * y / stiffness;
-                }
+            if (y != 0)
+            {
+                bent += y * y / s[i];
             }
         }
 
-        return (straight + (own is not null && own.Group == group ? own.Constants[option] : 0), bent);
+        return (straight, bent);
     }
 
     // A share that balances the two squares where sizes change by some tenth.
-    private double Theta(DesignAnalysis design, LoadSet load, double sigma, double[] u, double[] z)
+    private double Theta(DesignAnalysis design, Response response, double sigma, double kappa, double scaleZ, double[] u, double[] z)
     {
         const double Change = 0.1;
+        LoadSet load = response.Load;
         if (!load.IsCase)
         {
             return 0;
@@ -221,8 +224,8 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
                 for (int m = 0; m < Modes; m++)
                 {
                     int k = (Modes * elements[i]) + m;
-                    double w = (z[k] / sigma) - (sigma * u[k]);
-                    bent += Change * Change * s[(Modes * i) + m] * w * w;
+                    double w = (scaleZ * z[k] / sigma) - (sigma * u[k] / kappa);
+                    bent += Change * Change * kappa * s[(Modes * i) + m] * w * w;
                 }
             }
         }
@@ -230,8 +233,8 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
         return weight > 0 ? Math.Clamp(Math.Sqrt(weight / Math.Max(bent, 1e-30)), 1e-6, 1e6) : 0;
     }
 
-    /// <summary>Strains of u and z in the design, σ, κ and θ, and energies.</summary>
-    private readonly record struct Fields(double[] U, double[] Z, double Sigma, double Kappa, double Theta)
+    /// <summary>Strains of u and z in the design, σ, κ, what z is scaled by when stiffnesses are by κ, θ, and energies.</summary>
+    private readonly record struct Fields(double[] U, double[] Z, double Sigma, double Kappa, double ScaleZ, double Theta)
     {
         /// <summary>aᵀu.</summary>
         public double Value { get; init; }
@@ -245,7 +248,7 @@ internal sealed class ResponseCut(DesignSpace space, StructuralModel structure, 
         /// <summary>What springs have of zᵀK u.</summary>
         public double Springs { get; init; }
 
-        /// <summary>What springs have of wᵀK w.</summary>
+        /// <summary>What springs have of wᵀK w, w scaled.</summary>
         public double SpringsOfW { get; init; }
     }
 }

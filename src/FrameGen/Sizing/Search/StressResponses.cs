@@ -81,31 +81,28 @@ internal sealed class StressResponses(DesignSpace space, StructuralModel structu
 
         SectionForces forces = solution.Forces(element).At(x);
         var point = StressPoint.Worst(section, in forces);
-        var factors = new double[Modes * space[group].Length];
-        var constants = new double[space[group].Length];
+        var own = new SectionFactors(space, table);
+        int place = table.Elements(group).IndexOf(element);
         double half = (table.Strains.Length(element) / 2) - x;
         (Vector3 given, Vector3 perKg) = LoadAlong(loadCase, element);
         TubeAxes axes = structure.Topology.Frame.Elements[element].Axes;
-        for (int c = 0; c < constants.Length; c++)
+        for (int c = 0; c < space[group].Length; c++)
         {
             // N = q0 + h px, Vy = h py − q4, Vz = h pz − q5, T = q1, My = q3 + h q5 + m pz, Mz = q2 − h q4 − m py with q = s gᵀu, h = L/2 − x.
             SectionForces f = point.Factors(space[group][c].Section);
             ReadOnlySpan<double> s = table.Of(group, c, element);
-            Span<double> k = factors.AsSpan(Modes * c, Modes);
+            Span<double> k = own.FactorsToFill(group, c).Slice(Modes * place, Modes);
             (k[0], k[1], k[2], k[3]) = (s[0] * f.N, s[1] * f.T, s[2] * f.Mz, s[3] * f.My);
             (k[4], k[5]) = (s[4] * (-f.Vy - (half * f.Mz)), s[5] * ((half * f.My) - f.Vz));
             Vector3 load = given + (space[group][c].MassPerLength * perKg);
             double length = table.Strains.Length(element);
             double m = (-length * length / 12) + (x * length / 2) - (x * x / 2);
-            constants[c] = (half * f.N * load.Dot(axes.X)) + (((half * f.Vy) - (m * f.Mz)) * load.Dot(axes.Y)) + (((half * f.Vz) + (m * f.My)) * load.Dot(axes.Z));
+            double straight = half * f.N * load.Dot(axes.X);
+            double acrossY = ((half * f.Vy) - (m * f.Mz)) * load.Dot(axes.Y);
+            own.AddConstant(group, c, straight + acrossY + (((half * f.Vz) + (m * f.My)) * load.Dot(axes.Z)));
         }
 
-        int at = design.Choice[group];
-        (NodalLoad start, NodalLoad end) = table.Strains.Load(element, factors.AsSpan(Modes * at, Modes));
-        return new Response(LoadSet.Case(loadCase), Allowed(tube, use.At) / target.SafetyFactor, [start, end])
-        {
-            Own = new SectionResponse(element, group, factors, constants, at),
-        };
+        return new Response(LoadSet.Case(loadCase), Allowed(tube, use.At) / target.SafetyFactor, own.Functional(design.Choice)) { Own = own };
     }
 
     private (Vector3 Given, Vector3 PerKg) LoadAlong(int loadCase, int element)

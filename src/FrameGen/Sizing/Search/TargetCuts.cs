@@ -13,6 +13,7 @@ internal sealed class TargetCuts
     private readonly StructuralModel _structure;
     private readonly ResponseCut _cut;
     private readonly StressResponses _stresses;
+    private readonly ModeCuts _modes;
 
     public TargetCuts(DesignSpace space, StructuralModel structure, WeldPairs welds)
     {
@@ -20,6 +21,7 @@ internal sealed class TargetCuts
         var table = new StiffnessTable(space, structure);
         _cut = new ResponseCut(space, structure, table, new Weights(space, structure));
         _stresses = new StressResponses(space, structure, table, welds);
+        _modes = new ModeCuts(space, structure, table);
     }
 
     /// <summary>The rows of one target.</summary>
@@ -34,8 +36,14 @@ internal sealed class TargetCuts
             RotationTarget t => [Movement(design, t.Case, t.From, t.To, t.About, t.Max, turning: true)],
             StiffnessTarget t => [Compliance(t)],
             StrengthTarget t => _stresses.Of(design, t, above),
+            BucklingTarget t => _modes.Buckling(design, t, above),
             _ => [],
         };
+        if (check.Target is FrequencyTarget frequency && _modes.Frequency(design, frequency) is { } modal)
+        {
+            yield return modal;
+        }
+
         foreach (Response response in responses)
         {
             if (_cut.Make(design, response) is { } row)
