@@ -81,6 +81,9 @@ public sealed record FlatSidedTube : CellTube
     /// <summary>ri, mm.</summary>
     public double InnerCorner { get; }
 
+    /// <summary>True where ri is not <see cref="RuleInnerCorner"/>, as of hot-finished tube.</summary>
+    public bool HasOwnInnerCorner => Math.Abs(InnerCorner - RuleInnerCorner(OuterCorner, Wall)) > SameRadius;
+
     /// <inheritdoc/>
     public override Outline Outline { get; }
 
@@ -93,7 +96,7 @@ public sealed record FlatSidedTube : CellTube
         get
         {
             string size = Height == Width ? $"square {Height:0.####}" : $"rect {Height:0.####} x {Width:0.####}";
-            bool inner = Math.Abs(InnerCorner - RuleInnerCorner(OuterCorner, Wall)) > SameRadius;
+            bool inner = HasOwnInnerCorner;
             string corner = inner || Math.Abs(OuterCorner - RuleOuterCorner(Wall)) > SameRadius ? $" corner {OuterCorner:0.####} mm" : string.Empty;
             return string.Create(CultureInfo.InvariantCulture, $"{size} x {Wall:0.####} mm{corner}{(inner ? $" inner {InnerCorner:0.####} mm" : string.Empty)}");
         }

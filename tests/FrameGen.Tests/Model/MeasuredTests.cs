@@ -37,6 +37,7 @@ public sealed class MeasuredTests
     [InlineData("square 40 x 2 mm", "{height: 40.1 mm}", "square 40.1 x 2 mm")]
     [InlineData("square 40 x 2 mm", "{height: 40.1 mm, width: 39.9 mm, wall: 1.9 mm}", "rect 40.1 x 39.9 x 1.9 mm corner 4 mm")]
     [InlineData("rect 60 x 40 x 2 mm", "{width: 40.2 mm}", "rect 60 x 40.2 x 2 mm")]
+    [InlineData("square 40 x 3.2 mm corner 4.8 mm inner 3.2 mm", "{wall: 3.1 mm}", "square 40 x 3.1 mm corner 4.8 mm inner 3.2 mm")]
     [InlineData("ellipse 45 x 28 x 1.5 mm", "{height: 44.8 mm, width: 28.1 mm, wall: 1.48 mm}", "ellipse 44.8 x 28.1 x 1.48 mm")]
     public void Other_shapes_are_measured_by_height_width_and_wall(string section, string measures, string measured) => Assert.Equal(
         measured, Resolve($"measured: {{posts: {measures}}}", out _, section)!.Groups[0].Candidates[0].Section.Name);

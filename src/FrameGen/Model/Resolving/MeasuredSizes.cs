@@ -67,6 +67,7 @@ internal static class MeasuredSizes
             {
                 RoundTube => new RoundTube(h, wall),
                 Rod => new Rod(h),
+                FlatSidedTube { HasOwnInnerCorner: true } tube => new FlatSidedTube(h, w, wall, tube.OuterCorner, tube.InnerCorner),
                 FlatSidedTube tube => new FlatSidedTube(h, w, wall, tube.OuterCorner),
                 EllipseTube => new EllipseTube(h, w, wall),
                 _ => throw new InvalidOperationException($"How a {nominal.Shape} is measured is not written yet."),
