@@ -14,7 +14,7 @@ public sealed class FactoredFrame
     {
         _layout = layout;
         _stiffness = new StiffnessBlocks(layout);
-        _factor = new NumericFactor(layout.Symbolic);
+        _factor = new NumericFactor(layout, _stiffness);
         _unknowns = new double[Six * layout.NodeAt.Length];
     }
 
@@ -64,7 +64,7 @@ public sealed class FactoredFrame
     internal void Factor(IReadOnlyList<BeamProfile> profiles)
     {
         _stiffness.Assemble(profiles);
-        _factor.Factor(_stiffness, isFixed: null);
+        _factor.Factor(isFixed: null);
         if (_factor.Suspects.Count > 0)
         {
             IReadOnlyList<Mechanism> motions = new MechanismFinder(_layout, _stiffness, _factor).Find();

@@ -53,6 +53,7 @@ internal sealed class FrameLayout
         Pairs = new int[Profiles.Length];
         (PairRows, PairColumns) = NumberPairs();
         Placements = Place();
+        Crossings = Cross();
     }
 
     /// <summary>The frame.</summary>
@@ -114,6 +115,9 @@ internal sealed class FrameLayout
 
     /// <summary>For each front, the blocks of K that go to its panel.</summary>
     public Placement[][] Placements { get; }
+
+    /// <summary>For each domain of the factor, the blocks between it and the rest.</summary>
+    public int[][] Crossings { get; }
 
     private double SizeOf(BeamFrame frame)
     {
@@ -236,6 +240,30 @@ internal sealed class FrameLayout
             Front front = fronts[s];
             int offset = front.OffsetOf(front.RowOf(PairRows[pair]), Six * (PairColumns[pair] - front.First));
             lists[s].Add(new Placement(pair, offset, PairRows[pair], PairColumns[pair]));
+        }
+
+        return Array.ConvertAll(lists, list => list.ToArray());
+    }
+
+    private int[][] Cross()
+    {
+        Domain[] domains = Symbolic.Domains;
+        int[] domainOf = new int[NodeAt.Length];
+        Array.Fill(domainOf, -1);
+        var lists = new List<int>[domains.Length];
+        for (int d = 0; d < domains.Length; d++)
+        {
+            lists[d] = [];
+            Array.Fill(domainOf, d, domains[d].FirstColumn, domains[d].EndColumn - domains[d].FirstColumn);
+        }
+
+        for (int pair = 0; pair < PairRows.Length; pair++)
+        {
+            int d = domainOf[PairColumns[pair]];
+            if (d >= 0 && PairRows[pair] >= domains[d].EndColumn)
+            {
+                lists[d].Add(pair);
+            }
         }
 
         return Array.ConvertAll(lists, list => list.ToArray());

@@ -45,8 +45,11 @@ internal sealed class Front
     /// <summary>Rows with their padding: the column stride of the first slice.</summary>
     public int Stride { get; }
 
-    /// <summary>Where the panel starts among all panels.</summary>
+    /// <summary>Where the panel starts among all panels of its kind.</summary>
     public long PanelStart { get; set; }
+
+    /// <summary>Whether the panel is needed only while its domain is factored.</summary>
+    public bool IsPassing { get; set; }
 
     /// <summary>Doubles of the panel.</summary>
     public int PanelLength { get; }
@@ -84,6 +87,6 @@ internal sealed class Front
     }
 
     /// <summary>The front's panel.</summary>
-    /// <param name="panels">All fronts' panels.</param>
+    /// <param name="panels">All panels of its kind.</param>
     public Span<double> PanelIn(double[] panels) => panels.AsSpan((int)PanelStart, PanelLength);
 }

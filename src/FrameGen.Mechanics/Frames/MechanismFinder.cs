@@ -21,7 +21,7 @@ internal sealed class MechanismFinder(FrameLayout layout, StiffnessBlocks stiffn
         {
             found.Add((freedom / Six, motion));
             isFixed[freedom] = true;
-            factor.Factor(stiffness, isFixed);
+            factor.Factor(isFixed);
         }
 
         return found.Count == 0 ? [] : MotionDescriber.Describe(layout, found);

@@ -19,7 +19,9 @@ internal sealed class NumericFactor
     private const int GroupStride = Lanes * Depth;
 
     private readonly SymbolicFactor _symbolic;
+    private readonly StiffnessBlocks _stiffness;
     private readonly double[] _panels;
+    private readonly double[] _passing;
     private readonly double[] _scaled;
     private readonly double[] _product;
     private readonly double[] _pivots;
@@ -28,17 +30,21 @@ internal sealed class NumericFactor
     private readonly List<int> _suspects = [];
 
     /// <summary>Makes room for the values.</summary>
-    public NumericFactor(SymbolicFactor symbolic)
+    /// <param name="layout">Layout of the frame.</param>
+    /// <param name="stiffness">The blocks of K; solves take from them what large frames don't keep of the factor.</param>
+    public NumericFactor(FrameLayout layout, StiffnessBlocks stiffness)
     {
-        _symbolic = symbolic;
+        SymbolicFactor symbolic = layout.Symbolic;
+        (_symbolic, _stiffness) = (symbolic, stiffness);
 
         // Whole groups of rows are read, the last one of the last panel past its end.
         _panels = GC.AllocateUninitializedArray<double>((int)symbolic.PanelLength + Lanes);
+        _passing = GC.AllocateUninitializedArray<double>(checked((int)symbolic.PassingLength + Lanes));
         _scaled = new double[(Depth * symbolic.WidestFront) + GroupStride];
         _product = GC.AllocateUninitializedArray<double>(Depth * (symbolic.WidestFront + Lanes));
         _pivots = new double[Six * symbolic.Order.Length];
         _inversePivots = new double[Six * symbolic.Order.Length];
-        _solver = new TriangularSolver(symbolic, _panels, _inversePivots);
+        _solver = new TriangularSolver(layout, stiffness, _panels, _inversePivots);
     }
 
     /// <summary>Freedoms, in elimination order, whose pivots were small beside their own stiffness; ascending.</summary>
@@ -47,26 +53,28 @@ internal sealed class NumericFactor
     /// <summary>Whether a freedom's pivot was nothing but rounding.</summary>
     public bool IsLost(int freedom) => _inversePivots[freedom] == 0;
 
-    /// <summary>Assembles and factors.</summary>
-    /// <param name="stiffness">The blocks of K.</param>
+    /// <summary>Factors the assembled stiffness.</summary>
     /// <param name="isFixed">Freedoms, in elimination order, to leave out; null for none.</param>
-    public void Factor(StiffnessBlocks stiffness, bool[]? isFixed)
+    public void Factor(bool[]? isFixed)
     {
         _suspects.Clear();
-        Front[] fronts = _symbolic.Fronts;
-        for (int s = 0; s < fronts.Length; s++)
+        for (int s = 0; s < _symbolic.Fronts.Length; s++)
         {
-            Front front = fronts[s];
-            Span<double> panel = PanelOf(front);
-            panel.Clear();
-            stiffness.AddTo(s, panel);
-            foreach (FrontUpdate update in front.Updates)
+            if (!_symbolic.Fronts[s].IsPassing)
             {
-                Add(update, front, panel);
+                Assemble(s);
             }
-
-            Eliminate(front, panel, stiffness.Diagonal, isFixed);
         }
+
+        int next = 0;
+        foreach (Domain domain in _symbolic.Domains)
+        {
+            Factor(next, domain.FirstFront, isFixed);
+            Pass(domain, isFixed);
+            next = domain.EndFront;
+        }
+
+        Factor(next, _symbolic.Fronts.Length, isFixed);
     }
 
     /// <summary>Solves L D Lᵀ x = b in place, in elimination order.</summary>
@@ -78,14 +86,84 @@ internal sealed class NumericFactor
     /// <summary>Solves Lᵀ x = b in place, in elimination order.</summary>
     public void Backward(Span<double> x) => _solver.Backward(x);
 
-    private Span<double> PanelOf(Front front) => front.PanelIn(_panels);
+    private Span<double> PanelOf(Front front) => front.PanelIn(front.IsPassing ? _passing : _panels);
+
+    private void Assemble(int s)
+    {
+        Span<double> panel = PanelOf(_symbolic.Fronts[s]);
+        panel.Clear();
+        _stiffness.AddTo(s, panel);
+    }
+
+    private void Factor(int first, int end, bool[]? isFixed)
+    {
+        for (int s = first; s < end; s++)
+        {
+            Front front = _symbolic.Fronts[s];
+            foreach (FrontUpdate update in front.Updates)
+            {
+                Add(update);
+            }
+
+            Eliminate(front, PanelOf(front), _stiffness.Diagonal, isFixed);
+        }
+    }
+
+    /// <summary>Factors a domain, passes on what it does to the rest, and keeps its own rows.</summary>
+    private void Pass(Domain domain, bool[]? isFixed)
+    {
+        for (int s = domain.FirstFront; s < domain.EndFront; s++)
+        {
+            Assemble(s);
+        }
+
+        Factor(domain.FirstFront, domain.EndFront, isFixed);
+        Span<double> boundary = PanelOf(domain.Boundary);
+        boundary.Clear();
+        foreach (FrontUpdate update in domain.ToBoundary)
+        {
+            Add(update);
+        }
+
+        foreach (FrontUpdate update in domain.Onward)
+        {
+            int first = 0;
+            for (int b = update.Start; b < update.End; b++)
+            {
+                int column = Six * b;
+                ReadOnlySpan<double> columns = boundary[domain.Boundary.OffsetOf(column, column)..];
+                Scatter(update, ref first, b, columns, domain.Boundary.SliceStride(column / Depth));
+            }
+        }
+
+        for (int k = 0; k < domain.Kept.Length; k++)
+        {
+            Keep(_symbolic.Fronts[domain.FirstFront + k], domain.Kept[k]);
+        }
+    }
+
+    /// <summary>Copies the rows inside of its domain; the padding must be zero, not what else is in the whole panel.</summary>
+    private void Keep(Front whole, Front kept)
+    {
+        Span<double> from = PanelOf(whole);
+        Span<double> to = PanelOf(kept);
+        for (int column = 0; column < kept.OwnRows; column++)
+        {
+            int row = column / Depth * Depth;
+            int length = kept.Rows - row;
+            Span<double> target = to.Slice(kept.OffsetOf(row, column), kept.Stride - row);
+            from.Slice(whole.OffsetOf(row, column), length).CopyTo(target);
+            target[length..].Clear();
+        }
+    }
 
     /// <summary>Brings a front up to date with an earlier one, as many columns as a slice has at a time.</summary>
-    private void Add(FrontUpdate update, Front front, Span<double> panel)
+    private void Add(FrontUpdate update)
     {
         const int Nodes = Depth / Six;
         Front source = update.Source;
         ref double from = ref MemoryMarshal.GetReference(PanelOf(source));
+        int first = 0;
         for (int start = update.Start; start < update.End; start += Nodes)
         {
             int end = Math.Min(start + Nodes, update.End);
@@ -117,37 +195,41 @@ internal sealed class NumericFactor
                 }
             }
 
-            Scatter(update, start, end, product, stride, front, panel);
+            for (int b = start; b < end; b++)
+            {
+                int column = Six * (b - start);
+                Scatter(update, ref first, b, product[((column * stride) + column)..], stride);
+            }
         }
     }
 
-    /// <summary>Adds columns of a product to the front they reach into, from the diagonal down.</summary>
-    private static void Scatter(
-        FrontUpdate update, int start, int end, ReadOnlySpan<double> product, int stride, Front front, Span<double> panel)
+    /// <summary>Adds one node's columns of a product to the front they reach into, from the diagonal down.</summary>
+    /// <param name="update">Where it goes.</param>
+    /// <param name="first">In: a run not behind the node's. Out: the node's.</param>
+    /// <param name="b">The node, by its row below in the source.</param>
+    /// <param name="columns">Six columns from their diagonal down.</param>
+    /// <param name="stride">From one of them to the next.</param>
+    private void Scatter(FrontUpdate update, ref int first, int b, ReadOnlySpan<double> columns, int stride)
     {
         FrontUpdate.Run[] runs = update.Runs;
-        int first = 0;
-        for (int b = start; b < end; b++)
+        while (runs[first].End <= b)
         {
-            while (runs[first].End <= b)
-            {
-                first++;
-            }
+            first++;
+        }
 
-            int column = Six * (update.Source.Below[b] - front.First);
-            int targetStride = front.SliceStride(column / Depth);
-            Span<double> target = panel[front.OffsetOf(column, column)..];
-            for (int c = 0; c < Six; c++)
+        Front front = update.Target;
+        int column = runs[first].Row + (Six * (b - runs[first].Start));
+        int targetStride = front.SliceStride(column / Depth);
+        Span<double> target = PanelOf(front)[front.OffsetOf(column, column)..];
+        for (int c = 0; c < Six; c++)
+        {
+            for (int r = first; r < runs.Length; r++)
             {
-                ReadOnlySpan<double> source = product.Slice(((Six * (b - start)) + c) * stride, stride);
-                for (int r = first; r < runs.Length; r++)
-                {
-                    FrontUpdate.Run run = runs[r];
-                    int from = Math.Max(run.Start, b);
-                    FrontKernels.Add(
-                        source.Slice(Six * (from - start), Six * (run.End - from)),
-                        target[((c * targetStride) + run.Row + (Six * (from - run.Start)) - column)..]);
-                }
+                FrontUpdate.Run run = runs[r];
+                int from = Math.Max(run.Start, b);
+                FrontKernels.Add(
+                    columns.Slice((c * stride) + (Six * (from - b)), Six * (run.End - from)),
+                    target[((c * targetStride) + run.Row + (Six * (from - run.Start)) - column)..]);
             }
         }
     }

@@ -109,6 +109,56 @@ internal sealed class StiffnessBlocks
         }
     }
 
+    /// <summary>y −= A x over blocks between nodes, x at their columns, y at their rows; nothing in held rows.</summary>
+    /// <param name="pairs">Which blocks.</param>
+    /// <param name="x">In elimination order, zero in held freedoms.</param>
+    /// <param name="y">In elimination order.</param>
+    public void SubtractProduct(int[] pairs, ReadOnlySpan<double> x, Span<double> y)
+    {
+        foreach (int pair in pairs)
+        {
+            ReadOnlySpan<double> block = _pairs.AsSpan(BlockSize * pair, BlockSize);
+            int row = Six * _layout.PairRows[pair];
+            ReadOnlySpan<double> from = x.Slice(Six * _layout.PairColumns[pair], Six);
+            Span<double> to = y.Slice(row, Six);
+            for (int r = 0; r < Six; r++)
+            {
+                double sum = 0;
+                for (int c = 0; c < Six; c++)
+                {
+                    sum += block[(Six * c) + r] * from[c];
+                }
+
+                to[r] -= _layout.HeldAt[row + r] ? 0 : sum;
+            }
+        }
+    }
+
+    /// <summary>y += Aᵀ x over blocks between nodes, x at their rows, y at their columns; nothing in held columns.</summary>
+    /// <param name="pairs">Which blocks.</param>
+    /// <param name="x">In elimination order, zero in held freedoms.</param>
+    /// <param name="y">In elimination order.</param>
+    public void AddTransposed(int[] pairs, ReadOnlySpan<double> x, Span<double> y)
+    {
+        foreach (int pair in pairs)
+        {
+            ReadOnlySpan<double> block = _pairs.AsSpan(BlockSize * pair, BlockSize);
+            int column = Six * _layout.PairColumns[pair];
+            ReadOnlySpan<double> from = x.Slice(Six * _layout.PairRows[pair], Six);
+            Span<double> to = y.Slice(column, Six);
+            for (int c = 0; c < Six; c++)
+            {
+                double sum = 0;
+                for (int r = 0; r < Six; r++)
+                {
+                    sum += block[(Six * c) + r] * from[r];
+                }
+
+                to[c] += _layout.HeldAt[column + c] ? 0 : sum;
+            }
+        }
+    }
+
     private void Hold(FrameLayout.Placement placement, int stride, Span<double> target)
     {
         for (int c = 0; c < Six; c++)

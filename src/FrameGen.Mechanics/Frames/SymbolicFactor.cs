@@ -5,7 +5,7 @@ namespace FrameGen.Mechanics.Frames;
 /// <summary>
 /// The layout of the factor, made once a topology: columns with the same pattern are gathered in fronts (supernodes), each a dense
 /// panel, and every front knows which earlier ones reach into it (the left-looking supernodal method: E. Ng, B. Peyton, SIAM J. Sci. Comput.
-/// 14 (1993) 1034). Nothing is held beside the factor itself, whose memory is what limits large frames.
+/// 14 (1993) 1034). Nothing is held beside the factor itself, whose memory is what limits large frames; of their <see cref="Domains"/> not even all of it.
 /// </summary>
 internal sealed class SymbolicFactor
 {
@@ -18,16 +18,33 @@ internal sealed class SymbolicFactor
     // Below this many nodes minimum degree is as good as any order.
     private const int SmallFrame = 100;
 
-    private SymbolicFactor(int[] order, Front[] fronts)
+    private SymbolicFactor(int[] order, Front[] fronts, Domain[] domains)
     {
         Order = order;
         Place = EliminationTree.Inverse(order);
         Fronts = fronts;
-        foreach (Front front in fronts)
+        Domains = domains;
+        KeptFronts = [.. fronts];
+        foreach (Domain domain in domains)
         {
-            front.PanelStart = PanelLength;
-            PanelLength += front.PanelLength;
-            WidestFront = Math.Max(WidestFront, front.Stride);
+            domain.Kept.CopyTo(KeptFronts, domain.FirstFront);
+            long passing = 0;
+            for (int s = domain.FirstFront; s < domain.EndFront; s++)
+            {
+                (fronts[s].IsPassing, fronts[s].PanelStart) = (true, passing);
+                passing += fronts[s].PanelLength;
+            }
+
+            (domain.Boundary.IsPassing, domain.Boundary.PanelStart) = (true, passing);
+            PassingLength = Math.Max(PassingLength, domain.PassingLength);
+            WidestFront = Math.Max(WidestFront, domain.Boundary.Stride);
+        }
+
+        for (int s = 0; s < fronts.Length; s++)
+        {
+            KeptFronts[s].PanelStart = PanelLength;
+            PanelLength += KeptFronts[s].PanelLength;
+            WidestFront = Math.Max(WidestFront, fronts[s].Stride);
         }
 
         if (PanelLength + Lanes > Array.MaxLength)
@@ -44,6 +61,15 @@ internal sealed class SymbolicFactor
 
     /// <summary>Fronts, children before parents.</summary>
     public Front[] Fronts { get; }
+
+    /// <summary>The fronts with the rows that solves go through: those of a domain without the rows beyond it.</summary>
+    public Front[] KeptFronts { get; }
+
+    /// <summary>Parts whose rows beyond are not kept, in their order; none in a frame of usual size.</summary>
+    public Domain[] Domains { get; }
+
+    /// <summary>Doubles of the panels needed only while a domain is factored.</summary>
+    public long PassingLength { get; }
 
     /// <summary>Doubles of all panels.</summary>
     public long PanelLength { get; }
@@ -68,7 +94,8 @@ internal sealed class SymbolicFactor
         }
 
         var tree = EliminationTree.Build(order, starts, neighbours);
-        return new SymbolicFactor(tree.Order, Gather(tree));
+        (Front[] fronts, Domain[] domains) = Gather(tree);
+        return new SymbolicFactor(tree.Order, fronts, domains);
 
         void Try(int[] other)
         {
@@ -77,7 +104,7 @@ internal sealed class SymbolicFactor
         }
     }
 
-    private static Front[] Gather(EliminationTree tree)
+    private static (Front[] Fronts, Domain[] Domains) Gather(EliminationTree tree)
     {
         int n = tree.Order.Length;
         var ends = new List<int>();
@@ -127,7 +154,7 @@ internal sealed class SymbolicFactor
         return Connect(tree, kept);
     }
 
-    private static Front[] Connect(EliminationTree tree, List<(int First, int End, double Zeros)> kept)
+    private static (Front[] Fronts, Domain[] Domains) Connect(EliminationTree tree, List<(int First, int End, double Zeros)> kept)
     {
         var fronts = new Front[kept.Count];
         int[] frontOf = new int[tree.Order.Length];
@@ -137,7 +164,8 @@ internal sealed class SymbolicFactor
             Array.Fill(frontOf, s, fronts[s].First, fronts[s].Columns);
         }
 
-        FrontUpdate.Connect(fronts, frontOf);
-        return fronts;
+        Domain[] domains = Domain.Choose(fronts, frontOf);
+        FrontConnector.Connect(fronts, frontOf, domains);
+        return (fronts, domains);
     }
 }

@@ -9,55 +9,71 @@ internal sealed class TriangularSolver
     private const int Six = SymbolicFactor.Six;
     private const int Lanes = SymbolicFactor.Lanes;
 
-    private readonly SymbolicFactor _symbolic;
+    private readonly StiffnessBlocks _stiffness;
     private readonly double[] _panels;
     private readonly double[] _inversePivots;
     private readonly double[] _work;
+    private readonly double[] _inside;
+    private readonly Step[] _steps;
 
     /// <summary>Makes room for one right-hand side.</summary>
-    /// <param name="symbolic">Layout of the factor.</param>
+    /// <param name="layout">Layout of the frame.</param>
+    /// <param name="stiffness">The blocks of K, those of the factored design.</param>
     /// <param name="panels">L, in the fronts' panels.</param>
     /// <param name="inversePivots">D⁻¹, by freedom in elimination order.</param>
-    public TriangularSolver(SymbolicFactor symbolic, double[] panels, double[] inversePivots)
+    public TriangularSolver(FrameLayout layout, StiffnessBlocks stiffness, double[] panels, double[] inversePivots)
     {
-        (_symbolic, _panels, _inversePivots) = (symbolic, panels, inversePivots);
+        (_stiffness, _panels, _inversePivots) = (stiffness, panels, inversePivots);
+        SymbolicFactor symbolic = layout.Symbolic;
         _work = new double[symbolic.WidestFront + Lanes];
+        _inside = new double[symbolic.Domains.Length == 0 ? 0 : inversePivots.Length];
+        var steps = new List<Step>();
+        int next = 0;
+        for (int d = 0; d < symbolic.Domains.Length; d++)
+        {
+            Domain domain = symbolic.Domains[d];
+            steps.AddRange(symbolic.Fronts[next..domain.FirstFront].Select(front => new Step([front], null, [])));
+            steps.Add(new Step(domain.Kept, domain, layout.Crossings[d]));
+            next = domain.EndFront;
+        }
+
+        steps.AddRange(symbolic.Fronts[next..].Select(front => new Step([front], null, [])));
+        _steps = [.. steps];
     }
 
     /// <summary>Solves L D Lᵀ x = b in place, in elimination order.</summary>
     public void Solve(Span<double> x)
     {
-        foreach (Front front in _symbolic.Fronts)
+        foreach (Step step in _steps)
         {
-            Forward(front, x);
+            Forward(step, x);
         }
 
-        Divide(x);
+        Divide(x, 0, x.Length);
         Backward(x);
     }
 
     /// <summary>Solves L D Lᵀ x = b in place for several b, each to the same digits as alone; every panel is fetched from memory but once for all.</summary>
     public void Solve(ReadOnlySpan<double[]> all)
     {
-        Front[] fronts = _symbolic.Fronts;
-        for (int s = 0; s < fronts.Length; s++)
+        foreach (Step step in _steps)
         {
             foreach (double[] x in all)
             {
-                Forward(fronts[s], x);
+                Forward(step, x);
             }
         }
 
         foreach (double[] x in all)
         {
-            Divide(x);
+            Divide(x, 0, x.Length);
         }
 
-        for (int s = fronts.Length - 1; s >= 0; s--)
+        for (int s = _steps.Length - 1; s >= 0; s--)
         {
             foreach (double[] x in all)
             {
-                Backward(fronts[s], x);
+                Backward(_steps[s], x);
             }
         }
     }
@@ -65,16 +81,66 @@ internal sealed class TriangularSolver
     /// <summary>Solves Lᵀ x = b in place, in elimination order.</summary>
     public void Backward(Span<double> x)
     {
-        Front[] fronts = _symbolic.Fronts;
-        for (int s = fronts.Length - 1; s >= 0; s--)
+        for (int s = _steps.Length - 1; s >= 0; s--)
         {
-            Backward(fronts[s], x);
+            Backward(_steps[s], x);
         }
     }
 
-    private void Divide(Span<double> x)
+    /// <summary>With A the stiffness between a domain and the rest, its rows of L beyond itself are A L⁻ᵀ D⁻¹.</summary>
+    private void Forward(Step step, Span<double> x)
     {
-        for (int k = 0; k < x.Length; k++)
+        foreach (Front front in step.Fronts)
+        {
+            Forward(front, x);
+        }
+
+        if (step.Domain is { } domain)
+        {
+            (int start, int length) = RangeOf(domain);
+            x.Slice(start, length).CopyTo(_inside.AsSpan(start));
+            Divide(_inside, start, length);
+            BackwardInside(step, _inside);
+            _stiffness.SubtractProduct(step.Crossings, _inside, x);
+        }
+    }
+
+    private void Backward(Step step, Span<double> x)
+    {
+        if (step.Domain is { } domain)
+        {
+            (int start, int length) = RangeOf(domain);
+            _inside.AsSpan(start, length).Clear();
+            _stiffness.AddTransposed(step.Crossings, x, _inside);
+            foreach (Front front in step.Fronts)
+            {
+                Forward(front, _inside);
+            }
+
+            Divide(_inside, start, length);
+            for (int k = start; k < start + length; k++)
+            {
+                x[k] -= _inside[k];
+            }
+        }
+
+        BackwardInside(step, x);
+    }
+
+    private void BackwardInside(Step step, Span<double> x)
+    {
+        for (int s = step.Fronts.Length - 1; s >= 0; s--)
+        {
+            Backward(step.Fronts[s], x);
+        }
+    }
+
+    private static (int Start, int Length) RangeOf(Domain domain) =>
+        (Six * domain.FirstColumn, Six * (domain.EndColumn - domain.FirstColumn));
+
+    private void Divide(Span<double> x, int start, int length)
+    {
+        for (int k = start; k < start + length; k++)
         {
             x[k] *= _inversePivots[k];
         }
@@ -149,4 +215,7 @@ internal sealed class TriangularSolver
             }
         }
     }
+
+    /// <summary>One front, or the fronts of a domain with the blocks of K between it and the rest.</summary>
+    private readonly record struct Step(Front[] Fronts, Domain? Domain, int[] Crossings);
 }
