@@ -138,7 +138,7 @@ internal sealed class SymbolicFactor
                 double zeros = front.Zeros + child.Zeros
                     + ((double)childColumns * (front.End - front.First + below - tree.Rows[child.End - 1].Length));
                 double size = columns * (((columns + 1) / 2.0) + below);
-                double allowed = columns <= 3 ? 0.5 : columns <= 8 ? 0.2 : 0.08;
+                double allowed = columns <= 3 ? 0.5 : columns <= 8 ? 0.2 : 0.04;
                 if (zeros > allowed * size)
                 {
                     break;

@@ -33,42 +33,35 @@ public class SparseSolverTests
         }
     }
 
-    // A block of 9 x 9 x 9 nodes: wide fronts, several passes in each, nested dissection against minimum degree.
-    [Fact]
-    public void A_solid_lattice_is_solved_to_rounding()
+    // A block of nodes: wide fronts, several slices in each, nested dissection against minimum degree; the larger one in domains.
+    [Theory]
+    [InlineData(9, false)]
+    [InlineData(11, true)]
+    public void A_solid_lattice_is_solved_to_rounding(int side, bool hasDomains)
     {
-        const int Side = 9;
-        var sketch = new FrameSketch();
-        for (int k = 0; k < Side * Side * Side; k++)
-        {
-            (int x, int y, int z) = (k % Side, k / Side % Side, k / (Side * Side));
-            sketch.Node(400 * x, 300 * y, 500 * z);
-            foreach (int before in (int[])[x > 0 ? 1 : 0, y > 0 ? Side : 0, z > 0 ? Side * Side : 0, x > 0 && z > 0 ? 1 + (Side * Side) : 0])
-            {
-                if (before > 0)
-                {
-                    sketch.Tube(k - before, k, profile: (x + y) % 2);
-                }
-            }
-
-            if (z == 0)
-            {
-                sketch.Hold(k, x == 0 ? "111111" : "101000");
-            }
-        }
-
-        FrameSolver solver = sketch.Solver();
+        FrameSolver solver = Block(side, isHeld: true).Solver();
         BeamLoads loads = SolverTestFrames.Loads(solver.Frame);
-        FrameSolution solution = solver.Factor(Design).Solve(loads);
+        FactoredFrame factored = solver.Factor(Design);
+        FrameSolution solution = factored.Solve(loads);
+        Assert.Equal(hasDomains, factored.Layout.Symbolic.Domains.Length > 0);
         Assert.InRange(solution.BackwardError, 0, 1e-14);
         Assert.InRange(solution.EquilibriumError, 0, 1e-10);
+    }
+
+    // What is not kept of a domain is made again for the motions too: six of a frame that nothing holds.
+    [Fact]
+    public void A_lattice_in_domains_that_nothing_holds_moves_in_six_ways()
+    {
+        FrameSolver solver = Block(11, isHeld: false).Solver();
+        MechanismException free = Assert.Throws<MechanismException>(() => solver.Factor(Design));
+        Assert.Equal(6, free.Motions.Count);
     }
 
     // Modes are looked for with several right-hand sides at a time: one alone comes to the same bits.
     [Fact]
     public void Right_hand_sides_solved_together_come_to_the_digits_of_each_alone()
     {
-        FactoredFrame factored = SolverTestFrames.Random(6, 60).Solver().Factor(Design);
+        FactoredFrame factored = Block(11, isHeld: true).Solver().Factor(Design);
         int size = 6 * factored.Layout.NodeAt.Length;
         var pcg = new PCG(1, 8UL);
         Gen<double> any = Gen.Double[-1, 1];
@@ -200,6 +193,30 @@ public class SparseSolverTests
     {
         FrameSolution solution = StubOnCantilever(FrameSketch.Profile(30, 2), 1e12);
         Assert.True(solution.EquilibriumError > 1e-9);
+    }
+
+    private static FrameSketch Block(int side, bool isHeld)
+    {
+        var sketch = new FrameSketch();
+        for (int k = 0; k < side * side * side; k++)
+        {
+            (int x, int y, int z) = (k % side, k / side % side, k / (side * side));
+            sketch.Node(400 * x, 300 * y, 500 * z);
+            foreach (int before in (int[])[x > 0 ? 1 : 0, y > 0 ? side : 0, z > 0 ? side * side : 0, x > 0 && z > 0 ? 1 + (side * side) : 0])
+            {
+                if (before > 0)
+                {
+                    sketch.Tube(k - before, k, profile: (x + y) % 2);
+                }
+            }
+
+            if (z == 0 && isHeld)
+            {
+                sketch.Hold(k, x == 0 ? "111111" : "101000");
+            }
+        }
+
+        return sketch;
     }
 
     private static FrameSolution StubOnCantilever(BeamProfile soft, double ratio)
