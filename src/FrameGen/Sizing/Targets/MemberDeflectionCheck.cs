@@ -6,8 +6,7 @@ using FrameGen.Spec;
 namespace FrameGen.Sizing.Targets;
 
 /// <summary>
-/// Deflection of a tube thought of alone, plain bending over its axis length: PL³/3EI as a cantilever loaded at its end, PL³/48EI simply
-/// supported and PL³/192EI clamped at both ends, loaded in the middle (Roark, Formulas for Stress and Strain, table 8.1).
+/// Deflection of a tube thought of alone, plain bending over its axis length (<see cref="SpanStiffness"/>).
 /// </summary>
 internal sealed class MemberDeflectionCheck(FrameModel model, MemberDeflectionTarget target) : MemberCheck(model, target)
 {
@@ -39,13 +38,6 @@ internal sealed class MemberDeflectionCheck(FrameModel model, MemberDeflectionTa
     private double Deflection(Tube tube, Section section)
     {
         double length = tube.Length;
-        double share = target.As switch
-        {
-            SpanKind.Cantilever => 3,
-            SpanKind.SimplySupported => 48,
-            SpanKind.FixedFixed => 192,
-            _ => throw new ArgumentOutOfRangeException(nameof(tube), target.As, "Not a kind of span."),
-        };
-        return Math.Abs(target.Load) * length * length * length / (share * MaterialOf(tube).E * Bending(section));
+        return Math.Abs(target.Load) * length * length * length / (SpanStiffness.Share(target.As) * MaterialOf(tube).E * Bending(section));
     }
 }

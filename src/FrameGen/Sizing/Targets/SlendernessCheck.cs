@@ -6,24 +6,11 @@ using FrameGen.Sizing.Analysis;
 namespace FrameGen.Sizing.Targets;
 
 /// <summary>
-/// Length between neighbouring nodes over the radius of gyration, tube by tube; with the wall's limit, class 3 of EN 1993-1-1, table 5.2, the
+/// Length between neighbouring nodes over the radius of gyration, tube by tube; with the wall's limit, class 3 of <see cref="WallSlenderness"/>, the
 /// worse of the two is reported. Settled group by group, before any frame is analysed.
 /// </summary>
-/// <remarks>
-/// <para>Round (sheet 3): D/t no more than 90 ε². Flat sides (sheet 1, pressed all over): c/t no more than 42 ε, c the flat of the longer side
-/// between its outer corners, or between the walls where corners are sharper than that: for hot-finished tube the table's usual h − 3t.
-/// Ellipse: as a round tube of twice its largest radius of curvature, larger size squared over the smaller (L. Gardner and T. M. Chan, Steel
-/// and Composite Structures 7 (2007) 185; from memory).</para>
-/// <para>ε² = 235 MPa/fy for steels; for softer metals times E/210 000 MPa, as EN 1993-1-4 has it.</para>
-/// </remarks>
 internal sealed class SlendernessCheck : TargetCheck
 {
-    private const double RoundFactor = 90;
-    private const double FlatFactor = 42;
-    private const double ReferenceYield = 235;
-    private const double ReferenceModulus = 210_000;
-    private const double SoftestSteel = 190_000;
-
     private readonly SlendernessTarget _target;
     private readonly Span[] _longest;
 
@@ -120,17 +107,9 @@ internal sealed class SlendernessCheck : TargetCheck
             return (0, 1);
         }
 
-        // The higher of the yields, where welds soften the metal: the sheet away from them has to reach it.
-        double softness = material.E >= SoftestSteel ? 1 : material.E / ReferenceModulus;
-        double yield = material.Yield ?? throw new InvalidOperationException($"{material.Name} has no yield, and a wall's limit needs it.");
-        if (section is FlatSidedTube flat)
-        {
-            double side = flat.OuterSize - (2 * Math.Max(flat.OuterCorner, flat.Wall));
-            return (side / flat.Wall, FlatFactor * Math.Sqrt(ReferenceYield / yield * softness));
-        }
-
-        double diameter = section is RoundTube ? section.OuterSize : section.OuterSize * section.OuterSize / Math.Min(section.Height, section.Width);
-        return (diameter / section.Wall, RoundFactor * ReferenceYield / yield * softness);
+        WallSlenderness wall = WallSlenderness.Of(section, material)
+            ?? throw new InvalidOperationException($"{material.Name} has no yield, and a wall's limit needs it.");
+        return (wall.Value, wall.Class3);
     }
 
     private static string Measured(Section section) => section switch
