@@ -20,6 +20,7 @@ internal static class Commands
             Check(terminal),
             Size(terminal),
             Freeze(terminal),
+            CompareOptions.Command(terminal),
             Verify(terminal),
             new VersionOption { Description = "Print the version.", Action = new PrintVersion() },
         };
@@ -142,9 +143,11 @@ internal static class Commands
 
     private static Argument<string> Spec() => new("SPEC") { Description = "The frame's YAML file." };
 
-    private static Option<bool> Json() => new("--json") { Description = "Print the result as JSON on standard output." };
+    /// <summary>The option that prints JSON.</summary>
+    public static Option<bool> Json() => new("--json") { Description = "Print the result as JSON on standard output." };
 
-    private static void Examples(Command command, params string[] lines) => command.Options.Add(
+    /// <summary>Gives a command its help with examples at the end.</summary>
+    public static void Examples(Command command, params string[] lines) => command.Options.Add(
         new HelpOption { Description = "Print this help.", Action = new HelpWithExamples(lines) });
 
     /// <summary>The usual help, with examples after it and no line longer than a terminal's.</summary>

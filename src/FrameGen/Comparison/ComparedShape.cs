@@ -25,10 +25,10 @@ public sealed record ComparedShape(string Name, string? StockShape, double? Larg
     public static readonly ComparedShape SquareTube = new("square", "square", 1.0 / 4, (h, t) => Profile.Of(new FlatSidedTube(h, h, t, 2 * t)));
 
     /// <summary>Rectangular tube, upright, half as wide as high, corners as the square tube's.</summary>
-    public static readonly ComparedShape Rect = new("rect 2:1", "rect", 1.0 / 8, (h, t) => Profile.Of(new FlatSidedTube(h, h / 2, t, 2 * t)));
+    public static readonly ComparedShape Rect = new("rect", "rect", 1.0 / 8, (h, t) => Profile.Of(new FlatSidedTube(h, h / 2, t, 2 * t)));
 
     /// <summary>Elliptic tube, upright, half as wide as high; its smallest radius of curvature is an eighth of its height.</summary>
-    public static readonly ComparedShape Ellipse = new("ellipse 2:1", "ellipse", 1.0 / 8, (h, t) => Profile.Of(new EllipseTube(h, h / 2, t)));
+    public static readonly ComparedShape Ellipse = new("ellipse", "ellipse", 1.0 / 8, (h, t) => Profile.Of(new EllipseTube(h, h / 2, t)));
 
     /// <summary>True for a tube.</summary>
     public bool IsTube => LargestWall is not null;

@@ -36,11 +36,13 @@ public static class ComparisonPlot
         [
             .. comparison.Materials.SelectMany((m, i) => shapes.Select((s, j) => new Curve(LayerName(i, j), m, Points(comparison.Need, s, m)))),
         ];
-        double mostSize = curves.SelectMany(c => c.Points).Concat(Marks(comparison).Select(m => m.At)).Max(p => p.X);
-        double mostMass = curves.SelectMany(c => c.Points).Concat(Marks(comparison).Select(m => m.At)).Max(p => p.Y);
-        var x = new Axis(mostSize, Width);
-        var y = new Axis(mostMass, Height);
-        var shown = new List<Shape>();
+        Point2[] all = [.. curves.SelectMany(c => c.Points), .. Marks(comparison).Select(m => m.At)];
+        var x = new Axis(all.Min(p => p.X), all.Max(p => p.X), Width);
+        var y = new Axis(0, all.Max(p => p.Y), Height);
+        var shown = new List<Shape>
+        {
+            new Text(Words, new Point2(0, Height + TextHeight), TextHeight, 0, $"At equal stiffness, {comparison.Need}"),
+        };
         AddAxes(shown, x, y);
         foreach (Curve curve in curves.Where(c => c.Points.Count > 1))
         {
@@ -133,14 +135,14 @@ public static class ComparisonPlot
         foreach (double tick in x.Ticks())
         {
             shapes.Add(Polyline.Segment(Grid, new Point2(x.Place(tick), 0), new Point2(x.Place(tick), Height)));
-            string words = x.Text(tick);
+            string words = Axis.Text(tick);
             shapes.Add(new Text(Words, new Point2(x.Place(tick) - (Helvetica.Width(words, TextHeight) / 2), -2 - TextHeight), TextHeight, 0, words));
         }
 
         foreach (double tick in y.Ticks())
         {
             shapes.Add(Polyline.Segment(Grid, new Point2(0, y.Place(tick)), new Point2(Width, y.Place(tick))));
-            string words = y.Text(tick);
+            string words = Axis.Text(tick);
             shapes.Add(new Text(Words, new Point2(-2 - Helvetica.Width(words, TextHeight), y.Place(tick) - (TextHeight / 2)), TextHeight, 0, words));
         }
 
@@ -189,27 +191,31 @@ public static class ComparisonPlot
 
     private sealed record Curve(string Layer, MaterialComparison Metal, IReadOnlyList<Point2> Points);
 
-    /// <summary>An axis from 0 with ticks at 1, 2 or 5 times a power of ten.</summary>
+    /// <summary>An axis with ticks at 1, 2 or 5 times a power of ten, from one of them to another.</summary>
     private sealed class Axis
     {
         private const int MostTicks = 10;
 
         private readonly double _step;
         private readonly double _scale;
-        private readonly int _steps;
+        private readonly int _first;
+        private readonly int _last;
 
-        public Axis(double most, double length)
+        public Axis(double least, double most, double length)
         {
-            double power = Math.Pow(10, Math.Floor(Math.Log10(most / MostTicks)));
-            _step = power * new[] { 1.0, 2, 5, 10 }.First(m => most / (m * power) <= MostTicks);
-            _steps = (int)Math.Ceiling(most / _step);
-            _scale = length / (_steps * _step);
+            // A single size has a range of nothing.
+            double range = Math.Max(most - least, most / 100);
+            double power = Math.Pow(10, Math.Floor(Math.Log10(range / MostTicks)));
+            _step = power * new[] { 1.0, 2, 5, 10 }.First(m => range / (m * power) <= MostTicks);
+            _first = (int)Math.Floor(least / _step);
+            _last = Math.Max((int)Math.Ceiling(most / _step), _first + 1);
+            _scale = length / ((_last - _first) * _step);
         }
 
-        public double Place(double value) => value * _scale;
+        public double Place(double value) => (value - (_first * _step)) * _scale;
 
-        public IEnumerable<double> Ticks() => Enumerable.Range(0, _steps + 1).Select(i => i * _step);
+        public IEnumerable<double> Ticks() => Enumerable.Range(_first, _last - _first + 1).Select(i => i * _step);
 
-        public string Text(double tick) => Math.Round(tick, 9).ToString("0.#########", CultureInfo.InvariantCulture);
+        public static string Text(double tick) => Math.Round(tick, 9).ToString("0.#########", CultureInfo.InvariantCulture);
     }
 }

@@ -1,4 +1,5 @@
 using FrameGen.Mechanics.Materials;
+using FrameGen.Sizing;
 using FrameGen.Spec;
 
 namespace FrameGen.Comparison;
@@ -46,4 +47,13 @@ public sealed record StiffnessNeed
         BendingDirection.Side => profile.Iz,
         _ => Math.Min(profile.Iy, profile.Iz),
     };
+
+    /// <summary>In words: <c>EI of 1389 N.m2</c>, <c>EI of 300 N.m2 and GJ of 180 N.m2</c>.</summary>
+    public override string ToString()
+    {
+        const double SquareMetre = 1e6;
+        string bending = Bending is { } ei ? $"EI of {Wording.Number(ei / SquareMetre)} N.m2" : string.Empty;
+        string torsion = Torsion is { } gj ? $"GJ of {Wording.Number(gj / SquareMetre)} N.m2" : string.Empty;
+        return bending.Length > 0 && torsion.Length > 0 ? $"{bending} and {torsion}" : bending + torsion;
+    }
 }
