@@ -1,9 +1,14 @@
 using BenchmarkDotNet.Running;
+using FrameGen.Benchmarks.Fabrication;
 using FrameGen.Benchmarks.Mechanics;
 
 if (args.Length > 0 && string.Equals(args[0], LatticeRun.Option, StringComparison.Ordinal))
 {
     LatticeRun.Print(args, Console.Out);
+}
+else if (args.Contains(CuttingTimes.Option, StringComparer.Ordinal))
+{
+    CuttingTimes.Print(Console.Out);
 }
 else if (args.Contains("--ratios", StringComparer.Ordinal))
 {

@@ -6,15 +6,17 @@ namespace FrameGen.Fabrication.Cutting;
 /// lists of a shop; a first-fit list is left with odd ends in every bar.
 /// </remarks>
 /// <param name="problem">The problem.</param>
+/// <param name="favour">
+/// By how much a piece as long as the bar is worth more, length for length, than a short one: 0 fills fullest; a little more uses up
+/// long pieces early and keeps short ones, which go in anywhere, for the last bars.
+/// </param>
+/// <param name="stepsABar">For one bar; the best filling found until then stands.</param>
 /// <param name="budget">Steps are taken from this.</param>
-internal sealed class BarFilling(CuttingProblem problem, StepBudget budget)
+internal sealed class BarFilling(CuttingProblem problem, double favour, long stepsABar, StepBudget budget)
 {
-    /// <summary>For one bar; the fullest filling found until then stands.</summary>
-    private const long StepsABar = 100_000;
-
     private readonly long[] _sizes = problem.Sizes;
     private readonly BoundedKnapsack _knapsack = new(problem.Sizes);
-    private readonly double[] _values = [.. problem.Sizes.Select(s => (double)s)];
+    private readonly double[] _values = [.. problem.Sizes.Select(s => s * (1 + (favour * s / problem.Bar)))];
 
     /// <summary>The better of two ways to cut what is left: short lengths of the rack first, which keeps the long ones whole where it can, or long ones first.</summary>
     /// <param name="left">Pieces by size.</param>
@@ -96,7 +98,7 @@ internal sealed class BarFilling(CuttingProblem problem, StepBudget budget)
     private void FillUp(int[] left, long free, int[] counts)
     {
         int[] taken = new int[_sizes.Length];
-        if (_knapsack.Fill(free, _values, left, 0, StepsABar, budget, taken))
+        if (_knapsack.Fill(free, _values, left, 0, stepsABar, budget, taken))
         {
             for (int size = 0; size < _sizes.Length; size++)
             {

@@ -60,6 +60,9 @@ internal sealed class CoverSimplex
     /// <summary>Price of a piece of each size, then of a length of each kind on the rack (not positive), at the present basis.</summary>
     public double[] Prices { get; }
 
+    /// <summary>What an exchange costs, in steps of a search: it goes over the inverse three times.</summary>
+    public long StepsAPivot => 1 + ((long)_rows * _rows / 8);
+
     /// <summary>All patterns that have entered, in the order they did.</summary>
     public IReadOnlyList<Pattern> Patterns => _patterns;
 

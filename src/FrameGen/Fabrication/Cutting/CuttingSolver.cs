@@ -8,7 +8,8 @@ namespace FrameGen.Fabrication.Cutting;
 /// </remarks>
 internal static class CuttingSolver
 {
-    private const long StepsOfRelaxation = 20_000_000;
+    private const long StepsABar = 50_000;
+    private const long StepsOfRelaxation = 40_000_000;
     private const long StepsOfRounding = 20_000_000;
     private const long StepsOfSearch = 5_000_000;
 
@@ -23,8 +24,8 @@ internal static class CuttingSolver
     /// <param name="counter">Counts the steps.</param>
     public static CuttingPlan Solve(CuttingProblem problem, StepBudget counter)
     {
-        CuttingDraft best = new BarFilling(problem, counter).Finish(problem.Counts, problem.RackCounts);
         int bound = MaterialBound(problem);
+        CuttingDraft best = Fill(problem, bound, counter);
         if (best.Bought > bound)
         {
             var budget = new StepBudget(StepsOfRelaxation);
@@ -40,6 +41,22 @@ internal static class CuttingSolver
 
         return new CuttingPlan(
             [.. best.Bars.OrderBy(b => b.RackKind ?? int.MaxValue)], Math.Min(bound, best.Bought), best.Unplaced);
+    }
+
+    private static CuttingDraft Fill(CuttingProblem problem, int bound, StepBudget counter)
+    {
+        CuttingDraft? best = null;
+        foreach (double favour in (ReadOnlySpan<double>)[0, 0.01, 0.03, 0.1])
+        {
+            CuttingDraft draft = new BarFilling(problem, favour, StepsABar, counter).Finish(problem.Counts, problem.RackCounts);
+            best = best is null ? draft : CuttingDraft.Better(best, draft);
+            if (best.Bought <= bound)
+            {
+                break;
+            }
+        }
+
+        return best!;
     }
 
     private static (CuttingDraft Best, int Bound) Search(CuttingProblem problem, CuttingDraft best, int bound, StepBudget counter)

@@ -36,8 +36,9 @@ internal sealed class PatternRelaxation
         Pattern[] pool = [.. known.Where(p => p.Fits(wanted))];
         var knapsack = new BoundedKnapsack(problem.Sizes);
         double bound = 0;
-        for (int round = 0; round < MostRounds; round++)
+        for (int round = 0; round < MostRounds && !budget.IsSpent; round++)
         {
+            budget.Take(simplex.StepsAPivot);
             if (simplex.EnterSlack())
             {
                 continue;
@@ -55,7 +56,7 @@ internal sealed class PatternRelaxation
 
             (Pattern? next, double proven) = Price(problem, wanted, there, simplex.Prices, knapsack, budget);
             bound = Math.Max(bound, proven);
-            if (next is null || budget.IsSpent || !simplex.Enter(next))
+            if (next is null || !simplex.Enter(next))
             {
                 break;
             }

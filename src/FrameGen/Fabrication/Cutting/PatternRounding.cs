@@ -6,8 +6,9 @@ namespace FrameGen.Fabrication.Cutting;
 internal sealed class PatternRounding(CuttingProblem problem, StepBudget budget)
 {
     private const double Whole = 1e-6;
+    private const long StepsABar = 5_000;
 
-    private readonly BarFilling _filling = new(problem, budget);
+    private readonly BarFilling _filling = new(problem, 0, StepsABar, budget);
     private readonly List<Pattern> _kept = [];
     private readonly int[] _there = [.. problem.RackCounts];
 
