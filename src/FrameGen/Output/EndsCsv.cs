@@ -1,6 +1,5 @@
 using FrameGen.Fabrication;
 using FrameGen.Joints;
-using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 
 namespace FrameGen.Output;
@@ -40,8 +39,6 @@ internal static class EndsCsv
         for (int i = 0; i < cut.Contacts.Count; i++)
         {
             Contact mate = cut.Contacts[i];
-            Section section = package.Cut.Sized.SectionOf(mate.Tube);
-            bool sawn = i == 0 && cut.Kind == CutKind.Cope && section is RoundTube or Rod;
             table.Row(
                 name,
                 EndText.Name(end),
@@ -53,7 +50,7 @@ internal static class EndsCsv
                 mate.Clock is { } clock
                     ? FixedDigits.Clock(double.RadiansToDegrees(clock), mate.SquareCrossing ? 180 : 360)
                     : string.Empty,
-                sawn ? FixedDigits.Length(section.OuterSize + (2 * cut.Gap)) : string.Empty,
+                i == 0 && HoleSaw.Of(package.Cut.Sized, cut) is { } saw ? FixedDigits.Length(saw) : string.Empty,
                 gap);
         }
     }

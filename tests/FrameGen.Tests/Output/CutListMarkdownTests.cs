@@ -14,11 +14,11 @@ public class CutListMarkdownTests
     {
         string[] lines = Render().Split('\n');
         Assert.Equal("# Cut list: Garden gate, revision B", lines[0]);
-        string[] row = Cells(Assert.Single(lines, l => l.StartsWith($"| {Post} ", StringComparison.Ordinal)));
+        string[] row = Cells(lines.First(l => l.StartsWith($"| {Post} ", StringComparison.Ordinal)));
 
         // The post's mass is checked where it is computed.
-        Assert.Equal([Post, "round 30 x 1.5 mm", "S235", "601.8"], row[..4]);
-        Assert.Equal(["cope to rail", "miter with arm", "0.0", "contour cut"], row[5..]);
+        Assert.Equal([Post, "1", "post", "601.8"], row[..4]);
+        Assert.Equal(["cope to rail", "miter with arm", "0.0", "contour cut"], row[6..]);
         Assert.All(lines, l => Assert.Equal(l.TrimEnd(), l));
         Assert.DoesNotContain("\n\n\n", string.Join('\n', lines), StringComparison.Ordinal);
         Assert.All(Cautions.All, c => Assert.Contains(lines, l => l.Equals("- " + c, StringComparison.Ordinal)));
@@ -30,10 +30,24 @@ public class CutListMarkdownTests
     {
         string[] lines = Render().Split('\n');
         string[] totals = [.. lines.SkipWhile(l => !l.Equals("## Totals", StringComparison.Ordinal)).Skip(2).TakeWhile(l => l.Length > 0)];
-        Assert.Equal(["section", "material", "pieces", "cut length", "mass"], Cells(totals[0]));
-        Assert.Equal(["round 40 x 2 mm", "S235", "1", "1000.0", "1.874"], Cells(totals[^2]));
+        Assert.Equal(["section", "material", "pieces", "cut length", "spec mass", "cut mass"], Cells(totals[0]));
+
+        // The rail is cut square at its nodes: 1000 mm of 40 x 2 weigh the same both ways.
+        Assert.Equal(["round 40 x 2 mm", "S235", "1", "1000.0", "1.874", "1.874"], Cells(totals[^2]));
         Assert.Equal(["**all**", "", "3"], Cells(totals[^1])[..3]);
         Assert.Single(totals.Select(l => l.Length).Distinct());
+    }
+
+    // The post stands square on a rail of 40 with no gap; its miter halves a right angle.
+    [Fact]
+    public void Sets_out_each_end_for_the_saw()
+    {
+        string[] lines = Render().Split('\n');
+        string[] ends = [.. lines.SkipWhile(l => !l.Equals("## Ends to shape", StringComparison.Ordinal)).Skip(4).TakeWhile(l => l.Length > 0)];
+        int post = Array.FindIndex(ends, l => Cells(l)[0] == Post);
+        Assert.Equal([Post, "from", "cope", "rail", "90.0", "0.0", "0.0", "", "40.0"], Cells(ends[post]));
+        Assert.Equal(["", "to", "miter", "arm", "90.0", "45.0", "0.0", "", ""], Cells(ends[post + 1]));
+        Assert.Equal(3, ends.Length);
     }
 
     [Fact]
