@@ -82,7 +82,7 @@ internal sealed class FlatSidedView : OutlineView
     /// <inheritdoc/>
     public override double Farthest(Point2 normal)
     {
-        Point2 point = _outline.FarthestAlong(Turned(normal));
+        Point2 point = _outline.FarthestAlong((1 / normal.DistanceTo(default)) * Turned(normal));
         return (point.X * _across.X) + (point.Y * _across.Y);
     }
 

@@ -40,7 +40,7 @@ public abstract class OutlineView
     public abstract int PieceAt(double u);
 
     /// <summary>u of the point whose outward normal has a direction, mm; of the middle of a flat that has.</summary>
-    /// <param name="normal">Unit vector (u, v).</param>
+    /// <param name="normal">(u, v); any length but zero.</param>
     public abstract double Farthest(Point2 normal);
 
     /// <summary>Where a line of any direction crosses the outline.</summary>

@@ -109,7 +109,8 @@ public sealed class RoundOutline : Outline
 
         public override int PieceAt(double u) => 0;
 
-        public override double Farthest(Point2 normal) => radius * normal.X;
+        public override double Farthest(Point2 normal) =>
+            radius * normal.X / Math.Sqrt((normal.X * normal.X) + (normal.Y * normal.Y));
 
         public override bool Cross(Point2 point, Point2 direction, out double enter, out double leave)
         {

@@ -51,6 +51,9 @@ public sealed record TubeAxes
         return (cos * Z) - (sin * Y);
     }
 
+    /// <summary>What of a vector lies in the plane of the section, as its outlines have it: X towards the top line, Y towards clock 90°.</summary>
+    public Point2 InSection(Vector3 vector) => new(vector.Dot(Z), -vector.Dot(Y));
+
     /// <summary>Clock angle, rad in (−π, π], of a direction as seen along the tube; 0 for one parallel to the tube.</summary>
     public double ClockOf(Vector3 direction) => Math.Atan2(-direction.Dot(Y), direction.Dot(Z));
 }

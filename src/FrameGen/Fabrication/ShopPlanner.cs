@@ -1,7 +1,6 @@
 using FrameGen.Diagnostics;
 using FrameGen.Geometry;
 using FrameGen.Joints;
-using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Sizing;
 using FrameGen.Spec;
@@ -81,12 +80,12 @@ public static class ShopPlanner
             notes.Add("contour cut");
         }
 
-        if (WiderThanSeat(sized, tube.Tube, tube.From))
+        if (WiderThanSeat(sized, tube, End.From))
         {
             notes.Add("from end wider than its seat: fill by hand");
         }
 
-        if (WiderThanSeat(sized, tube.Tube, tube.To))
+        if (WiderThanSeat(sized, tube, End.To))
         {
             notes.Add("to end wider than its seat: fill by hand");
         }
@@ -95,16 +94,18 @@ public static class ShopPlanner
     }
 
     /// <summary>True where half the tube's width and the offset reach past the seat's side, by more than rounding.</summary>
-    private static bool WiderThanSeat(SizedFrame sized, int tube, EndCut end)
+    private static bool WiderThanSeat(SizedFrame sized, CutTube cut, End which)
     {
+        (int tube, EndCut end) = (cut.Tube, cut[which]);
         if (end.Kind != CutKind.Cope || end.Contacts.Count == 0)
         {
             return false;
         }
 
+        FrameModel model = sized.Model;
         Contact seat = end.Contacts[0];
-        Section own = sized.SectionOf(tube);
-        Section mate = sized.SectionOf(seat.Tube);
-        return (own.OuterSize / 2) + seat.Offset > (mate.OuterSize / 2) + Lengths.Same;
+        (double own, double allowed) = JointFit.HalfWidths(
+            model.Tubes[tube], which, sized.SectionOf(tube), model.Tubes[seat.Tube], sized.SectionOf(seat.Tube));
+        return own + seat.Offset > allowed + Lengths.Same;
     }
 }

@@ -1,3 +1,5 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
 /// <summary>The clock angles at which a tube's mesh has vertices: those of all curves, and more where they lie far apart.</summary>
@@ -15,31 +17,44 @@ internal sealed class Columns
     public double[] Clocks { get; }
 
     /// <summary>Columns for two ends.</summary>
-    public static Columns Of(EndRings from, EndRings to, double outer, double sag)
+    public static Columns Of(EndRings from, EndRings to, Outline outer, Outline inner, double sag)
     {
-        List<double> wanted = [];
+        List<double> wanted = [.. outer.Breaks, .. inner.Breaks];
         foreach (EndCurve curve in from.Curves.Concat(to.Curves).Distinct())
         {
             wanted.AddRange(curve.Points.Select(p => p.Clock));
         }
 
         wanted.Sort();
-        double width = Narrowest / outer;
+        double least = Math.Min(outer.HalfHeight, outer.HalfWidth);
+        double width = Narrowest / least;
 
-        // A chord over this angle stands off a circle by the sag.
-        double widest = 2 * Math.Acos(1 - (sag / outer));
+        // A chord over this angle stands off a circle by the sag; other outlines are looked at.
+        double widest = 2 * Math.Acos(1 - (sag / least));
         List<double> clocks = [-Math.PI];
         foreach (double clock in wanted)
         {
             if (clock - clocks[^1] > width && Math.PI - clock > width)
             {
-                Fill(clocks, clock, widest);
+                FillUp(clock);
                 clocks.Add(clock);
             }
         }
 
-        Fill(clocks, Math.PI, widest);
+        FillUp(Math.PI);
         return new Columns([.. clocks], width);
+
+        void FillUp(double until)
+        {
+            if (outer is RoundOutline)
+            {
+                Fill(clocks, until, widest);
+            }
+            else
+            {
+                Halve(clocks, until, outer, inner, sag);
+            }
+        }
     }
 
     /// <summary>A curve's t at every column, coming from the left and going to the right: they differ at a step.</summary>
@@ -100,5 +115,32 @@ internal sealed class Columns
         {
             clocks.Add(from + ((until - from) * i / parts));
         }
+    }
+
+    private static void Halve(List<double> clocks, double until, Outline outer, Outline inner, double sag)
+    {
+        double from = clocks[^1];
+        double middle = from + ((until - from) / 2);
+        if (Sag(outer, from, middle, until) > sag || Sag(inner, from, middle, until) > sag)
+        {
+            Halve(clocks, middle, outer, inner, sag);
+            clocks.Add(middle);
+            Halve(clocks, until, outer, inner, sag);
+        }
+    }
+
+    // How far an outline's point halfway stands off the chord.
+    private static double Sag(Outline outline, double from, double middle, double until)
+    {
+        (Point2 a, Point2 b) = (PointAt(outline, from), PointAt(outline, until));
+        Point2 chord = b - a, rise = PointAt(outline, middle) - a;
+        return Math.Abs((chord.X * rise.Y) - (chord.Y * rise.X)) / a.DistanceTo(b);
+    }
+
+    private static Point2 PointAt(Outline outline, double clock)
+    {
+        (double sin, double cos) = Math.SinCos(clock);
+        double radius = outline.RadiusAt(sin, cos);
+        return new(radius * cos, radius * sin);
     }
 }

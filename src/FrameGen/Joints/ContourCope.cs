@@ -1,3 +1,5 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
 /// <summary>
@@ -6,6 +8,9 @@ namespace FrameGen.Joints;
 /// </summary>
 internal sealed class ContourCope(IReadOnlyList<Mate> mates, double middle) : CutSurface
 {
+    /// <summary>Pieces of one mate are numbered below this: its limit, or twice the piece of its outline.</summary>
+    private const int PiecesAMate = 16;
+
     private readonly Mate[] _mates = [.. mates];
 
     /// <summary>What the end is cut to, in the joint's order.</summary>
@@ -22,7 +27,7 @@ internal sealed class ContourCope(IReadOnlyList<Mate> mates, double middle) : Cu
         _mates is [{ IsLimited: false }] ? 0 : (2 * _mates.Length) + (_mates.Length * (_mates.Length - 1) / 2);
 
     /// <summary>Which mate a piece lies on: its place in <see cref="Mates"/>, or <see cref="CutSurface.Nothing"/>.</summary>
-    public static int MateOf(int piece) => piece < 0 ? Nothing : piece / 2;
+    public static int MateOf(int piece) => piece < 0 ? Nothing : piece / PiecesAMate;
 
     /// <inheritdoc/>
     public override int LimitMarginCount => 2 * _mates.Length;
@@ -35,10 +40,11 @@ internal sealed class ContourCope(IReadOnlyList<Mate> mates, double middle) : Cu
         for (int i = 0; i < _mates.Length; i++)
         {
             // A later mate must be met earlier by more than rounding: where two coincide, the first in the order stays.
-            if (_mates[i].At(sin, cos).Meets(radius, Middle, out double t, out bool onLimit) &&
-                (piece == Nothing || t > best + Geometry.RoundOutline.Graze))
+            Mate.HalfPlane plane = _mates[i].At(sin, cos);
+            if (plane.Meets(radius, Middle, out double t, out bool onLimit) &&
+                (piece == Nothing || t > best + Outline.Graze))
             {
-                (best, piece) = (t, (2 * i) + (onLimit ? 1 : 0));
+                (best, piece) = (t, (PiecesAMate * i) + (onLimit ? 1 : 2 * plane.PieceAt(radius)));
             }
         }
 
@@ -62,11 +68,20 @@ internal sealed class ContourCope(IReadOnlyList<Mate> mates, double middle) : Cu
     }
 
     /// <inheritdoc/>
-    public override void AddTangents(double radius, List<double> clocks)
+    public override void AddTangents(Outline skin, List<double> clocks)
     {
         foreach (Mate mate in _mates)
         {
-            mate.AddTangents(radius, clocks);
+            mate.AddTangents(skin, clocks);
+        }
+    }
+
+    /// <inheritdoc/>
+    public override void AddBreaks(Outline skin, List<double> clocks)
+    {
+        foreach (Mate mate in _mates)
+        {
+            mate.AddBreaks(skin, clocks);
         }
     }
 }

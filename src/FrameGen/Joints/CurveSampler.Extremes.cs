@@ -3,7 +3,7 @@ namespace FrameGen.Joints;
 /// <content>Exact highest and lowest places of a curve, and its length.</content>
 internal sealed partial class CurveSampler
 {
-    /// <summary>Length of the last curve on its skin, mm, steps included, to 1e-6 relative.</summary>
+    /// <summary>Length of the last curve in the developed pattern, on the outer skin its true one, mm, steps included, to 1e-6 relative.</summary>
     /// <remarks>Chords of each stretch, halved while that still shows, whole and halved, extrapolated (Richardson): what is left is of fourth order.</remarks>
     public double Length()
     {
@@ -11,7 +11,7 @@ internal sealed partial class CurveSampler
         for (int i = 1; i < _trace.Count; i++)
         {
             (CutSample a, CutSample b) = (_trace[i - 1], _trace[i]);
-            length += a.Piece == b.Piece ? Length(a, b, 0) : Chord(a, b);
+            length += b.Continues(a) ? Length(a, b, 0) : Chord(a, b);
         }
 
         return length;
@@ -30,9 +30,9 @@ internal sealed partial class CurveSampler
             : halves + (gained / 3);
     }
 
-    private double Chord(in CutSample a, in CutSample b)
+    private static double Chord(in CutSample a, in CutSample b)
     {
-        double x = _radius * (b.Clock - a.Clock);
+        double x = b.Across - a.Across;
         double y = b.T - a.T;
         return Math.Sqrt((x * x) + (y * y));
     }
@@ -44,8 +44,8 @@ internal sealed partial class CurveSampler
         for (int i = 0; i < _trace.Count; i++)
         {
             CutSample here = _trace[i];
-            bool joinsLeft = i > 0 && _trace[i - 1].Piece == here.Piece;
-            bool joinsRight = i < _trace.Count - 1 && _trace[i + 1].Piece == here.Piece;
+            bool joinsLeft = i > 0 && here.Continues(_trace[i - 1]);
+            bool joinsRight = i < _trace.Count - 1 && _trace[i + 1].Continues(here);
             CutSample? extreme = (joinsLeft, joinsRight) switch
             {
                 (true, true) => ExtremeAt(_trace[i - 1], here, _trace[i + 1]),

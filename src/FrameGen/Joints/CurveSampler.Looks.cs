@@ -6,8 +6,9 @@ internal sealed partial class CurveSampler
     private void Look()
     {
         _clocks.Clear();
-        _surface.AddTangents(_radius, _clocks);
+        _surface.AddTangents(_skin, _clocks);
         _clocks.Sort();
+        FindBreaks();
         _looks.Clear();
         int next = 0;
         for (int i = 0; i <= Looks; i++)
@@ -22,6 +23,39 @@ internal sealed partial class CurveSampler
             }
 
             _looks.Add(Evaluate(clock) with { OnGrid = true });
+        }
+
+        AddLooksAtBreaks();
+    }
+
+    private void FindBreaks()
+    {
+        _breaks.Clear();
+        _breaks.AddRange(_skin.Breaks);
+        _surface.AddBreaks(_skin, _breaks);
+        _breaks.Sort();
+    }
+
+    // Right before and right after each place where an outline has a corner, so that what lies on either side is known.
+    private void AddLooksAtBreaks()
+    {
+        double last = -Math.PI;
+        foreach (double clock in _breaks)
+        {
+            if (clock - last < SameBreak || Math.PI - clock < SameBreak)
+            {
+                continue;
+            }
+
+            _looks.RemoveAll(look => Math.Abs(look.Clock - clock) < SameBreak);
+            _looks.Add(Evaluate(clock - (CornerWidth / 2)));
+            _looks.Add(Evaluate(clock + (CornerWidth / 2)) with { AfterBreak = true });
+            last = clock;
+        }
+
+        if (last > -Math.PI)
+        {
+            SortLooks();
         }
     }
 
@@ -69,7 +103,7 @@ internal sealed partial class CurveSampler
         for (int i = 0; i < count; i++)
         {
             (double sin, double cos) = Math.SinCos(_looks[i].Clock);
-            _surface.Margins(sin, cos, _radius, _margins.AsSpan(i * width, width));
+            _surface.Margins(sin, cos, _skin.RadiusAt(sin, cos), _margins.AsSpan(i * width, width));
         }
     }
 
@@ -95,7 +129,7 @@ internal sealed partial class CurveSampler
                 {
                     double middle = low + ((high - low) / 2);
                     (double sin, double cos) = Math.SinCos(middle);
-                    _surface.Margins(sin, cos, _radius, margins);
+                    _surface.Margins(sin, cos, _skin.RadiusAt(sin, cos), margins);
                     (low, high) = margins[k] * atLow > 0 ? (middle, high) : (low, middle);
                 }
 
@@ -155,7 +189,7 @@ internal sealed partial class CurveSampler
         {
             double clock = right - here > here - left ? here + (Golden * (right - here)) : here - (Golden * (here - left));
             (double sin, double cos) = Math.SinCos(clock);
-            _surface.Margins(sin, cos, _radius, margins);
+            _surface.Margins(sin, cos, _skin.RadiusAt(sin, cos), margins);
             double value = sign * margins[margin];
             if (double.IsNaN(value))
             {

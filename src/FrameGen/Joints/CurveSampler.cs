@@ -1,9 +1,11 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
 /// <summary>
 /// Samples the line that a cut draws on a skin. The skin is first looked at every 5.6 degrees and at every line that
-/// grazes a mate; where the piece changes between two looks the corner is found by bisection; between corners the curve
-/// is halved until its chords are within the tolerance. Not for use by two threads at once: it keeps its working lists.
+/// grazes a mate, and on both sides of every place where an outline, a mate's or the tube's own, has a corner; where the piece changes
+/// between two looks the corner is found by bisection; between corners the curve is halved until its chords are within the tolerance. Not for use by two threads at once: it keeps its working lists.
 /// </summary>
 internal sealed partial class CurveSampler
 {
@@ -13,8 +15,14 @@ internal sealed partial class CurveSampler
     /// <summary>A jump of t up to this is no step, and vertices this near to each other are one, mm.</summary>
     public const double Coincident = 1e-6;
 
+    /// <summary>Vertices no farther than this from the line of their neighbours are left out, mm.</summary>
+    private const double Straight = 1e-8;
+
     /// <summary>Pieces shorter than this are not looked for, rad: rounding alone can make such.</summary>
     private const double ShortestPiece = 1e-9;
+
+    /// <summary>Places this near to each other where outlines have corners are one, rad.</summary>
+    private const double SameBreak = 1e-11;
 
     private const int Looks = 64;
     private const int LooksAPanel = 4;
@@ -24,14 +32,16 @@ internal sealed partial class CurveSampler
     private const double Golden = 0.38196601125010515;
 
     private readonly List<double> _clocks = new(Looks + 8);
+    private readonly List<double> _breaks = [];
+    private readonly List<double> _across = new(256);
     private readonly List<CutSample> _looks = new(Looks + 8);
     private readonly List<CutSample> _trace = new(256);
     private readonly List<CutSample> _polished = new(256);
     private double[] _margins = [];
 
     private CutSurface _surface = PlaneCut.Square(0);
-    private double _radius;
-    private double _scale;
+    private Outline _skin = new RoundOutline(1);
+    private Outline _outer = new RoundOutline(1);
     private double _tolerance;
 
     /// <summary>
@@ -42,29 +52,29 @@ internal sealed partial class CurveSampler
 
     /// <summary>Samples a curve.</summary>
     /// <param name="surface">The cut.</param>
-    /// <param name="radius">Of the skin, mm; 0 for a rod's axis.</param>
-    /// <param name="outerRadius">Of the developed pattern, mm: x = outer radius × clock.</param>
+    /// <param name="skin">The skin; a point for a rod's axis.</param>
+    /// <param name="outer">The outer skin, round which x of the developed pattern is measured.</param>
     /// <param name="tolerance">Of chords in the developed pattern, mm.</param>
-    public EndCurve Sample(CutSurface surface, double radius, double outerRadius, double tolerance)
+    public EndCurve Sample(CutSurface surface, Outline skin, Outline outer, double tolerance)
     {
-        if (radius <= 0)
+        if (skin.IsPoint)
         {
             double t = surface.At(0, 0);
             return new EndCurve([new CurvePoint(-Math.PI, t), new CurvePoint(Math.PI, t)]);
         }
 
-        Run(surface, radius, outerRadius, tolerance);
+        Run(surface, skin, outer, tolerance);
         Polish();
         return new EndCurve(Vertices());
     }
 
     /// <summary>Finds the corners of a curve alone; <see cref="Trace"/> holds them.</summary>
-    public void FindPieces(CutSurface surface, double radius) => Run(surface, radius, radius, double.PositiveInfinity);
+    public void FindPieces(CutSurface surface, Outline skin) => Run(surface, skin, skin, double.PositiveInfinity);
 
-    private void Run(CutSurface surface, double radius, double outerRadius, double tolerance)
+    private void Run(CutSurface surface, Outline skin, Outline outer, double tolerance)
     {
         // A part is kept back for what the three places looked at on a chord do not show.
-        (_surface, _radius, _scale, _tolerance) = (surface, radius, outerRadius, 0.7 * tolerance);
+        (_surface, _skin, _outer, _tolerance) = (surface, skin, outer, 0.7 * tolerance);
         _trace.Clear();
         Look();
         AddShortPieces();
@@ -95,7 +105,7 @@ internal sealed partial class CurveSampler
 
         for (int i = first + 1; i <= last; i++)
         {
-            if (_looks[i].Piece != _looks[first].Piece || !_looks[i].OnGrid)
+            if (!_looks[i].Continues(_looks[first]) || !_looks[i].OnGrid)
             {
                 return false;
             }
@@ -107,13 +117,19 @@ internal sealed partial class CurveSampler
     private CutSample Evaluate(double clock)
     {
         (double sin, double cos) = Math.SinCos(clock);
-        double t = _surface.Cut(sin, cos, _radius, out int piece);
-        return new CutSample(clock, t, piece, false);
+        double t = _surface.Cut(sin, cos, _skin.RadiusAt(sin, cos), out int piece);
+        return new CutSample(clock, _outer.DistanceAt(clock, sin, cos), t, piece, OnGrid: false, AfterBreak: false);
     }
 
     // Adds everything after a up to b; where the piece changes between them, the corner too.
     private void Connect(in CutSample a, in CutSample b, int depth)
     {
+        if (b.AfterBreak)
+        {
+            _trace.Add(b);
+            return;
+        }
+
         if (a.Piece == b.Piece)
         {
             double quarter = (b.Clock - a.Clock) / 4;
@@ -195,9 +211,9 @@ internal sealed partial class CurveSampler
     // Distance of a point from a chord in the developed pattern.
     private bool IsNear(in CutSample a, in CutSample point, in CutSample b)
     {
-        double x = _scale * (b.Clock - a.Clock);
+        double x = b.Across - a.Across;
         double y = b.T - a.T;
-        double px = _scale * (point.Clock - a.Clock);
+        double px = point.Across - a.Across;
         double py = point.T - a.T;
         double cross = (x * py) - (y * px);
         return cross * cross <= _tolerance * _tolerance * ((x * x) + (y * y));
@@ -206,28 +222,30 @@ internal sealed partial class CurveSampler
     private List<CurvePoint> Vertices()
     {
         List<CurvePoint> points = new(_trace.Count + 1);
+        _across.Clear();
         foreach (CutSample sample in _trace)
         {
             double clock = Math.Abs(Math.Abs(sample.Clock) - Math.PI) < 1e-9 ? Math.CopySign(Math.PI, sample.Clock) : sample.Clock;
-            Append(points, new CurvePoint(clock, sample.T));
+            Append(points, new CurvePoint(clock, sample.T), sample.Across);
         }
 
         // The seam: the curve closes on itself, by a step where one falls there.
-        Append(points, new CurvePoint(Math.PI, points[0].T));
+        Append(points, new CurvePoint(Math.PI, points[0].T), _outer.Perimeter / 2);
         if (points.Count > 2 && points[^2].Clock == points[^1].Clock)
         {
             points[^2] = new CurvePoint(Math.PI, points[^2].T);
         }
 
         points[^1] = new CurvePoint(Math.PI, points[0].T);
-        return points;
+        return _skin.Breaks.Count > 0 ? WithoutStraightOnes(points) : points;
     }
 
-    private void Append(List<CurvePoint> points, CurvePoint point)
+    private void Append(List<CurvePoint> points, CurvePoint point, double across)
     {
-        if (points.Count == 0 || _scale * (point.Clock - points[^1].Clock) > Coincident)
+        if (points.Count == 0 || across - _across[^1] > Coincident)
         {
             points.Add(point);
+            _across.Add(across);
             return;
         }
 
@@ -245,13 +263,47 @@ internal sealed partial class CurveSampler
         else
         {
             points.Add(new CurvePoint(clock, point.T));
+            _across.Add(_across[^1]);
         }
+    }
+
+    // Flats that meet flats give straight lines: what lies on one says nothing.
+    private List<CurvePoint> WithoutStraightOnes(List<CurvePoint> points)
+    {
+        List<CurvePoint> kept = [points[0]];
+        int last = 0;
+        for (int i = 1; i < points.Count - 1; i++)
+        {
+            bool straight = true;
+            for (int k = last + 1; k <= i && straight; k++)
+            {
+                double x = _across[i + 1] - _across[last], y = points[i + 1].T - points[last].T;
+                double px = _across[k] - _across[last], py = points[k].T - points[last].T;
+                double cross = (x * py) - (y * px);
+                straight = cross * cross <= Straight * Straight * ((x * x) + (y * y));
+            }
+
+            if (!straight)
+            {
+                kept.Add(points[i]);
+                last = i;
+            }
+        }
+
+        kept.Add(points[^1]);
+        return kept;
     }
 }
 
 /// <summary>A wall line's cut and the piece it lies on.</summary>
 /// <param name="Clock">rad.</param>
+/// <param name="Across">x in the developed pattern, mm.</param>
 /// <param name="T">mm.</param>
 /// <param name="Piece">As <see cref="CutSurface.Cut"/> names it.</param>
 /// <param name="OnGrid">True at the regular looks.</param>
-internal readonly record struct CutSample(double Clock, double T, int Piece, bool OnGrid);
+/// <param name="AfterBreak">True right after a place where an outline has a corner.</param>
+internal readonly record struct CutSample(double Clock, double Across, double T, int Piece, bool OnGrid, bool AfterBreak)
+{
+    /// <summary>True where the curve is smooth from the sample before it to this one.</summary>
+    public bool Continues(in CutSample before) => Piece == before.Piece && !AfterBreak;
+}

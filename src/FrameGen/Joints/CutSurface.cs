@@ -1,3 +1,5 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
 /// <summary>A cut that can say which of its smooth pieces a wall line ends on, so that corners can be found exactly.</summary>
@@ -38,8 +40,16 @@ internal abstract class CutSurface : EndSurface
     {
     }
 
-    /// <summary>Adds the clock angles, rad in (−π, π], at which a wall line grazes a mate.</summary>
-    public virtual void AddTangents(double radius, List<double> clocks)
+    /// <summary>Adds the clock angles, rad in (−π, π], at which a wall line of a skin grazes a mate.</summary>
+    public virtual void AddTangents(Outline skin, List<double> clocks)
+    {
+    }
+
+    /// <summary>
+    /// Adds the clock angles, rad in (−π, π], at which the cut of a skin may have a corner because an outline has: a mate's, or the
+    /// tube's own.
+    /// </summary>
+    public virtual void AddBreaks(Outline skin, List<double> clocks)
     {
     }
 

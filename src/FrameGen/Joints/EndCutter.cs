@@ -15,12 +15,10 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
     {
         Tube tube = model.Tubes[end.Id.Tube];
         Section section = sections[tube.Group];
-        double outer = section.OuterSize / 2;
-        double inner = outer - section.Wall;
-        return end.Kind == CutKind.Cope ? Cope(end, tube, inner, outer) : Plane(end, inner, outer);
+        return end.Kind == CutKind.Cope ? Cope(end, tube, section.Bore, section.Outline) : Plane(end, section.Bore, section.Outline);
     }
 
-    private CutterEnd Plane(EndPlan end, double inner, double outer)
+    private CutterEnd Plane(EndPlan end, Outline inner, Outline outer)
     {
         PlaneCut plane = end.Kind == CutKind.Square ? PlaneCut.Square(end.Extension) : PlaneCut.On(end.Limit, end.Frame);
         IReadOnlyList<Contact> contacts = [];
@@ -38,7 +36,7 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
         return new CutterEnd(cut, EndMoments.Of(plane, inner, outer), false);
     }
 
-    private CutterEnd Cope(EndPlan end, Tube tube, double inner, double outer)
+    private CutterEnd Cope(EndPlan end, Tube tube, Outline inner, Outline outer)
     {
         ContourCope asMet = new(end.Mates, tube.Length / 2);
         bool[] touched = Touching.All(asMet, inner, outer, _sampler, out bool partlyMissing);
@@ -59,10 +57,10 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
         List<double> corners = [];
         AddCorners(corners);
         EndCurve innerCurve = outerCurve;
-        if (!surface.IsRadial || inner <= 0)
+        if (!surface.IsRadial || inner.IsPoint)
         {
             innerCurve = _sampler.Sample(surface, inner, outer, tolerance);
-            if (inner > 0)
+            if (!inner.IsPoint)
             {
                 AddCorners(corners);
             }
@@ -77,7 +75,7 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
         IReadOnlyList<CutSample> trace = _sampler.Trace;
         for (int i = 1; i < trace.Count; i++)
         {
-            if (trace[i].Piece != trace[i - 1].Piece)
+            if (!trace[i].Continues(trace[i - 1]))
             {
                 corners.Add(trace[i].Clock);
             }

@@ -16,25 +16,26 @@ internal readonly record struct EndMoments(double T, double HalfSquare, double C
     private const int DeepestHalving = 16;
 
     /// <summary>Of a plane: closed forms.</summary>
-    public static EndMoments Of(PlaneCut plane, double inner, double outer)
+    public static EndMoments Of(PlaneCut plane, Outline inner, Outline outer)
     {
-        double area = Math.PI * (outer - inner) * (outer + inner);
-        double second = area * ((outer * outer) + (inner * inner)) / 4;
-        double slopes = (plane.SlopeCos * plane.SlopeCos) + (plane.SlopeSin * plane.SlopeSin);
+        double area = outer.Area - inner.Area;
+        double secondX = outer.SecondMomentX - inner.SecondMomentX;
+        double secondY = outer.SecondMomentY - inner.SecondMomentY;
+        double squares = (plane.SlopeCos * plane.SlopeCos * secondX) + (plane.SlopeSin * plane.SlopeSin * secondY);
         return new EndMoments(
             plane.OnAxis * area,
-            ((plane.OnAxis * plane.OnAxis * area) + (slopes * second)) / 2,
-            plane.SlopeCos * second,
-            plane.SlopeSin * second,
-            plane.OnAxis * 2 * Math.PI * outer);
+            ((plane.OnAxis * plane.OnAxis * area) + squares) / 2,
+            plane.SlopeCos * secondX,
+            plane.SlopeSin * secondY,
+            plane.OnAxis * outer.Perimeter);
     }
 
     /// <summary>Of any cut, by Gauss–Legendre panels between its corners, halved until two rules agree.</summary>
     /// <param name="surface">The cut.</param>
-    /// <param name="inner">mm.</param>
-    /// <param name="outer">mm.</param>
-    /// <param name="corners">Clock angles of corners, rad; any order.</param>
-    public static EndMoments Of(CutSurface surface, double inner, double outer, IEnumerable<double> corners)
+    /// <param name="inner">The bore.</param>
+    /// <param name="outer">The outer skin.</param>
+    /// <param name="corners">Clock angles of corners of the cut on either skin, rad; any order.</param>
+    public static EndMoments Of(CutSurface surface, Outline inner, Outline outer, IEnumerable<double> corners)
     {
         // No panel longer than an eighth of a turn: a saddle is then smooth within each.
         List<double> breaks = [.. corners];
@@ -60,15 +61,16 @@ internal readonly record struct EndMoments(double T, double HalfSquare, double C
     public static EndMoments operator +(in EndMoments a, in EndMoments b) =>
         new(a.T + b.T, a.HalfSquare + b.HalfSquare, a.Cos + b.Cos, a.Sin + b.Sin, a.Skin + b.Skin);
 
-    private static EndMoments Panel(CutSurface surface, double inner, double outer, double from, double to, int depth)
+    private static EndMoments Panel(CutSurface surface, Outline inner, Outline outer, double from, double to, int depth)
     {
         EndMoments fine = Panel(surface, inner, outer, from, to, GaussLegendre.Twelve);
         EndMoments coarse = Panel(surface, inner, outer, from, to, GaussLegendre.Eight);
 
         // The coarse rule's error, held to 1e-8 of a ring as long as the tube is thick, bounds the fine one's with room.
-        double ring = Math.PI * (outer - inner) * (outer + inner) * outer;
+        double half = Math.Max(outer.HalfHeight, outer.HalfWidth);
+        double ring = (outer.Area - inner.Area) * half;
         double allowed = 1e-8 * ring * Math.Max((to - from) / (2 * Math.PI), 1e-3);
-        double size = Math.Max(outer, Math.Abs(fine.HalfSquare) / (ring + Math.Abs(fine.T)));
+        double size = Math.Max(half, Math.Abs(fine.HalfSquare) / (ring + Math.Abs(fine.T)));
         if (depth >= DeepestHalving ||
             (Math.Abs(fine.T - coarse.T) <= allowed && Math.Abs(fine.HalfSquare - coarse.HalfSquare) <= allowed * size))
         {
@@ -79,7 +81,7 @@ internal readonly record struct EndMoments(double T, double HalfSquare, double C
         return Panel(surface, inner, outer, from, middle, depth + 1) + Panel(surface, inner, outer, middle, to, depth + 1);
     }
 
-    private static EndMoments Panel(CutSurface surface, double inner, double outer, double from, double to, GaussRule rule)
+    private static EndMoments Panel(CutSurface surface, Outline inner, Outline outer, double from, double to, GaussRule rule)
     {
         double width = to - from;
         (double t, double half, double cosSum, double sinSum, double skin) = (0, 0, 0, 0, 0);
@@ -88,13 +90,14 @@ internal readonly record struct EndMoments(double T, double HalfSquare, double C
             (double x, double slope) = GaussLegendre.Smooth(rule.Nodes[i]);
             double weight = rule.Weights[i] * slope * width;
             (double sin, double cos) = Math.SinCos(from + (width * x));
-            double onSkin = surface.Cut(sin, cos, outer, out _);
-            WallMoments wall = surface.IsRadial ? WallMoments.Of(onSkin, inner, outer) : WallMoments.Of(surface, sin, cos, inner, outer);
+            (double low, double high) = (inner.RadiusAt(sin, cos), outer.RadiusAt(sin, cos));
+            double onSkin = surface.Cut(sin, cos, high, out _);
+            WallMoments wall = surface.IsRadial ? WallMoments.Of(onSkin, low, high) : WallMoments.Of(surface, sin, cos, low, high);
             t += weight * wall.T;
             half += weight * wall.HalfSquare;
             cosSum += weight * cos * wall.Radius;
             sinSum += weight * sin * wall.Radius;
-            skin += weight * outer * onSkin;
+            skin += weight * outer.SpeedAt(sin, cos) * onSkin;
         }
 
         return new EndMoments(t, half, cosSum, sinSum, skin);

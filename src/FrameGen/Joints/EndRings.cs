@@ -1,6 +1,8 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
-/// <summary>The circles in the wall along which a cut face is meshed, outer skin first, and the cut's line on each.</summary>
+/// <summary>The rings in the wall along which a cut face is meshed, outer skin first, and the cut's line on each.</summary>
 internal sealed class EndRings
 {
     private const int MostTubeRings = 16;
@@ -10,31 +12,31 @@ internal sealed class EndRings
     private const double ConeShare = 0.02;
 
     private readonly CutSurface _surface;
-    private readonly double _inner;
+    private readonly Outline _inner;
 
-    private EndRings(CutSurface surface, double inner, IReadOnlyList<double> radii, IReadOnlyList<EndCurve> curves) =>
-        (_surface, _inner, Radii, Curves) = (surface, inner, radii, curves);
+    private EndRings(CutSurface surface, Outline inner, IReadOnlyList<Outline> rings, IReadOnlyList<EndCurve> curves) =>
+        (_surface, _inner, Rings, Curves) = (surface, inner, rings, curves);
 
-    /// <summary>From the outer skin inwards, mm; the last is the inner skin, or for a rod the ring round its axis.</summary>
-    public IReadOnlyList<double> Radii { get; }
+    /// <summary>From the outer skin inwards; the last is the bore, or for a rod the ring round its axis.</summary>
+    public IReadOnlyList<Outline> Rings { get; }
 
     /// <summary>The cut on each ring, within the mesh's sag.</summary>
     public IReadOnlyList<EndCurve> Curves { get; }
 
     /// <summary>Rings of an end.</summary>
-    public static EndRings Of(EndCut cut, double inner, double outer, double sag)
+    public static EndRings Of(EndCut cut, Outline inner, Outline outer, double sag)
     {
         CutSurface surface = cut.Surface as CutSurface
             ?? throw new ArgumentException("A mesh needs the cut of a coped frame.", nameof(cut));
         CurveSampler sampler = new();
-        List<double> radii = Choose(surface, inner, outer, sag);
-        EndCurve[] curves = new EndCurve[radii.Count];
+        List<Outline> rings = Choose(surface, inner, outer, sag);
+        EndCurve[] curves = new EndCurve[rings.Count];
         for (int i = 0; i < curves.Length; i++)
         {
-            curves[i] = surface.IsRadial && i > 0 ? curves[0] : sampler.Sample(surface, radii[i], outer, sag);
+            curves[i] = surface.IsRadial && i > 0 ? curves[0] : sampler.Sample(surface, rings[i], outer, sag);
         }
 
-        return new EndRings(surface, inner, radii, curves);
+        return new EndRings(surface, inner, rings, curves);
     }
 
     /// <summary>The rings as vertices of a mesh.</summary>
@@ -43,60 +45,61 @@ internal sealed class EndRings
     /// <param name="along">From t to the distance along the tube.</param>
     public EndLoops Loops(Columns columns, MeshBuilder builder, Func<double, double> along)
     {
-        Loop[] rings = new Loop[Radii.Count];
+        Loop[] rings = new Loop[Rings.Count];
         for (int i = 0; i < rings.Length; i++)
         {
-            double radius = Radii[i];
-            (double[] before, double[] after) = columns.Values(Curves[i], clock => _surface.At(clock, radius));
-            rings[i] = builder.AddLoop(radius, before, after, along);
+            Outline ring = Rings[i];
+            (double[] before, double[] after) = columns.Values(Curves[i], clock => _surface.At(clock, ring));
+            rings[i] = builder.AddLoop(ring, before, after, along);
         }
 
-        int? apex = _inner > 0 ? null : builder.AddOnAxis(along(_surface.At(0, 0)));
+        int? apex = !_inner.IsPoint ? null : builder.AddOnAxis(along(_surface.At(0, 0)));
         return new EndLoops(rings, apex);
     }
 
-    private static List<double> Choose(CutSurface surface, double inner, double outer, double sag)
+    private static List<Outline> Choose(CutSurface surface, Outline inner, Outline outer, double sag)
     {
         if (surface is PlaneCut)
         {
-            return inner > 0 ? [outer, inner] : [outer];
+            return inner.IsPoint ? [outer] : [outer, inner];
         }
 
         if (surface.IsRadial)
         {
-            return [outer, inner > 0 ? inner : ConeShare * outer];
+            return [outer, inner.IsPoint ? new RoundOutline(ConeShare * outer.HalfHeight) : inner];
         }
 
         // Twice as many panels leave a quarter of the bulge; a rod keeps its innermost ring for the cone to its axis.
-        int most = inner > 0 ? MostTubeRings : MostRodRings;
+        int most = inner.IsPoint ? MostRodRings : MostTubeRings;
         int panels = 1;
         while (panels < most && Bulge(surface, inner, outer, panels) > sag)
         {
             panels *= 2;
         }
 
-        List<double> radii = [];
-        for (int i = 0; i < panels || (inner > 0 && i == panels); i++)
+        List<Outline> rings = [outer];
+        for (int i = 1; i < panels || (!inner.IsPoint && i == panels); i++)
         {
-            radii.Add(i == panels ? inner : outer - ((outer - inner) * i / panels));
+            rings.Add(i == panels ? inner : outer.Towards(inner, (double)i / panels));
         }
 
-        return radii;
+        return rings;
     }
 
     // Farthest distance of the face from straight lines through the wall, measured square to them.
-    private static double Bulge(CutSurface surface, double inner, double outer, int panels)
+    private static double Bulge(CutSurface surface, Outline inner, Outline outer, int panels)
     {
         const int Looks = 96;
         double worst = 0;
         for (int k = 0; k < Looks; k++)
         {
             (double sin, double cos) = Math.SinCos(2 * Math.PI * (k + 0.5) / Looks);
-            double low = inner;
+            (double from, double to) = (inner.RadiusAt(sin, cos), outer.RadiusAt(sin, cos));
+            double low = from;
             double atLow = surface.Cut(sin, cos, low, out int lowPiece);
             for (int i = 1; i <= panels; i++)
             {
-                double high = inner + ((outer - inner) * i / panels);
+                double high = from + ((to - from) * i / panels);
                 double atHigh = surface.Cut(sin, cos, high, out int highPiece);
                 double atMiddle = surface.Cut(sin, cos, (low + high) / 2, out int piece);
                 if (piece == lowPiece && piece == highPiece)
@@ -104,7 +107,7 @@ internal sealed class EndRings
                     double slope = (atHigh - atLow) / (high - low);
                     worst = Math.Max(worst, Math.Abs(atMiddle - ((atLow + atHigh) / 2)) / Math.Sqrt(1 + (slope * slope)));
                 }
-                else if (i == 1 && inner <= 0)
+                else if (i == 1 && from <= 0)
                 {
                     // A corner or a step beside a rod's axis, where the face is closed by a cone: keep that small.
                     return double.PositiveInfinity;

@@ -17,6 +17,26 @@ public static class JointFit
     public static IReadOnlyList<FitProblem> Check(FrameModel model, NodeJoint joint, IReadOnlyList<Section> sections) =>
         Check(model, JointPlan.Make(model, joint, sections), sections);
 
+    /// <summary>
+    /// Half the widths of an end and of its seat, mm, measured along the common normal of the two axes: where the end's and the axes'
+    /// offset are together no more than the seat's, every wall line lands on metal.
+    /// </summary>
+    /// <param name="end">The end that is cut.</param>
+    /// <param name="section">Of its tube.</param>
+    /// <param name="seat">Axis of the seat.</param>
+    /// <param name="seatAxes">The seat's local axes.</param>
+    /// <param name="seatSection">Of the seat.</param>
+    internal static (double Own, double Seat) HalfWidths(
+        in EndFrame end, Section section, Line3 seat, TubeAxes seatAxes, Section seatSection)
+    {
+        Vector3 normal = Line3.CommonNormal(end.Axis, seat) ?? end.Axes.Z;
+        return (section.Outline.HalfWidthAlong(end.Axes.InSection(normal)), seatSection.Outline.HalfWidthAlong(seatAxes.InSection(normal)));
+    }
+
+    /// <summary>Likewise, of whole tubes.</summary>
+    internal static (double Own, double Seat) HalfWidths(Tube tube, End end, Section section, Tube seat, Section seatSection) => HalfWidths(
+        new EndFrame(tube[end].Point, tube.Into(end), tube.Axes), section, new Line3(seat.From.Point, seat.Axes.X), seat.Axes, seatSection);
+
     /// <summary>What stands in the way of a planned joint.</summary>
     internal static IReadOnlyList<FitProblem> Check(FrameModel model, JointPlan plan, IReadOnlyList<Section> sections)
     {
@@ -25,7 +45,7 @@ public static class JointFit
         {
             Tube tube = model.Tubes[end.Id.Tube];
             Section section = sections[tube.Group];
-            if (ReferenceEquals(end, plan.Ends[0]) && plan.RunOutLength > section.OuterSize + RoundOutline.Graze)
+            if (ReferenceEquals(end, plan.Ends[0]) && plan.RunOutLength > section.OuterSize + Outline.Graze)
             {
                 Add(new FitProblem(FitProblemKind.RunOutTooLong, end.Id, plan.RunOutAsker, plan.RunOutLength, section.OuterSize));
             }
@@ -35,21 +55,20 @@ public static class JointFit
                 continue;
             }
 
-            double outer = section.OuterSize / 2;
-            double inner = outer - section.Wall;
             ContourCope cope = new(end.Mates, tube.Length / 2);
-            int seat = Touching.Seat(cope, inner, outer);
+            int seat = Touching.Seat(cope, section.Bore, section.Outline);
             if (seat < 0)
             {
-                (Mate missed, double distance) = Touching.Nearest(cope, inner, outer);
+                (Mate missed, double distance) = Touching.Nearest(cope, section.Bore, section.Outline, end.Frame);
                 Add(new FitProblem(FitProblemKind.Misses, end.Id, missed.Tube, distance, 0));
                 continue;
             }
 
             Mate mate = end.Mates[seat];
-            double needed = outer + mate.Axis.DistanceTo(new Line3(end.Frame.Point, end.Frame.Into));
-            double allowed = sections[model.Tubes[mate.Tube].Group].OuterSize / 2;
-            if (needed > allowed + RoundOutline.Graze && !tube[end.Id.End].Wrap)
+            (double half, double allowed) = HalfWidths(
+                end.Frame, section, mate.Axis, model.Tubes[mate.Tube].Axes, sections[model.Tubes[mate.Tube].Group]);
+            double needed = half + mate.Axis.DistanceTo(end.Frame.Axis);
+            if (needed > allowed + Outline.Graze && !tube[end.Id.End].Wrap)
             {
                 Add(new FitProblem(FitProblemKind.WiderThanSeat, end.Id, mate.Tube, needed, allowed));
             }

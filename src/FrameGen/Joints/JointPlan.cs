@@ -30,7 +30,7 @@ internal sealed class JointPlan
         if (joint.Through is { } through)
         {
             Tube tube = model.Tubes[through];
-            before.Add(new MateSource(through, new Line3(tube.From.Point, tube.Axes.X), Radius(through), null));
+            before.Add(new MateSource(through, new Line3(tube.From.Point, tube.Axes.X), tube.Axes, Skin(through), null));
         }
 
         for (int i = 0; i < count; i++)
@@ -39,7 +39,6 @@ internal sealed class JointPlan
             Tube tube = model.Tubes[id.Tube];
             TubeEnd end = tube[id.End];
             EndFrame frame = Frame(tube, id.End);
-            Line3 axis = new(frame.Point, frame.Into);
             HalfSpace limit = new(frame.Point, frame.Into);
             if (joint.Corner == Corner.Miter && i < 2)
             {
@@ -59,20 +58,18 @@ internal sealed class JointPlan
                 Mate[] mates = new Mate[before.Count];
                 for (int m = 0; m < mates.Length; m++)
                 {
-                    MateSource source = before[m];
-                    mates[m] = new Mate(
-                        source.Tube, source.Axis, source.Limit is null, new RoundOutline(source.Radius + end.Gap), source.Limit, frame);
+                    mates[m] = new Mate(before[m], end.Gap, frame);
                 }
 
                 ends[i] = new EndPlan(id, CutKind.Cope, frame, limit, 0, mates, null);
             }
 
-            before.Add(new MateSource(id.Tube, axis, Radius(id.Tube), limit));
+            before.Add(new MateSource(id.Tube, frame.Axis, tube.Axes, Skin(id.Tube), limit));
         }
 
         return new JointPlan(ends, runOut, asker);
 
-        double Radius(int tube) => sections[model.Tubes[tube].Group].OuterSize / 2;
+        Outline Skin(int tube) => sections[model.Tubes[tube].Group].Outline;
     }
 
     private static EndFrame Frame(Tube tube, End end) => new(tube[end].Point, tube.Into(end), tube.Axes);
@@ -100,8 +97,8 @@ internal sealed class JointPlan
             return (0, -1);
         }
 
-        Line3 axis = new(first[id.End].Point, first.Into(id.End));
-        double radius = sections[first.Group].OuterSize / 2;
+        EndFrame frame = Frame(first, id.End);
+        Outline skin = sections[first.Group].Outline;
         (double length, int asker) = (0, -1);
         for (int i = 1; i < joint.Ends.Count; i++)
         {
@@ -112,8 +109,7 @@ internal sealed class JointPlan
                 continue;
             }
 
-            Line3 otherAxis = new(tube[other.End].Point, tube.Into(other.End));
-            double needed = RunOut.Needed(axis, radius, otherAxis, sections[tube.Group].OuterSize / 2);
+            double needed = RunOut.Needed(frame, skin, Frame(tube, other.End), sections[tube.Group].Outline);
             if (needed > length)
             {
                 (length, asker) = (needed, other.Tube);
@@ -122,8 +118,6 @@ internal sealed class JointPlan
 
         return (length, asker);
     }
-
-    private readonly record struct MateSource(int Tube, Line3 Axis, double Radius, HalfSpace? Limit);
 }
 
 /// <summary>How one end is cut.</summary>

@@ -42,8 +42,10 @@ internal static class JointReport
 
             foreach (Mate mate in end.Mates)
             {
-                double distance = mate.Axis.DistanceTo(new Line3(end.Frame.Point, end.Frame.Into));
-                if (mate.Swallows && distance < mate.Radius + (sections[tube.Group].OuterSize / 2))
+                (double own, double other) = JointFit.HalfWidths(
+                    end.Frame, sections[tube.Group], mate.Axis, model.Tubes[mate.Tube].Axes, sections[model.Tubes[mate.Tube].Group]);
+                double distance = mate.Axis.DistanceTo(end.Frame.Axis);
+                if (mate.Swallows && distance < own + other + place.Gap)
                 {
                     diagnostics.Error(place.At, $"{name}: runs along inside {model.Tubes[mate.Tube].Name}, to which it should be coped; one of the two has to go another way");
                 }
@@ -142,9 +144,12 @@ internal static class JointReport
             return;
         }
 
-        double half = sections[tube.Group].OuterSize / 2;
-        double reach = half + (sections[partner.Group].OuterSize / 2);
-        double distance = new Line3(end.Frame.Point, end.Frame.Into).DistanceTo(axis);
+        (double own, double others) = JointFit.HalfWidths(
+            end.Frame, sections[tube.Group], axis, partner.Axes, sections[partner.Group]);
+        double distance = end.Frame.Axis.DistanceTo(axis);
+        double reach = own + others;
+        Vector3 inPlane = end.Frame.Into.Cross(axis.Direction).Cross(end.Frame.Into).Normalized();
+        double half = sections[tube.Group].Outline.HalfWidthAlong(tube.Axes.InSection(inPlane));
         if (distance > reach)
         {
             diagnostics.Error(at, $"{name}: can't be mitred with {partner.Name}: the two miss each other by {distance - reach:0.0##} mm");

@@ -31,14 +31,14 @@ internal sealed partial class Mate
                 double slope = mate._depthSlope;
                 if (Math.Abs(slope) < 1e-12)
                 {
-                    if (depth < -RoundOutline.Graze)
+                    if (depth < -Outline.Graze)
                     {
                         return false;
                     }
                 }
                 else if (slope > 0)
                 {
-                    if (depth + (slope * t) < -RoundOutline.Graze)
+                    if (depth + (slope * t) < -Outline.Graze)
                     {
                         return false;
                     }
@@ -47,7 +47,7 @@ internal sealed partial class Mate
                 }
                 else
                 {
-                    if (depth + (slope * begin) < -RoundOutline.Graze)
+                    if (depth + (slope * begin) < -Outline.Graze)
                     {
                         return false;
                     }
@@ -104,7 +104,7 @@ internal sealed partial class Mate
             int topPlace = top <= inner ? 0 : top >= outer ? 1 : top <= low || top >= high ? 4 : 2;
             if (!endsHere)
             {
-                (t, place) = (End(top), topPlace);
+                (t, place) = (End(top), topPlace + (10 * PieceAt(top)));
                 return true;
             }
 
@@ -142,8 +142,9 @@ internal sealed partial class Mate
             if (!Chord(radius, out double begin, out double end))
             {
                 double across = mate._w2 + (w2Slope * radius);
-                double along = mate.IsParallel ? mate._w1 + (w1Slope * radius) : 0;
-                return Math.Sqrt((across * across) + (along * along)) - mate.Radius;
+                return mate.IsParallel
+                    ? mate.DistanceOutside(across, mate._w1 + (w1Slope * radius))
+                    : Math.Abs(across) - mate.HalfWidth;
             }
 
             if (mate._limit is not null)
@@ -161,30 +162,33 @@ internal sealed partial class Mate
             return Math.Max(0, begin - middle);
         }
 
+        /// <summary>Which smooth piece of the mate's outline the wall line at ρ leaves by.</summary>
+        public int PieceAt(double radius) => mate._view.PieceAt(mate._w2 + (w2Slope * radius));
+
         private bool Chord(double radius, out double begin, out double end)
         {
             double across = mate._w2 + (w2Slope * radius);
+            bool reaches = mate._view.Reaches(across);
+            (double near, double far) = mate._view.Chord(across);
             if (mate.IsParallel)
             {
                 double along = mate._w1 + (w1Slope * radius);
-                bool inside = mate._outline.HalfChord(across) >= Math.Abs(along) - RoundOutline.Graze;
                 (begin, end) = (double.NegativeInfinity, double.PositiveInfinity);
-                return inside;
+                return reaches && along >= near - Outline.Graze && along <= far + Outline.Graze;
             }
 
-            double half = mate._outline.HalfChord(across);
             double centre = -mate._w1 - (w1Slope * radius);
-            (begin, end) = ((centre - half) / mate._sine, (centre + half) / mate._sine);
-            return half >= 0;
+            (begin, end) = ((centre + near) / mate._sine, (centre + far) / mate._sine);
+            return reaches;
         }
 
         private double Begin(double radius) =>
-            (-mate._w1 - (w1Slope * radius) - Math.Max(0, mate._outline.HalfChord(mate._w2 + (w2Slope * radius)))) / mate._sine;
+            (-mate._w1 - (w1Slope * radius) + mate._view.Near(mate._w2 + (w2Slope * radius))) / mate._sine;
 
         private double End(double radius) =>
-            (-mate._w1 - (w1Slope * radius) + Math.Max(0, mate._outline.HalfChord(mate._w2 + (w2Slope * radius)))) / mate._sine;
+            (-mate._w1 - (w1Slope * radius) + mate._view.Far(mate._w2 + (w2Slope * radius))) / mate._sine;
 
-        // Where t₂ has its summit: w₂ = −R w₁′/√(w₁′² + w₂′²) on the side of w₂′; NaN where t₂ is a straight line.
+        // Where t₂ has its summit: where the outline's normal is square to the ray; NaN where t₂ is a straight line.
         private double Summit()
         {
             if (Math.Abs(w2Slope) < 1e-14)
@@ -192,15 +196,14 @@ internal sealed partial class Mate
                 return double.NaN;
             }
 
-            double steep = Math.Sqrt((w1Slope * w1Slope) + (w2Slope * w2Slope));
-            double across = -Math.Sign(w2Slope) * mate.Radius * w1Slope / steep;
-            return (across - mate._w2) / w2Slope;
+            Point2 normal = new(-Math.Sign(w2Slope) * w1Slope, Math.Abs(w2Slope));
+            return (mate._view.Farthest(normal) - mate._w2) / w2Slope;
         }
 
         // Keeps the ρ whose line is no farther across than the radius.
         private bool Across(ref double low, ref double high)
         {
-            double reach = mate.Radius + RoundOutline.Graze;
+            double reach = mate.HalfWidth + Outline.Graze;
             return KeepPositive(reach - mate._w2, -w2Slope, ref low, ref high) &&
                 KeepPositive(reach + mate._w2, w2Slope, ref low, ref high);
         }
@@ -213,11 +216,11 @@ internal sealed partial class Mate
             (limit0, limit1) = (0, 0);
             if (Math.Abs(slope) < 1e-12)
             {
-                return KeepPositive(mate._depth + RoundOutline.Graze, depthSlope, ref low, ref high);
+                return KeepPositive(mate._depth + Outline.Graze, depthSlope, ref low, ref high);
             }
 
             (limit0, limit1) = (-mate._depth / slope, -depthSlope / slope);
-            double graze = RoundOutline.Graze / Math.Abs(slope);
+            double graze = Outline.Graze / Math.Abs(slope);
             return slope < 0
                 ? KeepBelow(limit0 + graze, limit1, false, ref low, ref high)
                 : KeepBelow(limit0 - graze, limit1, true, ref low, ref high) &&
@@ -285,30 +288,27 @@ internal sealed partial class Mate
             return true;
         }
 
-        // Where the line t = line0 + line1 ρ crosses the outline of the region, smaller ρ first, and on which branch:
-        // (line w₁ along it)² + w₂² = R².
+        // Where the line t = line0 + line1 ρ crosses the outline of the region, smaller ρ first, and on which branch. In the mate's
+        // section it is a straight line too.
         private bool Crossings(double line0, double line1, out double first, out double second, out bool firstOnEnd, out bool secondOnEnd)
         {
             double along0 = mate._w1 + (mate._sine * line0);
             double along1 = w1Slope + (mate._sine * line1);
-            double a = (along1 * along1) + (w2Slope * w2Slope);
-            double b = (along0 * along1) + (mate._w2 * w2Slope);
-            double c = (along0 * along0) + (mate._w2 * mate._w2) - (mate.Radius * mate.Radius);
-            double discriminant = (b * b) - (a * c);
-            (first, second, firstOnEnd, secondOnEnd) = (0, 0, false, false);
-            if (!(a > 0 && discriminant >= 0))
+            (firstOnEnd, secondOnEnd) = (false, false);
+            if (!mate._view.Cross(new Point2(mate._w2, along0), new Point2(w2Slope, along1), out first, out second))
             {
                 return false;
             }
 
-            double root = Math.Sqrt(discriminant);
-            double far = b >= 0 ? -b - root : -b + root;
-            double one = far / a;
-            double other = far == 0 ? 0 : c / far;
-            (first, second) = one <= other ? (one, other) : (other, one);
-            firstOnEnd = along0 + (along1 * first) >= 0;
-            secondOnEnd = along0 + (along1 * second) >= 0;
+            firstOnEnd = IsOnFarSide(mate._w2 + (w2Slope * first), along0 + (along1 * first));
+            secondOnEnd = IsOnFarSide(mate._w2 + (w2Slope * second), along0 + (along1 * second));
             return true;
+        }
+
+        private bool IsOnFarSide(double across, double along)
+        {
+            (double near, double far) = mate._view.Chord(across);
+            return along >= (near + far) / 2;
         }
 
         private void Consider(double radius, int candidate, double limit0, double limit1, ref double t, ref int place)
@@ -316,29 +316,23 @@ internal sealed partial class Mate
             double end = End(radius);
             double limit = limit0 + (limit1 * radius);
             double value = Math.Min(end, limit);
-            if (value > t + RoundOutline.Graze)
+            if (value > t + Outline.Graze)
             {
                 // Where the two cross, which of them is lower is rounding and no corner.
-                (t, place) = (value, limit < end && candidate != 3 ? candidate + 5 : candidate);
+                (t, place) = (value, limit < end && candidate != 3 ? candidate + 5 : candidate + (10 * PieceAt(radius)));
             }
         }
 
         // Axes that run along each other: the lines inside the outline all stop on the limit.
         private bool TopAlong(ref double low, ref double high, ref double t, ref int place)
         {
-            double a = (w1Slope * w1Slope) + (w2Slope * w2Slope);
-            double b = (mate._w1 * w1Slope) + (mate._w2 * w2Slope);
-            double reach = mate.Radius + RoundOutline.Graze;
-            double c = (mate._w1 * mate._w1) + (mate._w2 * mate._w2) - (reach * reach);
-            double discriminant = (b * b) - (a * c);
-            if (discriminant < 0)
+            OutlineView grazed = mate._outline.Grown(Outline.Graze).Seen(mate._along, mate._across);
+            if (!grazed.Cross(new Point2(mate._w2, mate._w1), new Point2(w2Slope, w1Slope), out double first, out double second))
             {
                 return false;
             }
 
-            double root = Math.Sqrt(discriminant);
-            low = Math.Max(low, (-b - root) / a);
-            high = Math.Min(high, (-b + root) / a);
+            (low, high) = (Math.Max(low, first), Math.Min(high, second));
             if (!(low <= high) || mate.Swallows)
             {
                 t = double.PositiveInfinity;

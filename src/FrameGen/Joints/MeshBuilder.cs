@@ -10,13 +10,14 @@ internal sealed class MeshBuilder(Columns columns)
     private readonly List<int> _triangles = [];
 
     /// <summary>Adds a ring of vertices, two at a column where the cut steps.</summary>
-    public Loop AddLoop(double radius, double[] before, double[] after, Func<double, double> along)
+    public Loop AddLoop(Outline ring, double[] before, double[] after, Func<double, double> along)
     {
         int count = columns.Clocks.Length;
         Loop loop = new(new int[count], new int[count], new double[count], new double[count]);
         for (int i = 0; i < count; i++)
         {
             (double sin, double cos) = Math.SinCos(columns.Clocks[i]);
+            double radius = ring.RadiusAt(sin, cos);
             Point2 radial = new(radius * cos, radius * sin);
             loop.BeforeAlong[i] = along(before[i]);
             loop.AfterAlong[i] = along(after[i]);

@@ -27,13 +27,15 @@ internal static class Overhang
         EndCut cut = coped[end];
 
         // A radial cut stands off the mate by no more than the wall.
-        double reach = (throughSection.OuterSize / 2) + cut.Gap + section.Wall;
+        double reach = cut.Gap + section.Wall;
         double past = double.NegativeInfinity;
         foreach (CurvePoint point in cut.Outer.Points)
         {
-            Vector3 place = start + (section.OuterSize / 2 * tube.Axes.Radial(point.Clock)) + (point.T * into) - seat.From.Point;
+            (double sin, double cos) = Math.SinCos(point.Clock);
+            Vector3 wall = section.Outline.RadiusAt(sin, cos) * tube.Axes.Radial(point.Clock);
+            Vector3 place = start + wall + (point.T * into) - seat.From.Point;
             double along = place.Dot(seat.Axes.X);
-            if ((place - (along * seat.Axes.X)).Length <= reach)
+            if (throughSection.Outline.Contains(seat.Axes.InSection(place), reach))
             {
                 past = Math.Max(past, Math.Max(through.Start - along, along - through.Stop));
             }

@@ -7,8 +7,11 @@ namespace FrameGen.Joints;
 /// so that nothing needs filing. Lines that meet nothing count with t = 0. A rod's axis, which belongs to every clock
 /// angle, keeps its own t.
 /// </summary>
-internal sealed class RadialCope(ContourCope asMet, double inner, double outer) : CutSurface
+internal sealed class RadialCope(ContourCope asMet, Outline inner, Outline outer) : CutSurface
 {
+    /// <summary>Places in the half-plane of one mate are numbered below this.</summary>
+    private const int PlacesAMate = 100;
+
     private readonly Mate[] _mates = [.. asMet.Mates];
 
     /// <inheritdoc/>
@@ -29,23 +32,24 @@ internal sealed class RadialCope(ContourCope asMet, double inner, double outer) 
             return asMet.Cut(sin, cos, radius, out piece);
         }
 
+        (double from, double to) = (inner.RadiusAt(sin, cos), outer.RadiusAt(sin, cos));
         piece = Nothing;
         double best = double.NegativeInfinity;
         Span<(double Low, double High)> met = stackalloc (double, double)[_mates.Length];
         int count = 0;
         for (int i = 0; i < _mates.Length; i++)
         {
-            if (_mates[i].At(sin, cos).Top(inner, outer, asMet.Middle, out double low, out double high, out double t, out int place))
+            if (_mates[i].At(sin, cos).Top(from, to, asMet.Middle, out double low, out double high, out double t, out int place))
             {
                 met[count++] = (low, high);
-                if (piece == Nothing || t > best + RoundOutline.Graze)
+                if (piece == Nothing || t > best + Outline.Graze)
                 {
-                    (best, piece) = (t, (10 * i) + place);
+                    (best, piece) = (t, (PlacesAMate * i) + place);
                 }
             }
         }
 
-        if (best < 0 && !Covers(met[..count]))
+        if (best < 0 && !Covers(met[..count], from, to))
         {
             piece = Nothing;
             return 0;
@@ -57,38 +61,49 @@ internal sealed class RadialCope(ContourCope asMet, double inner, double outer) 
     /// <inheritdoc/>
     public override void Margins(double sin, double cos, double radius, Span<double> margins)
     {
+        (double from, double to) = (inner.RadiusAt(sin, cos), outer.RadiusAt(sin, cos));
         int next = 0;
         Span<double> tops = stackalloc double[_mates.Length];
         for (int i = 0; i < _mates.Length; i++)
         {
             Mate.HalfPlane plane = _mates[i].At(sin, cos);
-            (margins[next], margins[next + 1]) = plane.LimitDepths(inner);
-            (margins[next + 2], margins[next + 3]) = plane.LimitDepths(outer);
+            (margins[next], margins[next + 1]) = plane.LimitDepths(from);
+            (margins[next + 2], margins[next + 3]) = plane.LimitDepths(to);
             next += 4;
-            tops[i] = plane.Top(inner, outer, asMet.Middle, out _, out _, out double t, out _) ? t : double.NaN;
+            tops[i] = plane.Top(from, to, asMet.Middle, out _, out _, out double t, out _) ? t : double.NaN;
         }
 
         Differences(tops, margins[next..]);
     }
 
     /// <inheritdoc/>
-    public override void AddTangents(double radius, List<double> clocks)
+    public override void AddTangents(Outline skin, List<double> clocks)
     {
         asMet.AddTangents(outer, clocks);
-        if (inner > 0)
+        asMet.AddTangents(inner, clocks);
+    }
+
+    /// <inheritdoc/>
+    public override void AddBreaks(Outline skin, List<double> clocks)
+    {
+        clocks.AddRange(inner.Breaks);
+        clocks.AddRange(outer.Breaks);
+        asMet.AddBreaks(inner, clocks);
+        asMet.AddBreaks(outer, clocks);
+        foreach (Mate mate in _mates)
         {
-            asMet.AddTangents(inner, clocks);
+            mate.AddFlats(clocks);
         }
     }
 
     // Whether every distance from the axis meets something.
-    private bool Covers(Span<(double Low, double High)> met)
+    private static bool Covers(Span<(double Low, double High)> met, double from, double to)
     {
         met.Sort();
-        double reached = inner;
+        double reached = from;
         foreach ((double low, double high) in met)
         {
-            if (low > reached + RoundOutline.Graze)
+            if (low > reached + Outline.Graze)
             {
                 return false;
             }
@@ -96,6 +111,6 @@ internal sealed class RadialCope(ContourCope asMet, double inner, double outer) 
             reached = Math.Max(reached, high);
         }
 
-        return reached >= outer - RoundOutline.Graze;
+        return reached >= to - Outline.Graze;
     }
 }

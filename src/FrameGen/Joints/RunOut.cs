@@ -11,30 +11,61 @@ internal static class RunOut
     private const int Looks = 64;
 
     /// <summary>The run-out one coped tube asks for, mm; negative where it lands short of the end point already.</summary>
-    /// <param name="first">Axis of the first tube, from its end point into it.</param>
-    /// <param name="firstRadius">R, mm, outside, without gap.</param>
-    /// <param name="coped">Axis of the coped tube, from its end point into it.</param>
-    /// <param name="copedRadius">r, mm, outside: no line further in asks for more.</param>
+    /// <param name="first">The end of the first tube.</param>
+    /// <param name="firstSkin">Its outer skin, without gap.</param>
+    /// <param name="coped">The end of the coped tube.</param>
+    /// <param name="copedSkin">Its outer skin: no line further in asks for more.</param>
     /// <returns>Minus infinity where no wall line meets the first tube's side.</returns>
     /// <remarks>
-    /// A wall line at y across the plane of the axes and x in it meets the side at
-    /// z = c + (x + cos φ √(R² − (y + e)²)) / sin φ along the first tube, with c where the common normal of the axes
-    /// stands and e its length. The least z is at x = −√(r² − y²), on the outer skin. With e = 0 it is at y = 0:
-    /// (r − R cos φ) / sin φ; or, for a tube wider than its mate, at the lines that just graze it.
+    /// A wall line at y across the plane of the axes and x in it meets the side at z = c + (x + cos φ v(y + e)) / sin φ along the first
+    /// tube, with c where the common normal of the axes stands, e its length and v the far side of the first tube's outline as those
+    /// lines see it. The least z is at the least x of each y, on the outer skin. Round tubes: x = −√(r² − y²), v = √(R² − (y + e)²);
+    /// with e = 0 the least is at y = 0, (r − R cos φ) / sin φ, or, for a tube wider than its mate, at the lines that just graze it.
     /// </remarks>
-    public static double Needed(Line3 first, double firstRadius, Line3 coped, double copedRadius)
+    public static double Needed(in EndFrame first, Outline firstSkin, in EndFrame coped, Outline copedSkin)
     {
-        Vector3 normal = first.Direction.Cross(coped.Direction);
+        Vector3 normal = first.Into.Cross(coped.Into);
         double sine = normal.Length;
         if (sine < Line3.ParallelSine)
         {
             return double.NegativeInfinity;
         }
 
-        double cosine = first.Direction.Dot(coped.Direction);
+        double cosine = first.Into.Dot(coped.Into);
         Vector3 between = coped.Point - first.Point;
-        double offset = Math.Abs(between.Dot(normal)) / sine;
-        double stand = between.Cross(coped.Direction).Dot(normal) / (sine * sine);
+        double stand = between.Cross(coped.Into).Dot(normal) / (sine * sine);
+        if (firstSkin is RoundOutline firstCircle && copedSkin is RoundOutline copedCircle)
+        {
+            double apart = Math.Abs(between.Dot(normal)) / sine;
+            return (OfCircles(firstCircle.Radius, copedCircle.Radius, apart, cosine) / sine) - stand;
+        }
+
+        Vector3 across = normal / sine;
+        double offset = between.Dot(across);
+        OutlineView side = firstSkin.Seen(first.Axes.InSection(across.Cross(first.Into)), first.Axes.InSection(across));
+        OutlineView skin = copedSkin.Seen(coped.Axes.InSection(across.Cross(coped.Into)), coped.Axes.InSection(across));
+        double low = Math.Max(-skin.HalfWidth, -side.HalfWidth - offset);
+        double high = Math.Min(skin.HalfWidth, side.HalfWidth - offset);
+        if (low > high)
+        {
+            return double.NegativeInfinity;
+        }
+
+        // Between places where an outline has a corner the reach is smooth.
+        List<double> stops = [low, high];
+        stops.AddRange(skin.Breaks.Select(b => -b).Concat(skin.Breaks).Concat(side.Breaks.Select(b => b - offset)).Where(y => y > low && y < high));
+        stops.Sort();
+        double reach = double.NegativeInfinity;
+        for (int i = 1; i < stops.Count; i++)
+        {
+            reach = Math.Max(reach, Largest(y => -skin.Near(y) - (cosine * side.Far(y + offset)), stops[i - 1], stops[i]));
+        }
+
+        return (reach / sine) - stand;
+    }
+
+    private static double OfCircles(double firstRadius, double copedRadius, double offset, double cosine)
+    {
         double low = Math.Max(-copedRadius, -firstRadius - offset);
         double high = Math.Min(copedRadius, firstRadius - offset);
         if (low > high)
@@ -45,10 +76,9 @@ internal static class RunOut
         double Reach(double y) =>
             Root(copedRadius, y) - (cosine * Root(firstRadius, y + offset));
 
-        double reach = offset <= RoundOutline.Graze
+        return offset <= Outline.Graze
             ? Math.Max(Reach(0), Reach(high))
             : Largest(Reach, low, high);
-        return (reach / sine) - stand;
     }
 
     private static double Root(double radius, double across) =>

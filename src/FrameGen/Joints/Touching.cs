@@ -1,3 +1,5 @@
+using FrameGen.Geometry;
+
 namespace FrameGen.Joints;
 
 /// <summary>Which mates an end touches: those that cut at least one of its wall lines, outer or inner, as met.</summary>
@@ -11,12 +13,12 @@ internal static class Touching
     /// A few wall lines nearly always show the first mate at once, and one line is proof. Only where they do not are the
     /// exact pieces of both skins found, so the answer is exact either way.
     /// </remarks>
-    public static int Seat(ContourCope cope, double inner, double outer)
+    public static int Seat(ContourCope cope, Outline inner, Outline outer)
     {
         for (int i = 0; i < QuickLooks; i++)
         {
             (double sin, double cos) = Math.SinCos(Math.PI * (((2.0 * i) / QuickLooks) - 1));
-            cope.Cut(sin, cos, outer, out int piece);
+            cope.Cut(sin, cos, outer.RadiusAt(sin, cos), out int piece);
             if (ContourCope.MateOf(piece) == 0)
             {
                 return 0;
@@ -29,17 +31,17 @@ internal static class Touching
 
     /// <summary>Which mates touch, by their place among the mates.</summary>
     /// <param name="cope">The end, as met.</param>
-    /// <param name="inner">Radius of the inner skin, mm; 0 for a rod, whose inner line is its axis.</param>
-    /// <param name="outer">Radius of the outer skin, mm.</param>
+    /// <param name="inner">The bore; a point for a rod, whose inner line is its axis.</param>
+    /// <param name="outer">The outer skin.</param>
     /// <param name="sampler">Its working lists are used.</param>
     /// <param name="partlyMissing">True where some wall line meets nothing.</param>
-    public static bool[] All(ContourCope cope, double inner, double outer, CurveSampler sampler, out bool partlyMissing)
+    public static bool[] All(ContourCope cope, Outline inner, Outline outer, CurveSampler sampler, out bool partlyMissing)
     {
         bool[] touched = new bool[cope.Mates.Count];
         bool missing = false;
         sampler.FindPieces(cope, outer);
         Collect();
-        if (inner > 0)
+        if (!inner.IsPoint)
         {
             sampler.FindPieces(cope, inner);
             Collect();
@@ -75,15 +77,21 @@ internal static class Touching
     }
 
     /// <summary>The mate that an end which touches nothing comes nearest to, and by how much it misses, mm.</summary>
-    public static (Mate Mate, double Distance) Nearest(ContourCope cope, double inner, double outer)
+    /// <param name="cope">The end, as met.</param>
+    /// <param name="inner">The bore.</param>
+    /// <param name="outer">The outer skin.</param>
+    /// <param name="frame">The end.</param>
+    public static (Mate Mate, double Distance) Nearest(ContourCope cope, Outline inner, Outline outer, in EndFrame frame)
     {
         const int Looks = 360;
         (Mate nearest, double least) = (cope.Mates[0], double.PositiveInfinity);
         foreach (Mate mate in cope.Mates)
         {
             // Axes that pass each other too far apart: exact. Past an end or beyond the middle: by looking at many lines.
-            double apart = mate.Offset - mate.Radius - outer;
-            if (!mate.IsParallel && apart > 0)
+            double apart = Line3.CommonNormal(frame.Axis, mate.Axis) is { } normal && !mate.IsParallel
+                ? mate.Offset - mate.HalfWidth - outer.HalfWidthAlong(frame.Axes.InSection(normal))
+                : 0;
+            if (apart > 0)
             {
                 (nearest, least) = apart < least ? (mate, apart) : (nearest, least);
                 continue;
@@ -93,7 +101,8 @@ internal static class Touching
             {
                 (double sin, double cos) = Math.SinCos(2 * Math.PI * i / Looks);
                 Mate.HalfPlane plane = mate.At(sin, cos);
-                double distance = Math.Min(plane.Shortfall(outer, cope.Middle), plane.Shortfall(inner, cope.Middle));
+                double distance = Math.Min(
+                    plane.Shortfall(outer.RadiusAt(sin, cos), cope.Middle), plane.Shortfall(inner.RadiusAt(sin, cos), cope.Middle));
                 if (distance < least)
                 {
                     (nearest, least) = (mate, distance);

@@ -13,16 +13,15 @@ internal static class TubeMeasure
     {
         Tube tube = model.Tubes[index];
         double length = tube.Length;
-        double outer = section.OuterSize / 2;
-        double area = section.Area;
+        double area = section.Outline.Area - section.Bore.Area;
         (EndMoments a, EndMoments b) = (from.Moments, to.Moments);
         double volume = (area * length) - a.T - b.T;
         double along = (area * length * length / 2) - (length * b.T) + b.HalfSquare - a.HalfSquare;
         Vector3 across = (-(a.Cos + b.Cos) * tube.Axes.Z) + ((a.Sin + b.Sin) * tube.Axes.Y);
         Vector3 centroid = tube.From.Point + (((along * tube.Axes.X) + across) / volume);
-        double surface = (section.Perimeter * length) - a.Skin - b.Skin;
-        double start = Least(from.Cut, outer - section.Wall);
-        double stop = length - Least(to.Cut, outer - section.Wall);
+        double surface = (section.Outline.Perimeter * length) - a.Skin - b.Skin;
+        double start = Least(from.Cut, section.Bore);
+        double stop = length - Least(to.Cut, section.Bore);
         return new CutTube(
             index,
             from.Cut,
@@ -36,6 +35,6 @@ internal static class TubeMeasure
     }
 
     // A radially cut rod reaches no farther at its axis than round it.
-    private static double Least(EndCut cut, double inner) =>
-        inner <= 0 && cut.Surface is RadialCope ? cut.Outer.Min : Math.Min(cut.Outer.Min, cut.Inner.Min);
+    private static double Least(EndCut cut, Outline inner) =>
+        inner.IsPoint && cut.Surface is RadialCope ? cut.Outer.Min : Math.Min(cut.Outer.Min, cut.Inner.Min);
 }

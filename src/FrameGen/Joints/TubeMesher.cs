@@ -4,7 +4,7 @@ using FrameGen.Model;
 
 namespace FrameGen.Joints;
 
-/// <summary>Closed meshes of cut tubes, oriented outwards, within min(tolerance, radius / 3000) of the exact part.</summary>
+/// <summary>Closed meshes of cut tubes, oriented outwards, within min(tolerance, half the smaller size / 3000) of the exact part.</summary>
 /// <remarks>
 /// The skins are cut into columns at clock angles shared by all curves, so that every edge is used by two triangles.
 /// Between the skins each cut face is a ring of quads, or several where it bends through the wall. A radially cut rod is
@@ -23,18 +23,17 @@ public static class TubeMesher
     {
         Tube tube = cut.Sized.Model.Tubes[index];
         Section section = cut.Sized.SectionOf(index);
-        double outer = section.OuterSize / 2;
-        double inner = outer - section.Wall;
-        double sag = Math.Min(cut.Sized.Model.Fabrication.Tolerance, outer * SagShare);
+        (Outline outer, Outline inner) = (section.Outline, section.Bore);
+        double sag = Math.Min(cut.Sized.Model.Fabrication.Tolerance, Math.Min(outer.HalfHeight, outer.HalfWidth) * SagShare);
         CutTube part = cut.Tubes[index];
         EndRings from = EndRings.Of(part.From, inner, outer, sag);
         EndRings to = EndRings.Of(part.To, inner, outer, sag);
-        Columns columns = Columns.Of(from, to, outer, sag);
+        Columns columns = Columns.Of(from, to, outer, inner, sag);
         MeshBuilder builder = new(columns);
         EndLoops first = from.Loops(columns, builder, static t => t);
         EndLoops last = to.Loops(columns, builder, t => tube.Length - t);
         builder.Skin(first.Outer, last.Outer, outward: true);
-        if (inner > 0)
+        if (!inner.IsPoint)
         {
             builder.Skin(first.Inner!, last.Inner!, outward: false);
         }

@@ -1,3 +1,4 @@
+using FrameGen.Geometry;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 
@@ -19,8 +20,8 @@ internal static class TubeOverlap
             return null;
         }
 
-        double outer = section.OuterSize / 2;
-        double worst = Crest(from.Surface, to.Surface, outer - section.Wall, outer);
+        Outline outer = section.Outline;
+        double worst = Crest(from.Surface, to.Surface, section.Bore, outer);
 
         // Corners are exact on the curves, and a jump may lie beside every look.
         foreach (CurvePoint point in from.Outer.Points)
@@ -37,25 +38,25 @@ internal static class TubeOverlap
     }
 
     // The most that both cuts together take from a wall line.
-    private static double Crest(EndSurface from, EndSurface to, double inner, double outer)
+    private static double Crest(EndSurface from, EndSurface to, Outline inner, Outline outer)
     {
-        (double worst, double worstClock, double worstRadius) = (double.NegativeInfinity, 0, outer);
+        (double worst, double worstClock, double worstShare) = (double.NegativeInfinity, 0, 0);
         for (int i = 0; i < Looks; i++)
         {
             for (int k = 0; k <= Depths; k++)
             {
-                Try(2 * Math.PI * i / Looks, outer - ((outer - inner) * k / Depths));
+                Try(2 * Math.PI * i / Looks, (double)k / Depths);
             }
         }
 
         // The exact crest lies between the looks: halve the stride round the best until nothing is gained.
         double stride = 2 * Math.PI / Looks;
-        double depth = (outer - inner) / Depths;
+        double depth = 1.0 / Depths;
         for (int step = 0; step < 60; step++)
         {
-            (double clock, double radius) = (worstClock, worstRadius);
-            bool better = Try(clock + stride, radius) | Try(clock - stride, radius) |
-                Try(clock, Math.Min(radius + depth, outer)) | Try(clock, Math.Max(radius - depth, inner));
+            (double clock, double share) = (worstClock, worstShare);
+            bool better = Try(clock + stride, share) | Try(clock - stride, share) |
+                Try(clock, Math.Max(share - depth, 0)) | Try(clock, Math.Min(share + depth, 1));
             if (!better)
             {
                 (stride, depth) = (stride / 2, depth / 2);
@@ -64,15 +65,19 @@ internal static class TubeOverlap
 
         return worst;
 
-        bool Try(double clock, double radius)
+        // From the outer skin, 0, to the bore, 1.
+        bool Try(double clock, double share)
         {
+            (double sin, double cos) = Math.SinCos(clock);
+            double radius = outer.RadiusAt(sin, cos);
+            radius -= (radius - inner.RadiusAt(sin, cos)) * share;
             double taken = from.At(clock, radius) + to.At(clock, radius);
             if (taken <= worst)
             {
                 return false;
             }
 
-            (worst, worstClock, worstRadius) = (taken, clock, radius);
+            (worst, worstClock, worstShare) = (taken, clock, share);
             return true;
         }
     }

@@ -97,15 +97,13 @@ public static class FrameJson
     {
         EndSurface surface = tube[end].Surface;
         Section section = sized.SectionOf(tube.Tube);
-        double outer = section.OuterSize / 2;
-        double inner = outer - section.Wall;
         double length = sized.Model.Tubes[tube.Tube].Length;
-        double Y(double t) => JsonText.Quiet(end == End.From ? t : length - t, outer);
+        double Y(double t) => JsonText.Quiet(end == End.From ? t : length - t, section.OuterSize / 2);
         for (int degrees = -180; degrees < 180; degrees += StepDegrees)
         {
             double clock = double.DegreesToRadians(degrees);
-            double outerY = Y(surface.At(clock, outer));
-            double innerY = Y(surface.At(clock, inner));
+            double outerY = Y(surface.At(clock, section.Outline));
+            double innerY = Y(surface.At(clock, section.Bore));
             yield return [degrees, outerY, innerY];
         }
     }

@@ -93,8 +93,8 @@ internal static class SelfCheck
         Require(cut.Count == 1 && cut[0].Closed, $"the developed pattern of {mark} has {cut.Count} lines to cut");
         double width = cut[0].Points.Max(p => p.X) - cut[0].Points.Min(p => p.X);
         Require(
-            Math.Abs(width - section.Perimeter) <= 1e-6,
-            $"the developed pattern of {mark} is {width} mm wide on a tube {section.Perimeter} mm round");
+            Math.Abs(width - section.Outline.Perimeter) <= 1e-6,
+            $"the developed pattern of {mark} is {width} mm wide on a tube {section.Outline.Perimeter} mm round");
     }
 
     /// <summary>A cut line rolled back on its tube stays clear of every round mate's wall, but for the tolerance.</summary>
@@ -117,18 +117,24 @@ internal static class SelfCheck
         FrameModel model = cut.Sized.Model;
         Tube own = model.Tubes[tube.Tube];
         Tube other = model.Tubes[mate.Tube];
-        double outer = cut.Sized.SectionOf(tube.Tube).OuterSize / 2;
-        double clear = (cut.Sized.SectionOf(mate.Tube).OuterSize / 2) + tube[end].Gap - model.Fabrication.Tolerance - 1e-6;
+        Outline outer = cut.Sized.SectionOf(tube.Tube).Outline;
+        Outline wall = cut.Sized.SectionOf(mate.Tube).Outline;
+
+        // Measured along rays from the mate's axis, nowhere shorter than across its skin.
+        double spare = tube[end].Gap - model.Fabrication.Tolerance - 1e-6;
 
         // Metal of the mate, whatever its own ends look like: between its node points, and inside its longest cuts.
         double first = Math.Max(0, mate.From.Outer.Max);
         double last = other.Length - Math.Max(0, mate.To.Outer.Max);
         foreach (CurvePoint point in tube[end].Outer.Points)
         {
-            Vector3 at = own[end].Point + (point.T * own.Into(end)) + (outer * own.Axes.Radial(point.Clock));
+            (double sin, double cos) = Math.SinCos(point.Clock);
+            Vector3 at = own[end].Point + (point.T * own.Into(end)) + (outer.RadiusAt(sin, cos) * own.Axes.Radial(point.Clock));
             Vector3 from = at - other.From.Point;
             double along = from.Dot(other.Axes.X);
-            double distance = (from - (along * other.Axes.X)).Length;
+            Point2 across = other.Axes.InSection(from);
+            double distance = across.DistanceTo(default);
+            double clear = wall.RadiusAt(across.Y / distance, across.X / distance) + spare;
             if (!(along < first || along > last || distance >= clear))
             {
                 Require(holds: false, $"the {EndText.Name(end)} end of {own.Name} cuts {clear - distance} mm into {other.Name}");

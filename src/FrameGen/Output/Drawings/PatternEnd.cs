@@ -19,7 +19,7 @@ internal sealed class PatternEnd
         var line = new List<Point2>(Cut.Outer.Points.Count);
         foreach (CurvePoint point in Cut.Outer.Points)
         {
-            var next = new Point2(pattern.Radius * point.Clock, end == End.From ? point.T : length - point.T);
+            var next = new Point2(pattern.Section.Outline.DistanceAt(point.Clock), end == End.From ? point.T : length - point.T);
             if (line.Count == 0 || Math.Abs(next.X - line[^1].X) > Near || Math.Abs(next.Y - line[^1].Y) > Near)
             {
                 line.Add(next);
