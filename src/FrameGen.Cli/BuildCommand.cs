@@ -8,7 +8,7 @@ namespace FrameGen.Cli;
 
 /// <summary><c>framegen build</c>: from the spec to a folder of papers.</summary>
 internal sealed class BuildCommand(
-    Terminal terminal, string spec, string? output, bool replace, bool anyway, bool json, bool quiet)
+    Terminal terminal, string spec, string? output, bool replace, bool anyway, PaperOptions options, bool json, bool quiet)
 {
     private readonly Job _job = new(terminal);
 
@@ -20,7 +20,7 @@ internal sealed class BuildCommand(
         SizedFrame? sized = _job.Size(spec);
         bool unmet = sized?.Status == SizingStatus.Unmet;
         ShopPackage? package = unmet && !anyway ? null : _job.With(p => p.Plan(p.Cope(sized)));
-        IReadOnlyList<OutputFile>? files = _job.With(p => p.Papers(package));
+        IReadOnlyList<OutputFile>? files = _job.With(p => p.Papers(package, options));
         _job.PrintDiagnostics("; nothing was written");
         WriteResult? written = files is null ? null : folder.Write(files, replace);
         int code = _job.CodeFor(sized);

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.CommandLine.Help;
 using System.CommandLine.Invocation;
+using FrameGen.Formats.Dxf;
 using FrameGen.Output;
 
 namespace FrameGen.Cli;
@@ -48,11 +49,31 @@ internal static class Commands
         {
             Description = $"Write the papers even when a target is not met, stamped {Cautions.NotMeetingTargets}.",
         };
+        var dxf = new Option<string>("--dxf")
+        {
+            Description = "Version of DXF files: 2000 (AC1015), or r12 (AC1009) for old machines.",
+            DefaultValueFactory = _ => "2000",
+            HelpName = "VERSION",
+        };
+        dxf.AcceptOnlyFromAmong("2000", "r12");
+        var units = new Option<string>("--dxf-units")
+        {
+            Description = "Unit of DXF files: mm, or in for machines that take every drawing as inches.",
+            DefaultValueFactory = _ => "mm",
+            HelpName = "UNIT",
+        };
+        units.AcceptOnlyFromAmong("mm", "in");
+        var format = new Option<string?>("--format")
+        {
+            Description = "Write the templates in this format too: svg, 1:1 in mm.",
+            HelpName = "FORMAT",
+        };
+        format.AcceptOnlyFromAmong("svg");
         Option<bool> json = Json();
         var quiet = new Option<bool>("--quiet", "-q") { Description = "Print errors and warnings only." };
         var command = new Command("build", "Choose the sections, cut the tubes and write all papers into a folder.")
         {
-            spec, output, replace, anyway, json, quiet,
+            spec, output, replace, anyway, dxf, units, format, json, quiet,
         };
         command.SetAction((Func<ParseResult, int>)(r => new BuildCommand(
             terminal,
@@ -60,12 +81,16 @@ internal static class Commands
             r.GetValue(output),
             r.GetValue(replace),
             r.GetValue(anyway),
+            new PaperOptions(
+                new DxfFormat(r.GetRequiredValue(dxf) is "r12" ? DxfVersion.R12 : DxfVersion.R2000, r.GetRequiredValue(units) is "in"),
+                r.GetValue(format) is "svg"),
             r.GetValue(json),
             r.GetValue(quiet)).Run()));
         Examples(
             command,
             "framegen build specs/quayside-trailer.yaml",
-            "framegen build trailer.yaml -o ~/jobs/0417/papers --replace");
+            "framegen build trailer.yaml -o ~/jobs/0417/papers --replace",
+            "framegen build trailer.yaml --dxf r12 --dxf-units in   for old machines");
         return command;
     }
 

@@ -77,16 +77,21 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
 
     /// <summary>Lays out every file.</summary>
     /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>
-    public IReadOnlyList<OutputFile>? Papers(ShopPackage? package) =>
+    /// <param name="package">The shop's work.</param>
+    /// <param name="options">What was asked for beside the spec; null for the default.</param>
+    public IReadOnlyList<OutputFile>? Papers(ShopPackage? package, PaperOptions? options = null) =>
         package is null ? null : At("drawing the papers", () =>
         {
             NoteUnprinted(package.Cut.Sized.Model);
-            return PaperSet.Create(package);
+            return PaperSet.Create(package, options);
         });
 
     /// <summary>The whole way from a spec that has been read.</summary>
+    /// <param name="spec">The spec.</param>
+    /// <param name="options">What was asked for beside it; null for the default.</param>
     /// <returns>Every file of the output folder, or null when an error was reported.</returns>
-    public IReadOnlyList<OutputFile>? Build(FrameSpec? spec) => Papers(Plan(Cope(Size(Resolve(spec)))));
+    public IReadOnlyList<OutputFile>? Build(FrameSpec? spec, PaperOptions? options = null) =>
+        Papers(Plan(Cope(Size(Resolve(spec)))), options);
 
     private void NoteUnprinted(FrameModel model)
     {

@@ -53,11 +53,14 @@ internal static class DxfTables
             .Flat(12, (view.Left + view.Right) / 2, (view.Bottom + view.Top) / 2)
             .Flat(13, 0, 0).Flat(14, 10, 10).Flat(15, 10, 10)
             .Point(16, 0, 0).Real(36, 1).Point(17, 0, 0)
-            .Real(40, Math.Max(1, 1.05 * Math.Max(view.Height, view.Width / 1.5))).Real(41, 1.5).Real(42, 50)
+            .Real(40, ViewHeight(view)).Real(41, 1.5).Real(42, 50)
             .Real(43, 0).Real(44, 0).Real(50, 0).Real(51, 0)
             .Add(71, 0).Add(72, 1000).Add(73, 1).Add(74, 3).Add(75, 0).Add(76, 0).Add(77, 0).Add(78, 0)
             .Add(0, "ENDTAB");
     }
+
+    /// <summary>Height of a view, half as wide again as high, that shows all of a drawing.</summary>
+    public static double ViewHeight(Box2 view) => Math.Max(1, 1.05 * Math.Max(view.Height, view.Width / 1.5));
 
     private static void Linetypes(DxfSink dxf)
     {

@@ -3,7 +3,7 @@ using FrameGen.Geometry;
 
 namespace FrameGen.Formats.Dxf;
 
-/// <summary>Writes drawings as ASCII DXF of the year 2000 (AC1015), millimetres.</summary>
+/// <summary>Writes drawings as ASCII DXF, of the year 2000 (AC1015) or of Release 12 (AC1009), in millimetres or inches.</summary>
 /// <remarks>
 /// The same drawing gives the same bytes: no dates, no identifiers. Closed lines are closed by their flag; a line of two points
 /// is a LINE. Text stands in a style named after Arial, whose widths are those of <see cref="Helvetica"/>.
@@ -13,18 +13,30 @@ public static class DxfWriter
 {
     /// <summary>Writes a drawing.</summary>
     /// <param name="drawing">Shapes in mm; coordinates up to 1e9.</param>
+    /// <param name="format">Version and unit; AC1015 in millimetres unless said otherwise.</param>
     /// <returns>The file.</returns>
     /// <exception cref="ArgumentException">A shape stands on a layer that the drawing does not list; a layer is listed twice or
     /// has a name that DXF forbids; a line has fewer than two points.</exception>
     /// <exception cref="ArgumentOutOfRangeException">A number is not finite, or above 1e9.</exception>
-    public static byte[] Write(Drawing drawing)
+    public static byte[] Write(Drawing drawing, DxfFormat format = default)
     {
         CheckLayers(drawing);
+        if (format.Inches)
+        {
+            drawing = drawing with { Shapes = [.. drawing.Shapes.Select(InInches)] };
+        }
+
         Box2 view = drawing.Bounds() ?? default;
         int firstShape = DxfHandles.FirstFree + drawing.Layers.Count;
 
         var dxf = new DxfSink();
-        Header(dxf, view, firstShape + drawing.Shapes.Count);
+        if (format.Version == DxfVersion.R12)
+        {
+            DxfRelease12.Write(dxf, drawing, view, format.Inches);
+            return dxf.Add(0, "EOF").ToArray();
+        }
+
+        Header(dxf, view, firstShape + drawing.Shapes.Count, format.Inches);
         dxf.Section("CLASSES").EndSection();
         DxfTables.Write(dxf, drawing.Layers, view);
         dxf.Section("ENTITIES");
@@ -37,6 +49,20 @@ public static class DxfWriter
         DxfObjects.Write(dxf, view);
         return dxf.Add(0, "EOF").ToArray();
     }
+
+    /// <summary>The header's unit: 1 inches, 4 millimetres; and whether the drawing is an English or a metric one.</summary>
+    internal static void Units(DxfSink dxf, bool inches)
+    {
+        dxf.Add(9, "$MEASUREMENT").Add(70, inches ? 0 : 1);
+        dxf.Add(9, "$INSUNITS").Add(70, inches ? 1 : 4);
+    }
+
+    private static Shape InInches(Shape shape) => shape switch
+    {
+        Polyline line => line with { Points = [.. line.Points.Select(p => 1 / 25.4 * p)] },
+        Text text => text with { At = 1 / 25.4 * text.At, Height = text.Height / 25.4 },
+        _ => shape,
+    };
 
     private static void CheckLayers(Drawing drawing)
     {
@@ -59,7 +85,7 @@ public static class DxfWriter
         }
     }
 
-    private static void Header(DxfSink dxf, Box2 view, int nextHandle)
+    private static void Header(DxfSink dxf, Box2 view, int nextHandle, bool inches)
     {
         dxf.Section("HEADER");
         dxf.Add(9, "$ACADVER").Add(1, "AC1015");
@@ -77,9 +103,8 @@ public static class DxfWriter
         dxf.Add(9, "$LUNITS").Add(70, 2);
         dxf.Add(9, "$LUPREC").Add(70, 4);
         dxf.Add(9, "$HANDSEED").Handle(5, nextHandle);
-        dxf.Add(9, "$MEASUREMENT").Add(70, 1);
+        Units(dxf, inches);
         dxf.Add(9, "$LWDISPLAY").Add(290, 0);
-        dxf.Add(9, "$INSUNITS").Add(70, 4);
         dxf.Add(9, "$PSTYLEMODE").Add(290, 1);
         dxf.EndSection();
     }

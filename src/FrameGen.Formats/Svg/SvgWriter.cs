@@ -1,6 +1,7 @@
 using System.Globalization;
 using System.Security;
 using System.Text;
+using System.Xml;
 using FrameGen.Formats.Drawings;
 using FrameGen.Geometry;
 
@@ -13,9 +14,10 @@ public static class SvgWriter
     /// <param name="drawing">What is drawn.</param>
     /// <param name="title">Read out, or shown by a pointer; empty for none.</param>
     /// <param name="margin">White round the drawing, mm.</param>
+    /// <param name="background">False to leave out the white ground, which a cutter's program could take for a shape to cut.</param>
     /// <returns>UTF-8 text with <c>\n</c> at the ends of lines.</returns>
     /// <exception cref="ArgumentException">The drawing is empty, or a shape stands on a layer that it does not have.</exception>
-    public static byte[] Write(Drawing drawing, string title = "", double margin = 5)
+    public static byte[] Write(Drawing drawing, string title = "", double margin = 5, bool background = true)
     {
         Box2 box = drawing.Bounds() ?? throw new ArgumentException("An empty drawing has no size.", nameof(drawing));
         double left = box.Left - margin;
@@ -31,7 +33,11 @@ public static class SvgWriter
             sink.Ascii("<title>").Bytes(Escaped(title)).Ascii("</title>\n");
         }
 
-        sink.Ascii("<rect width=\"100%\" height=\"100%\" fill=\"#ffffff\"/>\n");
+        if (background)
+        {
+            sink.Ascii("<rect width=\"100%\" height=\"100%\" fill=\"#ffffff\"/>\n");
+        }
+
         string? open = null;
         foreach (Shape shape in drawing.Shapes)
         {
@@ -53,7 +59,7 @@ public static class SvgWriter
     private static void Open(ByteSink sink, Layer layer)
     {
         string ink = Colour(layer.Pen.Ink);
-        sink.Ascii("<g color=\"").Ascii(ink).Ascii("\" fill=\"none\" stroke=\"").Ascii(ink).Ascii("\" stroke-width=\"").Decimal(layer.Pen.Width, 3);
+        sink.Ascii("<g class=\"").Ascii(layer.Name).Ascii("\" color=\"").Ascii(ink).Ascii("\" fill=\"none\" stroke=\"").Ascii(ink).Ascii("\" stroke-width=\"").Decimal(layer.Pen.Width, 3);
         sink.Ascii("\" stroke-linejoin=\"round\" stroke-linecap=\"").Ascii(layer.Pen.Dashes.Count == 0 ? "round" : "butt").Ascii("\"");
         for (int i = 0; i < layer.Pen.Dashes.Count; i++)
         {
@@ -105,7 +111,8 @@ public static class SvgWriter
     private static void Place(ByteSink sink, Point2 point, double left, double top) =>
         sink.Decimal(point.X - left, 3).Ascii(" ").Decimal(top - point.Y, 3);
 
-    private static byte[] Escaped(string text) => Encoding.UTF8.GetBytes(SecurityElement.Escape(text));
+    private static byte[] Escaped(string text) =>
+        Encoding.UTF8.GetBytes(SecurityElement.Escape(string.Concat(text.Select(c => XmlConvert.IsXmlChar(c) || char.IsSurrogate(c) ? c : '?'))));
 
     private static string Colour(Ink ink)
     {

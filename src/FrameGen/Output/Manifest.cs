@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using System.Text.Json;
+using FrameGen.Formats.Dxf;
 using FrameGen.Model;
 using FrameGen.Spec;
 
@@ -24,9 +25,16 @@ public sealed record Manifest(
     public const string FileName = "manifest.json";
 
     private const string Format = "framegen-manifest/1";
+    private const string Release12 = "r12";
+    private const string Year2000 = "2000";
+    private const string Inches = "in";
+    private const string Millimetres = "mm";
 
     /// <summary>Where the copy of the pinned sizes is in the folder; null where sizes were not pinned.</summary>
     public string? Frozen { get; init; }
+
+    /// <summary>What was asked for beside the spec.</summary>
+    public PaperOptions Options { get; init; } = PaperOptions.Default;
 
     /// <summary>Describes the files of a build.</summary>
     public static Manifest Of(SpecIdentity spec, IReadOnlyList<(string Path, string File)> includes, IEnumerable<OutputFile> files) =>
@@ -76,6 +84,15 @@ public sealed record Manifest(
         json.WriteString("name", ToolName);
         json.WriteString("version", ToolVersion);
         json.WriteEndObject();
+        if (Options != PaperOptions.Default)
+        {
+            json.WriteStartObject("options");
+            json.WriteString("dxf", Options.Dxf.Version == DxfVersion.R12 ? Release12 : Year2000);
+            json.WriteString("dxf_units", Options.Dxf.Inches ? Inches : Millimetres);
+            json.WriteBoolean("svg", Options.Svg);
+            json.WriteEndObject();
+        }
+
         json.WriteStartArray("files");
         foreach (ManifestEntry entry in Files)
         {
@@ -114,12 +131,25 @@ public sealed record Manifest(
                 [.. root.GetProperty("files").EnumerateArray().Select(f => new ManifestEntry(Text(f, "path"), Text(f, "sha256")))])
             {
                 Frozen = spec.TryGetProperty("frozen", out _) ? Text(spec, "frozen") : null,
+                Options = root.TryGetProperty("options", out JsonElement options) ? OptionsOf(options) : PaperOptions.Default,
             };
         }
         catch (Exception e) when (e is JsonException or KeyNotFoundException or InvalidOperationException)
         {
             return null;
         }
+    }
+
+    private static PaperOptions OptionsOf(JsonElement options) => new(
+        new DxfFormat(
+            OneOf(options, "dxf", Release12, Year2000) ? DxfVersion.R12 : DxfVersion.R2000, OneOf(options, "dxf_units", Inches, Millimetres)),
+        options.GetProperty("svg").GetBoolean());
+
+    private static bool OneOf(JsonElement element, string name, string first, string second)
+    {
+        string text = Text(element, name);
+        return string.Equals(text, first, StringComparison.Ordinal)
+            || (string.Equals(text, second, StringComparison.Ordinal) ? false : throw new JsonException($"{name} is {text}"));
     }
 
     private static string Text(JsonElement element, string name) =>

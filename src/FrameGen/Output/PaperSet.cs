@@ -7,7 +7,9 @@ public static class PaperSet
 {
     /// <summary>Lays out all papers of a package, the manifest last.</summary>
     /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>
-    public static IReadOnlyList<OutputFile> Create(ShopPackage package)
+    /// <param name="package">The frame's papers.</param>
+    /// <param name="options">What was asked for beside the spec; null for the default.</param>
+    public static IReadOnlyList<OutputFile> Create(ShopPackage package, PaperOptions? options = null)
     {
         var (copies, includes) = SpecCopies.Make(package.Cut.Sized.Model.Spec);
         WeldList welds = WeldPlanner.Plan(package.Cut);
@@ -24,13 +26,13 @@ public static class PaperSet
             OutputFile.FromText("welds.md", TextTemplate.Render("welds.md", WeldsModel.From(package, welds))),
             new("frame.json", FrameJson.Write(package)),
         };
-        files.AddRange(ShapeFiles.Create(package));
+        files.AddRange(ShapeFiles.Create(package, options ?? PaperOptions.Default));
         files.AddRange(copies);
         SelfCheck.Totals(package);
         SelfCheck.Stock(package);
         SelfCheck.Welds(package, welds);
         SelfCheck.Equilibrium(package.Cut.Sized);
-        files.Add(new OutputFile(Manifest.FileName, Manifest.Of(package.Cut.Sized.Model.Spec, includes, files).Write()));
+        files.Add(new OutputFile(Manifest.FileName, (Manifest.Of(package.Cut.Sized.Model.Spec, includes, files) with { Options = options ?? PaperOptions.Default }).Write()));
         return files;
     }
 }

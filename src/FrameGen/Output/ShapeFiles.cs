@@ -2,9 +2,11 @@ using FrameGen.Fabrication;
 using FrameGen.Formats.Drawings;
 using FrameGen.Formats.Dxf;
 using FrameGen.Formats.Stl;
+using FrameGen.Formats.Svg;
 using FrameGen.Geometry;
 using FrameGen.Joints;
 using FrameGen.Output.Drawings;
+using FrameGen.Spec;
 
 namespace FrameGen.Output;
 
@@ -13,7 +15,9 @@ internal static class ShapeFiles
 {
     /// <summary>Makes them, part by part.</summary>
     /// <exception cref="SelfCheckException">A drawing or a mesh does not agree with its part.</exception>
-    public static IEnumerable<OutputFile> Create(ShopPackage package)
+    /// <param name="package">The frame's papers.</param>
+    /// <param name="options">Which DXF, and whether SVG too.</param>
+    public static IEnumerable<OutputFile> Create(ShopPackage package, PaperOptions options)
     {
         CutFrame cut = package.Cut;
         var meshes = new TriangleMesh?[cut.Tubes.Count];
@@ -22,10 +26,14 @@ internal static class ShapeFiles
             SelfCheck.NoInterference(cut, part.Drawn);
             Drawing developed = DevelopedPattern.Draw(package, part);
             SelfCheck.DevelopedWidth(part.Name, developed, cut.Sized.SectionOf(part.Drawn.Tube));
-            yield return new OutputFile($"developed/{part.Name}.dxf", DxfWriter.Write(developed));
+            yield return new OutputFile($"developed/{part.Name}.dxf", Dxf(developed));
             if (TemplatePieces.Draw(package, part) is { } pieces)
             {
-                yield return new OutputFile($"templates/{part.Name}.dxf", DxfWriter.Write(pieces));
+                yield return new OutputFile($"templates/{part.Name}.dxf", Dxf(pieces));
+                if (options.Svg)
+                {
+                    yield return new OutputFile($"templates/{part.Name}.svg", SvgWriter.Write(WithSquare(pieces), part.Name, background: false));
+                }
             }
 
             TriangleMesh mesh = meshes[part.Drawn.Tube] = TubeMesher.Mesh(cut, part.Drawn.Tube);
@@ -37,6 +45,11 @@ internal static class ShapeFiles
             "preview/frame.stl", StlWriter.Write([.. cut.Tubes.Select(t => InPlace(t.Tube))]));
 
         yield return new OutputFile("templates.pdf", TemplatesPdf.Write(package));
+
+        byte[] Dxf(Drawing drawing) => DxfWriter.Write(WithSquare(drawing), options.Dxf);
+
+        Drawing WithSquare(Drawing drawing) =>
+            CheckSquare.Beside(drawing, options.Dxf.Inches || cut.Sized.Model.Display.Length == LengthUnit.Inch);
 
         TriangleMesh InPlace(int tube) =>
             TubeMesher.InPlace(cut.Sized.Model.Tubes[tube], meshes[tube] ?? TubeMesher.Mesh(cut, tube));

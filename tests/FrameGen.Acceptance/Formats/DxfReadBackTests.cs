@@ -53,7 +53,7 @@ public class DxfReadBackTests
             Assert.Equal(4, read.GetProperty("insunits").GetInt32());
             Assert.Equal(1, read.GetProperty("measurement").GetInt32());
             string layers = string.Join(' ', read.GetProperty("layers").EnumerateArray().Select(l => l.GetString()));
-            Assert.Equal("0 CUT SCRIBE TAB TEXT TRIM", layers);
+            Assert.Equal("0 CHECK CUT SCRIBE TAB TEXT TRIM", layers);
             Assert.Equal(drawing.Shapes.OfType<Polyline>().Count(), read.GetProperty("lines").GetArrayLength());
             Assert.Equal(drawing.Shapes.OfType<Text>().Count(), read.GetProperty("texts").GetArrayLength());
         }

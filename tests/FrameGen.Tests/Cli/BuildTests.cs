@@ -59,6 +59,27 @@ public sealed class BuildTests : IDisposable
     }
 
     [Fact]
+    public void Verify_rebuilds_with_the_options_of_the_build()
+    {
+        Run("build", SpecPath, "-o", Out, "--dxf", "r12", "--dxf-units", "in", "--format", "svg");
+        string[] drawings = Directory.GetFiles(Path.Join(Out, "developed"));
+        Assert.All(drawings, f => Assert.Contains("AC1009", File.ReadAllText(f), StringComparison.Ordinal));
+        Assert.Single(Directory.GetFiles(Path.Join(Out, "templates"), "*.svg"));
+        using (JsonDocument manifest = JsonDocument.Parse(File.ReadAllText(Path.Join(Out, "manifest.json"))))
+        {
+            JsonElement options = manifest.RootElement.GetProperty("options");
+            Assert.Equal(("r12", "in", true), (options.GetProperty("dxf").GetString(), options.GetProperty("dxf_units").GetString(), options.GetProperty("svg").GetBoolean()));
+        }
+
+        (int verified, string said, _) = Run("verify", Out, "--spec", SpecPath);
+        Assert.Equal(0, verified);
+        Assert.Contains("the same bytes", said, StringComparison.Ordinal);
+        (int refused, _, string error) = Run("build", SpecPath, "-o", Out, "--dxf", "r13");
+        Assert.Equal(2, refused);
+        Assert.Contains("r13", error, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Verify_tells_papers_from_those_the_spec_gives_today()
     {
         Run("build", SpecPath, "-o", Out);

@@ -85,6 +85,39 @@ public class DxfWriterTests
         Assert.Contains((1, written), Entity("TEXT", new Text("TEXT", new(0, 0), 2, 0, text)));
     }
 
+    // Release 12: a POLYLINE with vertices that follow (66), closed by its flag (70), no handles and no subclass marks.
+    [Fact]
+    public void Release_12_has_polylines_with_vertices_and_no_handles()
+    {
+        var line = new Polyline("CUT", [new(0, 0), new(12.5, 0), new(0, -3)], Closed: true);
+        List<(int Code, string Value)> pairs = Pairs(new Drawing(Layers, [line]), new DxfFormat(DxfVersion.R12, Inches: false));
+        Assert.Equal("AC1009", After(pairs, "$ACADVER"));
+        Assert.Equal("4", After(pairs, "$INSUNITS"));
+        int start = pairs.IndexOf((0, "POLYLINE"));
+        Assert.Contains((66, "1"), pairs.Skip(start).Take(8));
+        Assert.Contains((70, "1"), pairs.Skip(start).Take(8));
+        Assert.Equal(["POLYLINE", "VERTEX", "VERTEX", "VERTEX", "SEQEND", "ENDSEC"], Values(pairs[start..], 0)[..6]);
+        Assert.Equal((string[])["0.0", "0.0", "12.5", "0.0"], Values(pairs[start..], 10));
+        Assert.DoesNotContain(pairs, p => p.Code is 5 or 100 or 330);
+    }
+
+    // 25.4 mm are an inch.
+    [Theory]
+    [InlineData(DxfVersion.R2000)]
+    [InlineData(DxfVersion.R12)]
+    public void Inches_divide_every_length_by_25_4(DxfVersion version)
+    {
+        Shape[] shapes = [Polyline.Segment("CUT", new(25.4, 50.8), new(-12.7, 0)), new Text("TEXT", new(254, 0), 2.54, Math.PI / 2, "A")];
+        List<(int Code, string Value)> pairs = Pairs(new Drawing(Layers, shapes), new DxfFormat(version, Inches: true));
+        Assert.Equal("1", After(pairs, "$INSUNITS"));
+        Assert.Equal("0", After(pairs, "$MEASUREMENT"));
+        Assert.Equal("-0.5", After(pairs, "$EXTMIN"));
+        List<(int Code, string Value)> line = pairs[pairs.IndexOf((0, "LINE"))..];
+        Assert.Equal(("1.0", "2.0", "-0.5"), (Values(line, 10)[0], Values(line, 20)[0], Values(line, 11)[0]));
+        List<(int Code, string Value)> text = pairs[pairs.IndexOf((0, "TEXT"))..];
+        Assert.Equal(("10.0", "0.1", "90.0"), (Values(text, 10)[0], Values(text, 40)[0], Values(text, 50)[0]));
+    }
+
     [Fact]
     public void The_same_drawing_gives_the_same_bytes()
     {
@@ -121,9 +154,9 @@ public class DxfWriterTests
         return [.. pairs.Skip(start + 1).TakeWhile(p => p.Code != 0)];
     }
 
-    private static List<(int Code, string Value)> Pairs(Drawing drawing)
+    private static List<(int Code, string Value)> Pairs(Drawing drawing, DxfFormat format = default)
     {
-        string[] lines = Encoding.ASCII.GetString(DxfWriter.Write(drawing)).Split('\n');
+        string[] lines = Encoding.ASCII.GetString(DxfWriter.Write(drawing, format)).Split('\n');
         return [.. lines.Chunk(2).Where(c => c.Length == 2).Select(c => (int.Parse(c[0], System.Globalization.CultureInfo.InvariantCulture), c[1]))];
     }
 }

@@ -20,6 +20,9 @@ internal static class PaperLayers
     /// <summary>Paper beyond the cut line.</summary>
     public const string Trim = "TRIM";
 
+    /// <summary>The square that checks the scale; nothing of the part.</summary>
+    public const string Check = "CHECK";
+
     /// <summary>All layers, in the order of the layer table.</summary>
     public static IReadOnlyList<Layer> All { get; } =
     [
@@ -28,5 +31,6 @@ internal static class PaperLayers
         new(Text, 7, Pen.Black(0.2)),
         new(Tab, 3, new Pen(0.2, Ink.Black, [0.8, 0.8])),
         new(Trim, 8, new Pen(0.25, Ink.Black, [3, 1.5])),
+        new(Check, 6, Pen.Black(0.2)),
     ];
 }

@@ -44,12 +44,12 @@ public static class FolderVerifier
         if (remark.Length == 0)
         {
             var copies = new SpecInFolder(folder.FullPath, state.Manifest!);
-            IReadOnlyList<OutputFile>? rebuilt = pipeline.Build(pipeline.Read(state.Manifest!.SpecFile, copies.Content));
+            IReadOnlyList<OutputFile>? rebuilt = pipeline.Build(pipeline.Read(state.Manifest!.SpecFile, copies.Content), state.Manifest.Options);
             HashSet<string> named = [.. differences.Select(d => d.Path)];
             differences.AddRange(Compare(folder.FullPath, rebuilt, "rebuilt").Where(d => !named.Contains(d.Path)));
         }
 
-        if (spec is not null && pipeline.Build(pipeline.Read(spec)) is { } today)
+        if (spec is not null && pipeline.Build(pipeline.Read(spec), state.Manifest?.Options) is { } today)
         {
             differences.AddRange(Compare(folder.FullPath, today, "spec"));
         }
