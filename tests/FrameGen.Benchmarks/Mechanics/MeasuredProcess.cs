@@ -35,8 +35,15 @@ internal sealed class MeasuredProcess
         long peak = 0;
         while (!process.WaitForExit(5))
         {
-            process.Refresh();
-            peak = Math.Max(peak, process.HasExited ? 0 : process.PeakWorkingSet64);
+            try
+            {
+                process.Refresh();
+                peak = Math.Max(peak, process.PeakWorkingSet64);
+            }
+            catch (InvalidOperationException)
+            {
+                // It ended between two looks; the largest so far stands.
+            }
         }
 
         double seconds = Stopwatch.GetElapsedTime(began).TotalSeconds;
