@@ -3,7 +3,6 @@ using System.Text;
 using System.Xml.Linq;
 using FrameGen.Formats.Drawings;
 using FrameGen.Formats.Svg;
-using FrameGen.Geometry;
 using Xunit;
 
 namespace FrameGen.Tests.Formats;
