@@ -15,6 +15,8 @@ namespace FrameGen.Mechanics.Frames;
 /// shearing bending in x-y (Y, ½L Z, −Y, ½L Z), s = 12 E Iz/(L³ (1 + φ)), φ = 12 E Iz/(G Ay L²);
 /// in x-z (Z, −½L Y, −Z, −½L Y), s = 12 E Iy/(L³ (1 + φ)), φ = 12 E Iy/(G Az L²).
 /// An axis end that stands off its node by o passes its force on with the moment o × force.
+/// A hinge takes a mode away. With one end hinged in a plane, even bending (e) and shearing bending (s) only come together, as s ∓ ½L e, which
+/// has no moment at that end, with 1/s' = 1/s_s + L²/(4 s_e); with both, neither is left. A torque is carried by both ends or by none.
 /// </remarks>
 internal sealed class ElementModes
 {
@@ -37,6 +39,7 @@ internal sealed class ElementModes
         int count = frame.Elements.Count;
         Vectors = new double[Stride * count];
         Lengths = new double[count];
+        Hinges = new Hinges[count];
         for (int e = 0; e < count; e++)
         {
             BeamElement element = frame.Elements[e];
@@ -68,10 +71,20 @@ internal sealed class ElementModes
             Set(e, 3, element, zero, -axes.Y, zero, axes.Y);
             Set(e, 4, element, axes.Y, 0.5 * length * axes.Z, -axes.Y, 0.5 * length * axes.Z);
             Set(e, 5, element, axes.Z, -0.5 * length * axes.Y, -axes.Z, -0.5 * length * axes.Y);
+            Hinges[e] = element.Hinges;
+            HasHinges |= element.Hinges != Frames.Hinges.None;
+            Join(e, 4, 2, HingeSide(element.Hinges, Frames.Hinges.StartZ, Frames.Hinges.EndZ) * 0.5 * length);
+            Join(e, 5, 3, -HingeSide(element.Hinges, Frames.Hinges.StartY, Frames.Hinges.EndY) * 0.5 * length);
         }
 
         bool IsNode(int node) => node >= 0 && node < frame.Nodes.Count;
     }
+
+    /// <summary>True where some element has one.</summary>
+    public bool HasHinges { get; }
+
+    /// <summary>Of each element.</summary>
+    public Hinges[] Hinges { get; }
 
     /// <summary>L of each element, mm.</summary>
     public double[] Lengths { get; }
@@ -95,6 +108,55 @@ internal sealed class ElementModes
         stiffness[3] = aboutY;
         stiffness[4] = twelve * aboutZ / (1 + (twelve * length * aboutZ / (profile.G * profile.ShearAreaY)));
         stiffness[5] = twelve * aboutY / (1 + (twelve * length * aboutY / (profile.G * profile.ShearAreaZ)));
+    }
+
+    /// <summary>Takes from the six stiffnesses of an element what its hinges don't carry.</summary>
+    /// <param name="hinges">Not none.</param>
+    /// <param name="length">L, mm.</param>
+    /// <param name="stiffness">In: as without hinges. Out: of the modes that are left, 0 for those that are not.</param>
+    /// <returns>For bending about y and about z ½L s_s/(s_e + ¼L² s_s), 1/mm, of a plane with one hinge: the shear force that an end moment brings along when
+    /// it is let go, per moment; 0 for the others.</returns>
+    public static (double Y, double Z) Release(Hinges hinges, double length, Span<double> stiffness)
+    {
+        if ((hinges & (Frames.Hinges.StartX | Frames.Hinges.EndX)) != Frames.Hinges.None)
+        {
+            stiffness[1] = 0;
+        }
+
+        return (
+            Release(hinges & Frames.Hinges.StartY, hinges & Frames.Hinges.EndY, length, ref stiffness[3], ref stiffness[5]),
+            Release(hinges & Frames.Hinges.StartZ, hinges & Frames.Hinges.EndZ, length, ref stiffness[2], ref stiffness[4]));
+    }
+
+    /// <summary>1 with a hinge at the start alone, −1 at the end alone, 0 with none or both.</summary>
+    public static int HingeSide(Hinges hinges, Hinges start, Hinges end) => ((hinges & start) != Frames.Hinges.None ? 1 : 0) - ((hinges & end) != Frames.Hinges.None ? 1 : 0);
+
+    private static double Release(Hinges start, Hinges end, double length, ref double even, ref double shearing)
+    {
+        if (start == Frames.Hinges.None && end == Frames.Hinges.None)
+        {
+            return 0;
+        }
+
+        double sum = even + (0.25 * length * length * shearing);
+        bool both = start != Frames.Hinges.None && end != Frames.Hinges.None;
+        double share = both || sum == 0 ? 0 : shearing / sum;
+        (even, shearing) = (0, share * even);
+        return 0.5 * length * share;
+    }
+
+    // What is left of two bending modes at a hinge: mode += factor · other.
+    private void Join(int element, int mode, int other, double factor)
+    {
+        if (factor != 0)
+        {
+            Span<double> g = Vectors.AsSpan((Stride * element) + (Freedoms * mode), Freedoms);
+            ReadOnlySpan<double> added = Vectors.AsSpan((Stride * element) + (Freedoms * other), Freedoms);
+            for (int i = 0; i < Freedoms; i++)
+            {
+                g[i] += factor * added[i];
+            }
+        }
     }
 
     private void Set(

@@ -5,13 +5,11 @@ namespace FrameGen.Mechanics.Frames;
 /// <summary>Loads against reactions, of the frame as one body; it knows nothing of how the frame was solved.</summary>
 internal static class Equilibrium
 {
-    private const int Six = SymbolicFactor.Six;
-
     /// <summary>Largest unbalance of forces, and of moments about the origin, relative to the largest term.</summary>
     /// <param name="layout">The frame.</param>
     /// <param name="loads">Loads.</param>
-    /// <param name="residuals">Six values a node; those of held freedoms are reactions.</param>
-    public static double ErrorOf(FrameLayout layout, BeamLoads loads, double[] residuals)
+    /// <param name="solution">The reactions.</param>
+    public static double ErrorOf(FrameLayout layout, BeamLoads loads, FrameSolution solution)
     {
         var sum = default(Sum);
         for (int k = 0; k < loads.NodalLoads.Count; k++)
@@ -31,19 +29,14 @@ internal static class Equilibrium
 
         foreach (int node in layout.Supported)
         {
-            int k = Six * node;
-            sum.Add(
-                layout.Frame.Nodes[node],
-                new Vector3(Held(k), Held(k + 1), Held(k + 2)),
-                new Vector3(Held(k + 3), Held(k + 4), Held(k + 5)));
+            (Vector3 force, Vector3 moment) = solution.Reaction(node);
+            sum.Add(layout.Frame.Nodes[node], force, moment);
         }
 
         // A pure twist has no forces but rounding, which must not be measured against itself.
         double forceScale = Math.Max(sum.LargestForce, sum.LargestMoment / layout.Size);
         double momentScale = Math.Max(sum.LargestMoment, sum.LargestForce * layout.Size);
         return forceScale > 0 ? Math.Max(Largest(sum.Force) / forceScale, Largest(sum.Moment) / momentScale) : 0;
-
-        double Held(int freedom) => layout.Held[freedom] ? residuals[freedom] : 0;
     }
 
     private static double Largest(Vector3 v) => Math.Max(Math.Max(Math.Abs(v.X), Math.Abs(v.Y)), Math.Abs(v.Z));

@@ -5,6 +5,10 @@ public sealed class FactoredFrame
 {
     private const int Six = SymbolicFactor.Six;
 
+    // Far below what is refused, and far above what an ordinary frame leaves.
+    private const double RefineAbove = 1e-11;
+    private const int MostRefinements = 5;
+
     private readonly FrameLayout _layout;
     private readonly StiffnessBlocks _stiffness;
     private readonly NumericFactor _factor;
@@ -37,14 +41,46 @@ public sealed class FactoredFrame
         }
 
         FrameSolution solution = reuse ?? new FrameSolution(_layout);
-        solution.Apply(loads);
-        double largestLoad = Gather(solution.Residuals);
+        solution.Apply(loads, _stiffness.HingeShears);
+        Gather(solution.Residuals);
         _factor.Solve(_unknowns);
-        Scatter(solution.Displacements);
-        solution.Recover(_stiffness.OfModes);
-        solution.BackwardError = BackwardErrorOf(solution, largestLoad);
-        solution.EquilibriumError = Equilibrium.ErrorOf(_layout, loads, solution.Residuals);
+        solution.Set(_unknowns);
+        solution.Recover(_stiffness.OfModes, _stiffness.HingeShears);
+        LookAtUnbalance(solution);
+        if (solution.BackwardError > RefineAbove)
+        {
+            Refine(solution, loads);
+        }
+
+        solution.EquilibriumError = Equilibrium.ErrorOf(_layout, loads, solution);
         return solution;
+    }
+
+    // What is left unbalanced is solved for once more and added. The unbalance needs more digits of the displacements than a double has: the
+    // strain of a stiff tube is a small difference of large displacements.
+    private void Refine(FrameSolution solution, BeamLoads loads)
+    {
+        solution.KeepRest();
+        LookAgain();
+        for (int step = 0; step < MostRefinements && solution.BackwardError > RefineAbove; step++)
+        {
+            double before = solution.BackwardError;
+            Gather(solution.Residuals);
+            _factor.Solve(_unknowns);
+            solution.Add(_unknowns);
+            LookAgain();
+            if (!(solution.BackwardError < 0.5 * before))
+            {
+                break;
+            }
+        }
+
+        void LookAgain()
+        {
+            solution.Apply(loads, _stiffness.HingeShears);
+            solution.Recover(_stiffness.OfModes, _stiffness.HingeShears);
+            LookAtUnbalance(solution);
+        }
     }
 
     /// <summary>The frame's pattern.</summary>
@@ -52,6 +88,9 @@ public sealed class FactoredFrame
 
     /// <summary>Six stiffnesses an element, in the order of its modes.</summary>
     internal double[] OfModes => _stiffness.OfModes;
+
+    /// <summary><see cref="StiffnessBlocks.HingeShears"/>.</summary>
+    internal double[] HingeShears => _stiffness.HingeShears;
 
     /// <summary>Solves K x = b in place: six values an active node in elimination order, zero in held freedoms.</summary>
     internal void Solve(Span<double> x) => _factor.Solve(x);
@@ -75,46 +114,38 @@ public sealed class FactoredFrame
         }
     }
 
-    /// <summary>Loads on the free freedoms, in elimination order; the largest of them.</summary>
-    private double Gather(double[] minusLoads)
+    /// <summary>Takes minus the unbalance of the free freedoms, at first the loads, in elimination order.</summary>
+    private void Gather(double[] residuals)
     {
-        double largest = 0;
         for (int place = 0; place < _layout.NodeAt.Length; place++)
         {
             int node = _layout.NodeAt[place];
             for (int i = 0; i < Six; i++)
             {
-                double load = _layout.Held[(Six * node) + i] ? 0 : -minusLoads[(Six * node) + i];
-                _unknowns[(Six * place) + i] = load;
-                largest = Math.Max(largest, Math.Abs(load));
+                _unknowns[(Six * place) + i] = _layout.Held[(Six * node) + i] ? 0 : -residuals[(Six * node) + i];
             }
         }
-
-        return largest;
     }
 
-    private void Scatter(double[] displacements)
+    private void LookAtUnbalance(FrameSolution solution)
     {
-        for (int place = 0; place < _layout.NodeAt.Length; place++)
+        // A truss has no moments but rounding, a pure twist no forces: neither must be measured against itself.
+        double force = Math.Max(solution.LargestForce, solution.LargestMoment / _layout.LongestElement);
+        double moment = force * _layout.LongestElement;
+        double worst = 0;
+        int freedom = -1;
+        for (int k = 0; k < _layout.Held.Length && force > 0; k++)
         {
-            _unknowns.AsSpan(Six * place, Six).CopyTo(displacements.AsSpan(Six * _layout.NodeAt[place], Six));
-        }
-    }
+            double error = _layout.Held[k] ? 0 : Math.Abs(solution.Residuals[k]) / (k % Six < 3 ? force : moment);
 
-    private double BackwardErrorOf(FrameSolution solution, double largestLoad)
-    {
-        double unbalance = 0;
-        double displacement = 0;
-        for (int k = 0; k < _layout.Held.Length; k++)
-        {
-            if (!_layout.Held[k])
+            // "Not within", so that NaN shows.
+            if (!(error <= worst))
             {
-                unbalance = Math.Max(unbalance, Math.Abs(solution.Residuals[k]));
-                displacement = Math.Max(displacement, Math.Abs(solution.Displacements[k]));
+                (worst, freedom) = (error, k);
             }
         }
 
-        double scale = (_stiffness.Norm * displacement) + largestLoad;
-        return unbalance == 0 ? 0 : unbalance / scale;
+        solution.BackwardError = worst;
+        solution.WorstNode = freedom < 0 ? -1 : freedom / Six;
     }
 }

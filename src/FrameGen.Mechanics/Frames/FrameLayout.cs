@@ -48,8 +48,12 @@ internal sealed class FrameLayout
         EndNodes = [.. frame.Elements.Select(e => e.End)];
         Profiles = [.. frame.Elements.Select(e => e.Profile)];
         ProfileCount = Profiles.Length == 0 ? 0 : Profiles.Max() + 1;
-        Supported = [.. Enumerable.Range(0, nodes).Where(node => Held.AsSpan(Six * node, Six).Contains(true))];
+        Springs = SpringsOf(restraints);
+        SprungNodes = Array.ConvertAll(Springs, s => s.Node);
+        Supported = [.. Enumerable.Range(0, nodes).Where(
+            node => Array.BinarySearch(SprungNodes, node) >= 0 || Held.AsSpan(Six * node, Six).Contains(true))];
         Size = SizeOf(frame);
+        LongestElement = Modes.Lengths.Length == 0 ? 1 : Modes.Lengths.Max();
         Pairs = new int[Profiles.Length];
         (PairRows, PairColumns) = NumberPairs();
         Placements = Place();
@@ -92,11 +96,20 @@ internal sealed class FrameLayout
     /// <summary>Place of each element's end node.</summary>
     public int[] Ends { get; }
 
-    /// <summary>Nodes with a held freedom, in the frame's order.</summary>
+    /// <summary>Springs to the ground on free freedoms, by node, in the frame's order.</summary>
+    public NodeSprings[] Springs { get; }
+
+    /// <summary>The nodes of <see cref="Springs"/>.</summary>
+    public int[] SprungNodes { get; }
+
+    /// <summary>Nodes with a held freedom or a spring, in the frame's order.</summary>
     public int[] Supported { get; }
 
     /// <summary>The longest side of the box round the nodes and of any element, mm; 1 for a frame without either.</summary>
     public double Size { get; }
+
+    /// <summary>The longest element, mm; 1 for a frame without any.</summary>
+    public double LongestElement { get; }
 
     /// <summary>Profile of each element.</summary>
     public int[] Profiles { get; }
@@ -151,6 +164,32 @@ internal sealed class FrameLayout
         }
 
         return held;
+    }
+
+    private NodeSprings[] SpringsOf(IReadOnlyList<Restraint> restraints)
+    {
+        var rates = new SortedDictionary<int, double[]>();
+        foreach (Restraint restraint in restraints)
+        {
+            if (restraint.Springs is not { } springs)
+            {
+                continue;
+            }
+
+            if (springs.Count != Six || springs.Any(rate => !(rate >= 0 && double.IsFinite(rate))))
+            {
+                throw new ArgumentException(
+                    $"The springs of node {restraint.Node} are {string.Join(", ", springs)}; six rates are needed, none of them negative.", nameof(restraints));
+            }
+
+            rates.TryAdd(restraint.Node, new double[Six]);
+            for (int i = 0; i < Six; i++)
+            {
+                rates[restraint.Node][i] += Held[(Six * restraint.Node) + i] ? 0 : springs[i];
+            }
+        }
+
+        return [.. rates.Where(r => r.Value.Any(rate => rate > 0)).Select(r => new NodeSprings(r.Key, PlaceOf[r.Key], r.Value))];
     }
 
     private static (int[] Starts, int[] Neighbours) Adjacency(BeamFrame frame, int[] number, int count)
@@ -268,6 +307,12 @@ internal sealed class FrameLayout
 
         return Array.ConvertAll(lists, list => list.ToArray());
     }
+
+    /// <summary>The springs under a node.</summary>
+    /// <param name="Node">The frame's node.</param>
+    /// <param name="Place">Its place in elimination order.</param>
+    /// <param name="Rates">Six, N/mm and N·mm/rad; 0 on held freedoms.</param>
+    internal sealed record NodeSprings(int Node, int Place, double[] Rates);
 
     /// <summary>One block of K in a front's panel.</summary>
     /// <param name="Pair">The pair of nodes; −1 for a node's own block.</param>

@@ -68,6 +68,16 @@ internal sealed class MechanismFinder(FrameLayout layout, StiffnessBlocks stiffn
             }
         }
 
+        foreach (FrameLayout.NodeSprings springs in layout.Springs)
+        {
+            for (int i = 0; i < Six; i++)
+            {
+                double shift = motion[(Six * springs.Place) + i];
+                energy += springs.Rates[i] * shift * shift;
+                scale += springs.Rates[i] * shift * shift;
+            }
+        }
+
         return scale > 0 ? energy / scale : 0;
 
         void AddEnd(int place, ReadOnlySpan<double> g, ref double strain, ref double size)

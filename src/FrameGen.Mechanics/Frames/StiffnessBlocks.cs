@@ -15,7 +15,6 @@ internal sealed class StiffnessBlocks
     private readonly FrameLayout _layout;
     private readonly double[] _own;
     private readonly double[] _pairs;
-    private readonly double[] _rowSums;
 
     /// <summary>Makes room for the values.</summary>
     public StiffnessBlocks(FrameLayout layout)
@@ -23,19 +22,20 @@ internal sealed class StiffnessBlocks
         _layout = layout;
         _own = new double[BlockSize * layout.NodeAt.Length];
         _pairs = new double[BlockSize * layout.PairRows.Length];
-        _rowSums = new double[Six * layout.NodeAt.Length];
         Diagonal = new double[Six * layout.NodeAt.Length];
         OfModes = new double[ElementModes.Modes * layout.Profiles.Length];
+        HingeShears = layout.Modes.HasHinges ? new double[2 * layout.Profiles.Length] : [];
     }
+
+    /// <summary>What <see cref="ElementModes.Release(Hinges, double, Span{double})"/> gives for each element, about y, then about z; empty for a frame without
+    /// hinges.</summary>
+    public double[] HingeShears { get; }
 
     /// <summary>Six stiffnesses an element, in the order of its modes.</summary>
     public double[] OfModes { get; }
 
     /// <summary>The freedoms' own stiffnesses, N/mm and N·mm, in elimination order.</summary>
     public double[] Diagonal { get; }
-
-    /// <summary>‖K‖∞ over the free freedoms.</summary>
-    public double Norm { get; private set; }
 
     /// <summary>Assembles a design.</summary>
     public void Assemble(IReadOnlyList<BeamProfile> profiles)
@@ -48,6 +48,11 @@ internal sealed class StiffnessBlocks
         {
             Span<double> stiffness = OfModes.AsSpan(ElementModes.Modes * e, ElementModes.Modes);
             ElementModes.Stiffness(profiles[_layout.Profiles[e]], lengths[e], stiffness);
+            if (HingeShears.Length > 0 && _layout.Modes.Hinges[e] is not Hinges.None and var hinges)
+            {
+                (HingeShears[2 * e], HingeShears[(2 * e) + 1]) = ElementModes.Release(hinges, lengths[e], stiffness);
+            }
+
             ref double start = ref vectors[ElementModes.Stride * e];
             ref double end = ref Unsafe.Add(ref start, Six);
             (int i, int j) = (_layout.Starts[e], _layout.Ends[e]);
@@ -75,12 +80,18 @@ internal sealed class StiffnessBlocks
             }
         }
 
+        foreach (FrameLayout.NodeSprings springs in _layout.Springs)
+        {
+            for (int i = 0; i < Six; i++)
+            {
+                _own[(BlockSize * springs.Place) + ((Six + 1) * i)] += springs.Rates[i];
+            }
+        }
+
         for (int k = 0; k < Diagonal.Length; k++)
         {
             Diagonal[k] = _own[(BlockSize * (k / Six)) + ((Six + 1) * (k % Six))];
         }
-
-        Norm = LargestRowSum();
     }
 
     /// <summary>Adds a front's blocks to its panel; a held freedom's row is its own stiffness alone.</summary>
@@ -197,52 +208,6 @@ internal sealed class StiffnessBlocks
 
             four.StoreUnsafe(ref target, Six * c);
             two.StoreUnsafe(ref target, (Six * c) + 4);
-        }
-    }
-
-    private double LargestRowSum()
-    {
-        bool[] held = _layout.HeldAt;
-        Array.Clear(_rowSums);
-        for (int place = 0; place < _layout.NodeAt.Length; place++)
-        {
-            AddSums(_own.AsSpan(BlockSize * place, BlockSize), place, place, both: false);
-        }
-
-        for (int pair = 0; pair < _layout.PairRows.Length; pair++)
-        {
-            AddSums(_pairs.AsSpan(BlockSize * pair, BlockSize), _layout.PairRows[pair], _layout.PairColumns[pair], both: true);
-        }
-
-        double largest = 0;
-        for (int k = 0; k < _rowSums.Length; k++)
-        {
-            if (!held[k])
-            {
-                largest = Math.Max(largest, _rowSums[k]);
-            }
-        }
-
-        return largest;
-    }
-
-    private void AddSums(ReadOnlySpan<double> block, int row, int column, bool both)
-    {
-        Span<double> ofRows = _rowSums.AsSpan(Six * row, Six);
-        Span<double> ofColumns = _rowSums.AsSpan(Six * column, Six);
-        ReadOnlySpan<bool> heldRows = _layout.HeldAt.AsSpan(Six * row, Six);
-        ReadOnlySpan<bool> heldColumns = _layout.HeldAt.AsSpan(Six * column, Six);
-        for (int c = 0; c < Six; c++)
-        {
-            double sum = 0;
-            for (int r = 0; r < Six; r++)
-            {
-                double size = Math.Abs(block[(Six * c) + r]);
-                sum += heldRows[r] ? 0 : size;
-                ofRows[r] += heldColumns[c] ? 0 : size;
-            }
-
-            ofColumns[c] += both ? sum : 0;
         }
     }
 }

@@ -51,6 +51,7 @@ public sealed class RefinedFrame
                     StartOffset = i == 1 ? whole.StartOffset : Vector3.Zero,
                     End = isLast ? whole.End : nodes.Count,
                     EndOffset = isLast ? whole.EndOffset : Vector3.Zero,
+                    Hinges = whole.Hinges & ((i == 1 ? Hinges.Start : Hinges.None) | (isLast ? Hinges.End : Hinges.None)),
                 });
                 if (!isLast)
                 {

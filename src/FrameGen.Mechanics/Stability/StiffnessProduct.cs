@@ -2,7 +2,7 @@ using FrameGen.Mechanics.Frames;
 
 namespace FrameGen.Mechanics.Stability;
 
-/// <summary>K x from the elements' ways to strain, without an assembled matrix.</summary>
+/// <summary>K x from the elements' ways to strain and the springs, without an assembled matrix.</summary>
 internal static class StiffnessProduct
 {
     private const int Six = SymbolicFactor.Six;
@@ -24,6 +24,14 @@ internal static class StiffnessProduct
                 double force = frame.OfModes[(ElementModes.Modes * e) + m] * (Strain(g, start, x) + Strain(g[Six..], end, x));
                 Add(g, force, start, y);
                 Add(g[Six..], force, end, y);
+            }
+        }
+
+        foreach (FrameLayout.NodeSprings springs in layout.Springs)
+        {
+            for (int i = 0; i < Six; i++)
+            {
+                y[(Six * springs.Place) + i] += springs.Rates[i] * x[(Six * springs.Place) + i];
             }
         }
 

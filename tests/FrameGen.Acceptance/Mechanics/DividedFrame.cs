@@ -17,8 +17,12 @@ internal sealed class DividedFrame(int divisions, string heldEverywhere, params 
     private readonly List<BeamElement> elements = [];
     private readonly List<BeamProfile> profiles = [];
     private readonly List<(int Node, string Held)> held = [];
+    private readonly List<Restraint> springs = [];
     private readonly List<NodalLoad> loads = [];
     private readonly List<ElementLoad> elementLoads = [];
+
+    /// <summary>Of a frequency, relative.</summary>
+    public double LargestResidual { get; init; } = 1e-8;
 
     public DividedFrame Profile(BeamProfile profile)
     {
@@ -30,6 +34,20 @@ internal sealed class DividedFrame(int divisions, string heldEverywhere, params 
     {
         Vector3 along = nodes[end] - nodes[start];
         elements.Add(new BeamElement(start, end, Vector3.Zero, Vector3.Zero, TubeAxes.Along(along), profiles.Count - 1));
+        return this;
+    }
+
+    /// <summary>Hinges the last member.</summary>
+    public DividedFrame Hinge(Hinges hinges)
+    {
+        elements[^1] = elements[^1] with { Hinges = hinges };
+        return this;
+    }
+
+    /// <summary>Stands a node on springs: six rates, along x, y, z and about x, y, z.</summary>
+    public DividedFrame Spring(int node, params double[] rates)
+    {
+        springs.Add(new Restraint(node, new bool[6]) { Springs = rates });
         return this;
     }
 
@@ -83,13 +101,13 @@ internal sealed class DividedFrame(int divisions, string heldEverywhere, params 
 
         IReadOnlyList<VibrationMode> modes = NaturalFrequencies.Lowest(factored, new FrameMass(inertias, points), count);
         Assert.Equal(count, modes.Count);
-        Assert.All(modes, m => Assert.InRange(m.Residual, 0, 1e-8));
+        Assert.All(modes, m => Assert.InRange(m.Residual, 0, LargestResidual));
         return [.. modes.Select(m => m.Hertz)];
     }
 
     private List<Restraint> Restraints(int count)
     {
-        List<Restraint> restraints = [.. held.Select(h => Held(h.Node, h.Held))];
+        List<Restraint> restraints = [.. held.Select(h => Held(h.Node, h.Held)), .. springs];
         restraints.AddRange(Enumerable.Range(0, count).Select(n => Held(n, heldEverywhere)));
         return restraints;
     }

@@ -44,7 +44,7 @@ public class SparseSolverTests
         FactoredFrame factored = solver.Factor(Design);
         FrameSolution solution = factored.Solve(loads);
         Assert.Equal(hasDomains, factored.Layout.Symbolic.Domains.Length > 0);
-        Assert.InRange(solution.BackwardError, 0, 1e-14);
+        Assert.InRange(solution.BackwardError, 0, 1e-11);
         Assert.InRange(solution.EquilibriumError, 0, 1e-10);
     }
 
@@ -173,26 +173,20 @@ public class SparseSolverTests
         Assert.Equal(Enumerable.Range(0, Count), NestedDissection.Order(new Vector3[Count], starts, neighbours).Order());
     }
 
-    // A soft cantilever with a stub a million times stiffer at its end: the stub carries on straight.
-    [Fact]
-    public void Very_stiff_tubes_beside_soft_ones_are_no_mechanism()
+    // A soft cantilever with a stub much stiffer at its end: the stub carries on straight.
+    [Theory]
+    [InlineData(1e6)]
+    [InlineData(1e9)]
+    public void Very_stiff_tubes_beside_soft_ones_are_no_mechanism(double ratio)
     {
         BeamProfile soft = FrameSketch.Profile(30, 2);
-        FrameSolution solution = StubOnCantilever(soft, 1e6);
+        FrameSolution solution = StubOnCantilever(soft, ratio);
         double ei = soft.E * soft.Iy;
         double sag = (100 * 1e9 / (3 * ei)) + (100 * 1000 / (soft.G * soft.ShearAreaZ)) + (100 * 250 * 1e6 / (2 * ei));
         double slope = (100 * 1e6 / (2 * ei)) + (100 * 250 * 1000 / ei);
         double tip = sag + (250 * slope);
         Assert.Equal(-tip, solution.Displacement(2).Z, 1e-6 * tip);
-        Assert.InRange(solution.EquilibriumError, 0, 1e-7);
-    }
-
-    // Doubles can't hold a ratio of 1e12: the answer says so itself, by loads and reactions that don't balance.
-    [Fact]
-    public void An_answer_lost_to_rounding_is_told_by_its_equilibrium()
-    {
-        FrameSolution solution = StubOnCantilever(FrameSketch.Profile(30, 2), 1e12);
-        Assert.True(solution.EquilibriumError > 1e-9);
+        Assert.InRange(solution.EquilibriumError, 0, 1e-10);
     }
 
     private static FrameSketch Block(int side, bool isHeld)
