@@ -101,7 +101,7 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
         }
     }
 
-    /// <summary>For each case the node that moves most and the most stressed tube.</summary>
+    /// <summary>For each case the node that moves most and the most used tube, with what its stress comes from.</summary>
     public void PrintCases()
     {
         if (sized.Cases.Count == 0)
@@ -111,22 +111,51 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
 
         // Stress with the decimals that give the largest of them four digits.
         int decimals = Decimals(sized.Cases.Max(c => c.Tubes.Max(t => t.MaxStress)), 4);
-        var table = new ReportTable("Load cases", "case", ">moves " + _display.LengthUnitName, "at node", ">stress MPa", "in tube", ">at " + _display.LengthUnitName);
+        var table = new ReportTable(
+            "Load cases", "case", ">moves " + _display.LengthUnitName, "at node", ">stress MPa", ">used", "in tube", ">at " + _display.LengthUnitName);
+        var why = new List<string>();
         foreach (CaseResult result in sized.Cases)
         {
             (int node, Vector3 shift) = result.LargestDisplacement();
-            int tube = Enumerable.Range(0, result.Tubes.Count).MaxBy(i => result.Tubes[i].MaxStress);
+            int tube = result.MostUsedTube();
+            TubeForces forces = result.Tubes[tube];
+            string name = _model.Cases[result.Case].Name;
             table.Row(
-                _model.Cases[result.Case].Name,
+                name,
                 _display.SmallLengthNumber(shift.Length),
                 _model.Nodes[node].Name,
-                Fixed(result.Tubes[tube].MaxStress, decimals),
+                Fixed(forces.Use?.Stress ?? forces.MaxStress, decimals),
+                forces.Use is { } used ? Percent(used.Share) : "-",
                 _model.Tubes[tube].Name,
-                _display.LengthNumber(result.Tubes[tube].MaxStressAt));
+                _display.LengthNumber(forces.Use?.At ?? forces.MaxStressAt));
+            if (forces.Use is { Share: > 0 } use)
+            {
+                why.Add($"{name}: {_model.Tubes[tube].Name} {Place(tube, use)}, yield {Fixed(use.Yield, 0)} MPa there; {Shares(use.Shares)}");
+            }
         }
 
         table.Draw(terminal);
+        foreach (string line in why)
+        {
+            terminal.Draw(new Text(line));
+        }
+
+        double error = sized.Cases.Max(c => Math.Max(c.EquilibriumError, c.BackwardError));
+        terminal.Out.WriteLine(
+            error > 0
+                ? $"Loads, inner forces and reactions balance to within 1e{Whole((int)Math.Ceiling(Math.Log10(error)))} of their size."
+                : "Loads, inner forces and reactions balance.");
     }
+
+    private string Place(int tube, TubeUse use)
+    {
+        (int node, double distance) = _model.NearestNode(tube, use.At);
+        string near = distance < 0.5 ? $"at node {_model.Nodes[node].Name}" : $"{_display.Length(distance)} from node {_model.Nodes[node].Name}";
+        return use.NearWeld ? $"{near}, in reach of a weld" : near;
+    }
+
+    private static string Shares(StressShares shares) =>
+        string.Join(", ", shares.Ordered.Where(s => s.Share >= 0.005).Select(s => $"{s.Name} {(100 * s.Share).ToString("0", CultureInfo.InvariantCulture)} %"));
 
     /// <summary>What every support puts on the frame, case by case.</summary>
     public void PrintReactions()
@@ -136,7 +165,7 @@ internal sealed class FrameReport(Terminal terminal, SizedFrame sized)
             return;
         }
 
-        bool turns = _model.Supports.Any(s => s.Held.Skip(3).Any(h => h));
+        bool turns = _model.Supports.Any(s => s.ResistsTurning);
         string f = _display.ForceUnitName;
         string m = _display.MomentUnitName;
         string title = turns ? $"Supports push on the frame, {f} and {m}" : $"Supports push on the frame, {f}";

@@ -9,7 +9,7 @@ namespace FrameGen.Cli.Reports;
 /// <summary>
 /// What <c>--json</c> prints: <c>{"format": "framegen-run/1", "command", "exit_code", "folder", "diagnostics": [{"severity",
 /// "file", "line", "column", "message"}], "frame"}</c>. <c>frame</c> is frame.json, without tubes, parts and totals where the
-/// ends were not cut, and null where there is no frame; <c>folder</c> is null where nothing was written.
+/// ends were not cut, and null where there is no frame; <c>folder</c> is null where nothing was written. <c>check</c> adds <see cref="AnalysisJson"/>.
 /// </summary>
 internal static class JsonReport
 {
@@ -55,6 +55,11 @@ internal static class JsonReport
             else
             {
                 json.WriteNullValue();
+            }
+
+            if (command is "check" && sized is not null)
+            {
+                AnalysisJson.Write(json, sized);
             }
 
             json.WriteEndObject();

@@ -21,8 +21,14 @@ public sealed class BeamStrains(FrameSolver solver)
     /// <param name="element">Index of the element.</param>
     /// <param name="profile">Its profile.</param>
     /// <param name="stiffness">Out: six values.</param>
-    public void Stiffness(int element, in BeamProfile profile, Span<double> stiffness) =>
+    public void Stiffness(int element, in BeamProfile profile, Span<double> stiffness)
+    {
         ElementModes.Stiffness(profile, _modes.Lengths[element], stiffness);
+        if (_modes.Hinges[element] != Hinges.None)
+        {
+            ElementModes.Release(_modes.Hinges[element], _modes.Lengths[element], stiffness);
+        }
+    }
 
     /// <summary>The six strains gᵀu of an element, mm and rad.</summary>
     /// <param name="element">Index of the element.</param>

@@ -30,7 +30,8 @@ internal sealed class JointPlan
         if (joint.Through is { } through)
         {
             Tube tube = model.Tubes[through];
-            before.Add(new MateSource(through, new Line3(tube.From.Point, tube.Axes.X), tube.Axes, Skin(through), null));
+            double place = model.Nodes[joint.Node].ThroughDistance;
+            before.Add(new MateSource(through, AxisAt(tube, place), tube.AxesAt(place), Skin(through), null));
         }
 
         for (int i = 0; i < count; i++)
@@ -72,7 +73,12 @@ internal sealed class JointPlan
         Outline Skin(int tube) => sections[model.Tubes[tube].Group].Outline;
     }
 
-    private static EndFrame Frame(Tube tube, End end) => new(tube[end].Point, tube.Into(end), tube.Axes);
+    private static EndFrame Frame(Tube tube, End end) => new(tube[end].Point, tube.Into(end), tube.AxesAt(end == End.From ? 0 : tube.Length));
+
+    // Joints stand on the straights of a bent tube.
+    private static Line3 AxisAt(Tube tube, double distance) => tube.Bent is { } bent
+        ? new Line3(bent.PieceAt(distance).Origin, bent.PieceAt(distance).Along)
+        : new Line3(tube.From.Point, tube.Axes.X);
 
     // One plane for both tubes. Their end points agree but where their axes are written to pass the node at different
     // distances; then it stands halfway between them.

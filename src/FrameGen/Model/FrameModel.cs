@@ -49,6 +49,23 @@ public sealed record FrameModel(
     /// <summary>True where a tube ends at a node or runs through it.</summary>
     public bool MeetsATube(int node) => EndsAt[node].Count > 0 || Nodes[node].Through is not null;
 
+    /// <summary>The node of a tube, at its ends or on it, that is nearest to a place; the earlier of two.</summary>
+    /// <param name="tube">Index of the tube.</param>
+    /// <param name="at">Distance from its start along its axis, mm.</param>
+    /// <returns>The node and how far it is along the axis, mm.</returns>
+    public (int Node, double Distance) NearestNode(int tube, double at)
+    {
+        Tube along = Tubes[tube];
+        (int Node, double Distance) nearest = (along.From.Node, at);
+        foreach ((int node, double place) in along.NodesOn.Select(n => (n, Nodes[n].ThroughDistance)).Append((along.To.Node, along.Length)))
+        {
+            double distance = Math.Abs(at - place);
+            nearest = distance < nearest.Distance ? (node, distance) : nearest;
+        }
+
+        return nearest;
+    }
+
     private static List<TubeEndId>[] EndsByNode(int nodes, IReadOnlyList<Tube> tubes)
     {
         var ends = new List<TubeEndId>[nodes];

@@ -3,11 +3,21 @@ using FrameGen.Geometry;
 
 namespace FrameGen.Model;
 
-/// <summary>A held node.</summary>
+/// <summary>A node that is held or stands on springs.</summary>
 /// <param name="Node">Index of the node.</param>
 /// <param name="Held">Six flags: x, y, z, rx, ry, rz.</param>
 /// <param name="At">Where it is written.</param>
-public sealed record Support(int Node, IReadOnlyList<bool> Held, SourcePlace At);
+public sealed record Support(int Node, IReadOnlyList<bool> Held, SourcePlace At)
+{
+    /// <summary>Rates of the springs it stands on, in the same order, N/mm and N·mm/rad; 0 for none.</summary>
+    public IReadOnlyList<double> Springs { get; init; } = new double[6];
+
+    /// <summary>Whether something works against a freedom, 0 to 5.</summary>
+    public bool Resists(int freedom) => Held[freedom] || Springs[freedom] > 0;
+
+    /// <summary>Whether something works against turning.</summary>
+    public bool ResistsTurning => Resists(3) || Resists(4) || Resists(5);
+}
 
 /// <summary>A mass on a node, or spread evenly along a tube's axis; one of the two is given.</summary>
 public sealed record CarriedMass(int? Node, int? Tube, double Kg);

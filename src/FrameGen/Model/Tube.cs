@@ -1,5 +1,6 @@
 using FrameGen.Diagnostics;
 using FrameGen.Geometry;
+using FrameGen.Mechanics.Frames;
 using FrameGen.Spec;
 
 namespace FrameGen.Model;
@@ -19,12 +20,12 @@ public enum End
 /// <param name="End">Which end.</param>
 public readonly record struct TubeEndId(int Tube, End End);
 
-/// <summary>A straight tube.</summary>
+/// <summary>A tube, straight or bent.</summary>
 /// <param name="Name">Unique without regard to case.</param>
 /// <param name="From">End at x = 0.</param>
 /// <param name="To">End at x = <see cref="Length"/>.</param>
 /// <param name="Group">Index of its group.</param>
-/// <param name="Axes">Local axes.</param>
+/// <param name="Axes">Local axes; of the first straight where it bends.</param>
 /// <param name="NodesOn">Nodes that lie on it, by distance from its start.</param>
 /// <param name="Original">Index of the tube it is the mirrored twin of; null for an original.</param>
 /// <param name="At">Where it is written.</param>
@@ -38,14 +39,26 @@ public sealed record Tube(
     int? Original,
     SourcePlace At)
 {
-    /// <summary>Length of the axis between its own ends, mm.</summary>
-    public double Length => (To.Point - From.Point).Length;
+    /// <summary>Its axis where it bends; null for a straight tube.</summary>
+    public TubePath? Bent { get; init; }
+
+    /// <summary>Moments that its ends do not carry, about local axes there.</summary>
+    public Hinges Hinges { get; init; }
+
+    /// <summary>Length of the axis between its own ends, round its bends, mm.</summary>
+    public double Length => Bent?.Length ?? (To.Point - From.Point).Length;
+
+    /// <summary>The point of the axis at a distance along it from its start, mm.</summary>
+    public Vector3 PointAt(double distance) => Bent?.PointAt(distance) ?? From.Point + (distance * Axes.X);
+
+    /// <summary>Local axes at a distance along its axis from its start: carried round the bends with the tube.</summary>
+    public TubeAxes AxesAt(double distance) => Bent?.Carry(Axes, distance) ?? Axes;
 
     /// <summary>The end asked for.</summary>
     public TubeEnd this[End end] => end == End.From ? From : To;
 
     /// <summary>Unit direction from an end into the tube.</summary>
-    public Vector3 Into(End end) => end == End.From ? Axes.X : -Axes.X;
+    public Vector3 Into(End end) => end == End.From ? Axes.X : -(Bent?.Pieces[^1].Along ?? Axes.X);
 }
 
 /// <summary>One end of a tube.</summary>

@@ -17,7 +17,7 @@ internal static class SizingJson
         WriteGroups(json, sized);
         WriteTargets(json, sized);
         WriteCases(json, sized);
-        if (sized.Frequencies is { } frequencies)
+        if (sized.Frequencies is { } frequencies && sized.Model.Targets.Any(t => t is FrequencyTarget))
         {
             json.Numbers("frequencies_hz", [.. frequencies]);
         }

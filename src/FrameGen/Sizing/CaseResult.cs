@@ -25,6 +25,23 @@ public sealed record CaseResult(
     /// <summary>Where it then moves most: <c>node top</c>, <c>tube strut</c>; empty when nothing is compressed.</summary>
     public string BucklesAt { get; init; } = "";
 
+    /// <summary>The tube nearest its yield, the first of equals; by the highest stress where the yield of some tube is not known.</summary>
+    public int MostUsedTube()
+    {
+        bool known = Tubes.All(t => t.Use is not null);
+        int most = 0;
+        for (int tube = 1; tube < Tubes.Count; tube++)
+        {
+            // Twins are used alike but for rounding: the first of them is named.
+            (double before, double here) = known
+                ? (Tubes[most].Use!.Value.Share, Tubes[tube].Use!.Value.Share)
+                : (Tubes[most].MaxStress, Tubes[tube].MaxStress);
+            most = here > before * (1 + 1e-9) ? tube : most;
+        }
+
+        return most;
+    }
+
     /// <summary>The node that moves most, the first of equals, and its displacement, mm.</summary>
     public (int Node, Vector3 Displacement) LargestDisplacement()
     {
@@ -49,6 +66,9 @@ public sealed record CaseResult(
 /// <param name="MinAxial">Lowest axial force along the tube, N: the greatest compression when negative.</param>
 public sealed record TubeForces(double MaxStress, double MaxStressAt, double AxialFrom, double AxialTo, double MinAxial)
 {
+    /// <summary>Its internal forces from end to end.</summary>
+    public required TubeDiagram Diagram { get; init; }
+
     /// <summary>Where the tube is nearest its yield; null where its material's yield is not known.</summary>
     public TubeUse? Use { get; init; }
 }
@@ -59,4 +79,8 @@ public sealed record TubeForces(double MaxStress, double MaxStressAt, double Axi
 /// <param name="Stress">Von Mises stress there, MPa.</param>
 /// <param name="Yield">Yield there, MPa.</param>
 /// <param name="NearWeld">True within reach of a weld, where the welded yield holds.</param>
-public readonly record struct TubeUse(double Share, double At, double Stress, double Yield, bool NearWeld);
+public readonly record struct TubeUse(double Share, double At, double Stress, double Yield, bool NearWeld)
+{
+    /// <summary>What the stress comes from.</summary>
+    public StressShares Shares { get; init; }
+}

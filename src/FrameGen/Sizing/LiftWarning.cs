@@ -18,7 +18,7 @@ internal static class LiftWarning
         for (int support = 0; support < model.Supports.Count; support++)
         {
             Support held = model.Supports[support];
-            if (!held.Held[2] || held.Held.Skip(3).Any(h => h))
+            if (!held.Resists(2) || held.ResistsTurning)
             {
                 continue;
             }

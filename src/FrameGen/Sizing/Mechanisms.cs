@@ -29,7 +29,12 @@ internal static class Mechanisms
             catch (MechanismException mechanism)
             {
                 still = false;
-                (SourcePlace? at, string when) = FirstUse(structure, solver);
+                if (FirstUse(structure, solver) is not var (at, when))
+                {
+                    // Frequencies that no target asks for: a case has said it.
+                    continue;
+                }
+
                 foreach (Mechanism motion in mechanism.Motions)
                 {
                     diagnostics.Error(at, Describe(structure, motion) + when);
@@ -44,6 +49,13 @@ internal static class Mechanisms
     private static string Describe(StructuralModel structure, Mechanism motion)
     {
         (string subject, bool one) = Moved(structure, motion);
+        string hinges = Hinged(structure, motion);
+        if (hinges.Length > 0)
+        {
+            string how = motion.TurnsAbout is { } turn ? $"turn about {Wording.Axis(turn)}" : motion.Slides is { } slide ? $"slide along {Wording.Axis(slide)}" : "move without strain";
+            return $"{subject} can {how}: {hinges}; leave one of the hinges out, add a tube or hold the frame there";
+        }
+
         if (motion.Slides is { } along)
         {
             string axis = Wording.Axis(along);
@@ -65,6 +77,20 @@ internal static class Mechanisms
     /// <summary>What moves: the whole frame, or its nodes by name.</summary>
     public static string Subject(StructuralModel structure, Mechanism motion) => Moved(structure, motion).Text;
 
+    // Which hinges let it go: those of the tubes at the nodes that move, where not all of the frame does.
+    private static string Hinged(StructuralModel structure, Mechanism motion)
+    {
+        FrameModel model = structure.Model;
+        List<int> nodes = [.. motion.Nodes.Order().Select(j => structure.Topology.NodeOfJoint[j]).Where(n => n >= 0)];
+        List<string> tubes = [.. model.Tubes.Where(t => t.Hinges != Hinges.None && (nodes.Contains(t.From.Node) || nodes.Contains(t.To.Node))).Select(t => t.Name)];
+        return tubes.Count switch
+        {
+            0 => "",
+            1 => $"tube {tubes[0]} has a hinge there, and nothing else stops it",
+            _ => $"tubes {Wording.List(tubes)} have hinges there, and nothing else stops it",
+        };
+    }
+
     private static (string Text, bool One) Moved(StructuralModel structure, Mechanism motion)
     {
         Topology topology = structure.Topology;
@@ -72,14 +98,14 @@ internal static class Mechanisms
         int all = topology.NodeOfJoint.Count(n => n >= 0);
         return names.Count switch
         {
-            0 => ("a loaded place on a tube", true),
+            0 => ("a place on a tube", true),
             _ when names.Count == all => ("the frame", false),
             1 => (names[0], true),
             _ => (Wording.List(names), false),
         };
     }
 
-    private static (SourcePlace? At, string When) FirstUse(StructuralModel structure, int solver)
+    private static (SourcePlace? At, string When)? FirstUse(StructuralModel structure, int solver)
     {
         FrameModel model = structure.Model;
         List<LoadCase> cases = [.. model.Cases.Where((_, i) => structure.Cases[i].Solver == solver)];
@@ -92,7 +118,9 @@ internal static class Mechanisms
             ? (cases[0].At, $" (with the supports of {(cases.Count == 1 ? "case" : "cases")} {Wording.List([.. cases.Select(c => c.Name)])})")
             : structure.Units.FirstOrDefault(u => u.Solver == solver) is { } unit
                 ? (unit.Target.At, " (with the supports of this stiffness target)")
-                : (model.Targets.OfType<FrequencyTarget>().First().At, " (with all supports, for the frequency target)");
+                : model.Targets.OfType<FrequencyTarget>().FirstOrDefault() is { } frequency
+                    ? (frequency.At, " (with all supports, for the frequency target)")
+                    : null;
     }
 
     private static double Clean(double value) => Math.Abs(value) < 1e-6 ? 0 : value;

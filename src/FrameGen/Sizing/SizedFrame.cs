@@ -40,7 +40,7 @@ public sealed record SizedFrame(
     IReadOnlyList<CaseResult> Cases,
     IReadOnlyList<NodeJoint> Joints)
 {
-    /// <summary>The lowest natural frequencies, Hz, lowest first; null when no target asks for them.</summary>
+    /// <summary>The lowest natural frequencies, Hz, lowest first, with all supports or those of the frequency target; null when nothing is analysed.</summary>
     public IReadOnlyList<double>? Frequencies { get; init; }
 
     /// <summary>What would be chosen today, where the sizes are pinned; null where they are not, or where nothing could be chosen.</summary>

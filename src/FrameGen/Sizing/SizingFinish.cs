@@ -98,7 +98,7 @@ internal static class SizingFinish
                 diagnostics.Error(
                     at,
                     $"the numbers of {what} can't be trusted: loads and reactions, or stiffness and loads, disagree by {Wording.Number(error)} of their size "
-                    + $"(allowed {Wording.Number(LargestError)}); very stiff and very soft tubes, or very short and very long ones, are joined: bring them closer together");
+                    + $"(allowed {Wording.Number(LargestError)}); {StiffnessContrast.Describe(analysis, solution.WorstNode)}");
                 sound = false;
             }
         }

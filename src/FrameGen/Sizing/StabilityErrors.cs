@@ -26,13 +26,13 @@ internal static class StabilityErrors
         {
             foreach (VibrationMode mode in analysis.Stability.Modes())
             {
-                Ask(mode.Residual, "a frequency", model.Targets.OfType<FrequencyTarget>().First().At);
+                Ask(mode.Residual, "a frequency", model.Targets.OfType<FrequencyTarget>().FirstOrDefault()?.At);
             }
         }
 
         return sound;
 
-        void Ask(double error, string what, SourcePlace at)
+        void Ask(double error, string what, SourcePlace? at)
         {
             // "Not within", so that NaN is refused as well.
             if (!(error <= LargestResidual))

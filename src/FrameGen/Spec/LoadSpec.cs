@@ -6,7 +6,11 @@ namespace FrameGen.Spec;
 /// <param name="Node">Its name.</param>
 /// <param name="Held">Six flags: x, y, z, rx, ry, rz.</param>
 /// <param name="Mirror">False where it has no twin.</param>
-public sealed record SupportSpec(Placed<string> Node, IReadOnlyList<bool> Held, bool Mirror);
+public sealed record SupportSpec(Placed<string> Node, IReadOnlyList<bool> Held, bool Mirror)
+{
+    /// <summary>Rates of the springs it stands on, in the same order; null where there is none.</summary>
+    public IReadOnlyList<SpecQuantity?> Springs { get; init; } = new SpecQuantity?[6];
+}
 
 /// <summary>A carried mass: on a node, or spread along a tube; one of the two is given.</summary>
 public sealed record MassSpec(Placed<string>? Node, Placed<string>? Tube, SpecQuantity Mass, bool Mirror, SourcePlace At);

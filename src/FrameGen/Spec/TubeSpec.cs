@@ -1,4 +1,5 @@
 using FrameGen.Diagnostics;
+using FrameGen.Mechanics.Frames;
 
 namespace FrameGen.Spec;
 
@@ -8,7 +9,19 @@ namespace FrameGen.Spec;
 /// <param name="To">Where its axis ends.</param>
 /// <param name="Group">The group whose section it has.</param>
 /// <param name="Up">Direction of the top line; null for the default.</param>
-public sealed record TubeSpec(Placed<string> Name, TubeEndSpec From, TubeEndSpec To, Placed<string> Group, SpecVector? Up);
+public sealed record TubeSpec(Placed<string> Name, TubeEndSpec From, TubeEndSpec To, Placed<string> Group, SpecVector? Up)
+{
+    /// <summary>Moments that its ends do not carry.</summary>
+    public Hinges Hinges { get; init; }
+
+    /// <summary>Where it bends; null for a straight tube.</summary>
+    public BendSpec? Bend { get; init; }
+}
+
+/// <summary>Where a tube bends, as written.</summary>
+/// <param name="Via">Nodes at the corners, in their order along the tube.</param>
+/// <param name="Radius">Of the axis in each bend.</param>
+public sealed record BendSpec(IReadOnlyList<Placed<string>> Via, SpecQuantity Radius);
 
 /// <summary>One end of a tube as written.</summary>
 /// <param name="Node">The node it belongs to.</param>

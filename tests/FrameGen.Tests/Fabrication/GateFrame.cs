@@ -139,7 +139,7 @@ internal static class GateFrame
                     [Vector3.Zero, new(0, 0, -1), new(0, 1e-20, -0.5), new(0, 0, -0.75), new(0, 0, -2 * ratio)],
                     [Vector3.Zero, Vector3.Zero, Vector3.Zero, Vector3.Zero, new(0, 0.001, 0)],
                     [(new Vector3(0, 0, 40), new Vector3(0, -9000, 0))],
-                    [new(20, 0, 1e-16, -3e-17, 0), new(30, 300, -12, -6, -12), new(10, 0, 0, 0, 0)],
+                    [Forces(20, 0, 1e-16, -3e-17, 0), Forces(30, 300, -12, -6, -12), Forces(10, 0, 0, 0, 0)],
                     1e-14,
                     1e-15),
             ],
@@ -201,4 +201,7 @@ internal static class GateFrame
     {
         public override double At(double clock, double radius) => t(clock, radius);
     }
+
+    private static TubeForces Forces(double stress, double at, double from, double to, double least) =>
+        new(stress, at, from, to, least) { Diagram = new TubeDiagram([]) };
 }

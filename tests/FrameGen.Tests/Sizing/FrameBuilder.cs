@@ -1,5 +1,6 @@
 using FrameGen.Diagnostics;
 using FrameGen.Geometry;
+using FrameGen.Mechanics.Frames;
 using FrameGen.Mechanics.Materials;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
@@ -65,6 +66,29 @@ internal sealed class FrameBuilder
         TubeEnd stop = EndAt(to, toOffset, wrap);
         _tubes.Add(new Tube(
             name, start, stop, GroupIndex(group), TubeAxes.Along(stop.Point - start.Point), [], null, Place));
+        return this;
+    }
+
+    /// <summary>Bends the tube of a name round corners.</summary>
+    public FrameBuilder Bend(string tube, double radius, params Vector3[] corners)
+    {
+        int t = TubeIndex(tube);
+        var path = TubePath.Through([_tubes[t].From.Point, .. corners, _tubes[t].To.Point], radius);
+        _tubes[t] = _tubes[t] with { Bent = path, Axes = TubeAxes.Along(path.Pieces[0].Along) };
+        return this;
+    }
+
+    public FrameBuilder Hinge(string tube, Hinges hinges)
+    {
+        int t = TubeIndex(tube);
+        _tubes[t] = _tubes[t] with { Hinges = hinges };
+        return this;
+    }
+
+    /// <summary>Six rates, along x, y, z and about them.</summary>
+    public FrameBuilder Spring(string node, params double[] rates)
+    {
+        _supports.Add(new Support(NodeIndex(node), new bool[6], Place) { Springs = rates });
         return this;
     }
 

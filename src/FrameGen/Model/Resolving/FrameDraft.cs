@@ -21,7 +21,11 @@ internal sealed record NodeDraft(string Name, NodePositionSpec Position, int? Or
 /// <param name="Original">Number of the tube it is the made twin of; null for what the spec writes out.</param>
 /// <param name="At">Where it, or its original, is written.</param>
 internal sealed record TubeDraft(
-    string Name, TubeSpec Spec, int? From, int? To, Vector3? FromOffset, Vector3? ToOffset, int? Original, SourcePlace At);
+    string Name, TubeSpec Spec, int? From, int? To, Vector3? FromOffset, Vector3? ToOffset, int? Original, SourcePlace At)
+{
+    /// <summary>Numbers of the nodes where it bends; null after an error. None for a straight tube.</summary>
+    public IReadOnlyList<int?> Via { get; init; } = [];
+}
 
 /// <summary>All nodes and tubes of a spec with their made twins, each twin right after its original.</summary>
 internal sealed class FrameDraft
@@ -93,7 +97,10 @@ internal sealed class FrameDraft
                 values.OrZero(spec.From.Offset),
                 values.OrZero(spec.To.Offset),
                 null,
-                spec.Name.At);
+                spec.Name.At)
+            {
+                Via = [.. (spec.Bend?.Via ?? []).Select(node => NodeNames.Find(node, whose, diagnostics))],
+            };
             int original = Add(draft, diagnostics);
             if (mirror is not null && mirror.HasTwin(spec.Name.Value)
                 && mirror.TwinOf(spec.Name, diagnostics) is { } twin && !written.Contains(twin))
@@ -111,6 +118,7 @@ internal sealed class FrameDraft
         FromOffset = draft.FromOffset is { } fromOffset ? mirror.Of(fromOffset) : null,
         ToOffset = draft.ToOffset is { } toOffset ? mirror.Of(toOffset) : null,
         Original = original,
+        Via = [.. draft.Via.Select(node => node is { } corner ? ImageOfNode(corner, mirror) : (int?)null)],
     };
 
     private int Add(NodeDraft node, DiagnosticList diagnostics)

@@ -144,8 +144,8 @@ internal sealed class JointResolver
                 $"{whose}: {names} can't be mitred, since their axes end {apart:0.###} mm apart; give both the same offset, or write order: [..]");
         }
 
-        Vector3 intoA = endA == End.From ? a.Axes.X : -a.Axes.X;
-        Vector3 intoB = endB == End.From ? b.Axes.X : -b.Axes.X;
+        Vector3 intoA = a.Into(endA);
+        Vector3 intoB = b.Into(endB);
         if (intoA.AngleTo(intoB) < 1e-3)
         {
             isSound = Error(joint.At, $"{whose}: {names} can't be mitred, since they lie on each other; no plane parts them");

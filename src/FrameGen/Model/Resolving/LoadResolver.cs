@@ -125,13 +125,22 @@ internal sealed class LoadResolver
             return null;
         }
 
-        Vector3 image = _frame.Mirror!.Of(original.From.Point + (distance * original.Axes.X));
+        Vector3 image = _frame.Mirror!.Of(original.PointAt(distance));
+        if (_frame.Draft.AreTwins(tube, twin) && (placed.PointAt(distance) - image).Length <= NodePlacement.Near)
+        {
+            return Math.Min(distance, placed.Length);
+        }
+
+        if (placed.Bent is not null && (placed.PointAt(placed.Length - distance) - image).Length <= NodePlacement.Near)
+        {
+            return Math.Max(0, placed.Length - distance);
+        }
+
         double there = Math.Clamp((image - placed.From.Point).Dot(placed.Axes.X), 0, placed.Length);
         double miss = (image - (placed.From.Point + (there * placed.Axes.X))).Length;
-        if (miss <= NodePlacement.Near)
+        if (miss <= NodePlacement.Near && original.Bent is null && placed.Bent is null)
         {
-            bool isMirrorImage = _frame.Draft.AreTwins(tube, twin) && Math.Abs(there - distance) <= Lengths.Same;
-            return isMirrorImage ? Math.Min(distance, placed.Length) : there;
+            return there;
         }
 
         _frame.Diagnostics.Error(

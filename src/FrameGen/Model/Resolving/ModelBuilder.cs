@@ -35,7 +35,13 @@ internal static class ModelBuilder
             TubeDraft draft = frame.Draft.Tubes[tube];
             PlacedTube placed = frame.Tubes[tube]!;
             int[] nodesOn = [.. (on[tube] ?? []).Order().Select(n => n.Node)];
-            tubes[tube] = new Tube(draft.Name, placed.From, placed.To, groups.OfTube(tube), placed.Axes, nodesOn, draft.Original, draft.At);
+            tubes[tube] = new Tube(draft.Name, placed.From, placed.To, groups.OfTube(tube), placed.Axes, nodesOn, draft.Original, draft.At)
+            {
+                Bent = placed.Bent,
+
+                // The local axes of a mirror image may point the other way; what they carry is the same.
+                Hinges = draft.Spec.Hinges,
+            };
         }
 
         return tubes;

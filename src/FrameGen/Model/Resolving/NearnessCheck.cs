@@ -60,22 +60,45 @@ internal static class NearnessCheck
                 continue;
             }
 
-            tree.FindNear(axis.From.Point, axis.To.Point, NodePlacement.Near, near);
-            foreach (int number in near)
+            foreach ((int number, PathPiece chord) in NodesNear(axis, tree, near))
             {
                 int node = placed[number];
                 Vector3 place = nodes.PositionOf(node)!.Value;
-                bool joined = node == axis.From.Node || node == axis.To.Node || nodes.ThroughOf(node)?.Tube == tube;
+                double distance = chord.Start + (place - chord.Origin).Dot(chord.Along);
+                bool joined = node == axis.From.Node || node == axis.To.Node || nodes.ThroughOf(node)?.Tube == tube || frame.Tubes[tube].Via.Contains(node);
                 bool isAtAnEndNode = IsNear(place, nodes.PositionOf(axis.From.Node)) || IsNear(place, nodes.PositionOf(axis.To.Node));
                 bool isSaidOfOriginals = frame.Nodes[node].Original is not null && frame.Tubes[tube].Original is not null;
                 if (!joined && !isAtAnEndNode && !isSaidOfOriginals)
                 {
                     found++;
                     string? through = nodes.ThroughOf(node) is { } other ? frame.Tubes[other.Tube].Name : null;
-                    SayOnAxis(frame.Nodes[node], frame.Tubes[tube].Name, (place - axis.From.Point).Dot(axis.Axes.X), through, diagnostics);
+                    SayOnAxis(frame.Nodes[node], frame.Tubes[tube].Name, distance, through, diagnostics);
                 }
             }
         }
+    }
+
+    // Nodes near an axis, each with the straight that it is near to: in its bends as chords of a degree, which stay within 0.05 mm of an arc of 1 m.
+    private static List<(int Number, PathPiece Chord)> NodesNear(PlacedTube axis, PointTree tree, List<int> near)
+    {
+        var found = new List<(int Number, PathPiece Chord)>();
+        IReadOnlyList<PathPiece> pieces = axis.Bent?.Pieces ?? [new PathPiece(0, axis.Length, axis.From.Point, axis.Axes.X, Vector3.Zero, 0)];
+        foreach (PathPiece piece in pieces.Where(p => p.Length > 0))
+        {
+            int chords = piece.IsArc ? (int)Math.Ceiling(piece.Length / piece.Radius * 180 / Math.PI) : 1;
+            for (int i = 0; i < chords; i++)
+            {
+                double start = i * piece.Length / chords;
+                Vector3 from = piece.PointAt(start);
+                Vector3 to = piece.PointAt((i + 1) * piece.Length / chords);
+                tree.FindNear(from, to, NodePlacement.Near, near);
+                var chord = new PathPiece(piece.Start + start, piece.Length / chords, from, (to - from).Normalized(), Vector3.Zero, 0);
+                int before = found.Count;
+                found.AddRange(near.Where(n => !found.Take(before).Any(f => f.Number == n)).Select(n => (n, chord)).ToList());
+            }
+        }
+
+        return found;
     }
 
     private static bool IsNear(Vector3 place, Vector3? other) => other is { } o && (place - o).Length <= NodePlacement.Near;
@@ -119,7 +142,9 @@ internal static class NearnessCheck
     private static bool Coincide(PlacedTube a, PlacedTube b)
     {
         (Vector3 from, Vector3 to) = a.From.Node == b.From.Node ? (b.From.Point, b.To.Point) : (b.To.Point, b.From.Point);
-        return IsNear(a.From.Point, from) && IsNear(a.To.Point, to);
+        bool sameWay = Math.Abs(a.Length - b.Length) <= NodePlacement.Near && (a.Bent is null) == (b.Bent is null)
+            && (a.Bent is null || IsNear(a.PointAt(a.Length / 2), b.PointAt(b.Length / 2)));
+        return sameWay && IsNear(a.From.Point, from) && IsNear(a.To.Point, to);
     }
 
     private static void SayCoincident(FrameDraft frame, int first, int second, Reflection? mirror, DiagnosticList diagnostics)

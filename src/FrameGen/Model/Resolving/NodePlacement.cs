@@ -19,6 +19,7 @@ internal sealed class NodePlacement
     private readonly int?[][] _needs;
     private readonly Vector3?[] _positions;
     private readonly (int Tube, double Distance)?[] _through;
+    private readonly BendPlacement _bends;
 
     private NodePlacement(FrameDraft frame, Reflection? mirror, SpecValues values)
     {
@@ -27,6 +28,7 @@ internal sealed class NodePlacement
         _needs = new int?[count][];
         _positions = new Vector3?[count];
         _through = new (int, double)?[count];
+        _bends = new BendPlacement(frame, values);
     }
 
     private DiagnosticList Diagnostics => _values.Diagnostics;
@@ -84,7 +86,10 @@ internal sealed class NodePlacement
         }
     }
 
-    private int?[] EndsOf(int tube) => [_frame.Tubes[tube].From, _frame.Tubes[tube].To];
+    /// <summary>The axis of a bent tube; null for a straight one, and after an error.</summary>
+    public TubePath? BentAxisOf(int tube) => _bends.PathOf(tube, AxisOf(tube), PositionOf);
+
+    private int?[] EndsOf(int tube) => [_frame.Tubes[tube].From, _frame.Tubes[tube].To, .. _frame.Tubes[tube].Via];
 
     // The tube that the twin of a node on a tube lies on: the mirror image of that tube.
     private int? ImageOfTubeUnder(int original) =>
@@ -139,8 +144,10 @@ internal sealed class NodePlacement
             return null;
         }
 
-        double length = (axis.To - axis.From).Length;
-        if (!(length > Near))
+        bool isBent = _frame.Tubes[tube].Spec.Bend is not null;
+        TubePath? bent = isBent ? BentAxisOf(tube) : null;
+        double length = bent?.Length ?? (axis.To - axis.From).Length;
+        if (!(length > Near) || (isBent && bent is null))
         {
             return null;
         }
@@ -152,8 +159,23 @@ internal sealed class NodePlacement
             return null;
         }
 
+        if (bent is not null && bent.PieceAt(along) is { IsArc: true } arc)
+        {
+            SayInBend(node, tube, along, arc, bent, on.Tube.At);
+            return null;
+        }
+
         _through[node] = (tube, along);
-        return Along(axis, along / length);
+        return bent?.PointAt(along) ?? Along(axis, along / length);
+    }
+
+    private void SayInBend(int node, int tube, double along, PathPiece arc, TubePath bent, SourcePlace at)
+    {
+        string straights = string.Join(", ", bent.Pieces.Where(p => !p.IsArc && p.Length > 0).Select(p => $"{p.Start:0.#} to {p.Start + p.Length:0.#} mm"));
+        Diagnostics.Error(
+            at,
+            $"node {_frame.Nodes[node].Name} lies in a bend of tube {_frame.Tubes[tube].Name}: at {along:0.#} mm along it, and the bend goes from {arc.Start:0.#} to "
+            + $"{arc.Start + arc.Length:0.#} mm; joints are made on its straights: {straights}");
     }
 
     private void PlaceTwin(int node, int original)
@@ -172,6 +194,12 @@ internal sealed class NodePlacement
 
         if (AxisOf(tube) is not { } axis || !((axis.To - axis.From).Length > Near))
         {
+            return;
+        }
+
+        if (BentAxisOf(tube) is not null || BentAxisOf(through.Tube) is not null)
+        {
+            PlaceTwinOnBend(node, original, tube, image);
             return;
         }
 
@@ -199,6 +227,30 @@ internal sealed class NodePlacement
         bool isMirrorImage = _frame.AreTwins(through.Tube, tube) && Math.Abs(along - through.Distance) <= Lengths.Same;
         _through[node] = (tube, isMirrorImage ? through.Distance : along);
         _positions[node] = miss <= Lengths.Same ? image : onAxis;
+    }
+
+    // A bent tube that is the mirror image has the twin's place at the same distance from its start, or from its end where it runs the other way: so does
+    // one that is its own image.
+    private void PlaceTwinOnBend(int node, int original, int tube, Vector3 image)
+    {
+        (int Tube, double Distance) through = _through[original]!.Value;
+        if (BentAxisOf(tube) is { } bent)
+        {
+            foreach (double distance in (ReadOnlySpan<double>)[through.Distance, bent.Length - through.Distance])
+            {
+                if (IsInside(distance, bent.Length) && (bent.PointAt(distance) - image).Length <= Near)
+                {
+                    _through[node] = (tube, distance);
+                    _positions[node] = image;
+                    return;
+                }
+            }
+        }
+
+        Diagnostics.Error(
+            _frame.Nodes[node].At,
+            $"node {_frame.Nodes[node].Name}, the twin of {_frame.Nodes[original].Name}, has no place on tube {_frame.Tubes[tube].Name}, which is not the mirror image "
+            + $"of the bent tube {_frame.Tubes[through.Tube].Name}; write the node out");
     }
 
     private static bool IsInside(double along, double length) => along > Near && length - along > Near;

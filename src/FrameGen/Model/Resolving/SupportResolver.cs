@@ -101,17 +101,24 @@ internal sealed class SupportResolver
             return;
         }
 
-        if (!spec.Held.Contains(true))
+        if (!spec.Held.Contains(true) && spec.Springs.All(s => s is null))
         {
             _frame.Diagnostics.Error(spec.Node.At, $"{whose} holds nothing; write for example hold: [x, y, z]");
             return;
         }
 
-        int original = Merge(new Support(node, spec.Held, spec.Node.At));
+        double?[] rates = [.. spec.Springs.Select(s => s is null ? 0 : _frame.Values.Positive(s, $"{whose}: a spring's rate"))];
+        if (rates.Contains(null))
+        {
+            return;
+        }
+
+        double[] springs = [.. rates.Select(r => r!.Value)];
+        int original = Merge(new Support(node, spec.Held, spec.Node.At) { Springs = springs });
         if (spec.Mirror && _frame.TwinOfNode(spec.Node.Value) is { } twin && !_written.Contains(_frame.Draft.Nodes[twin].Name))
         {
-            // What is held in a direction is held in its mirror image: the flags are the same.
-            _twins[original] = Merge(new Support(twin, spec.Held, spec.Node.At));
+            // What is held in a direction is held in its mirror image: the flags are the same, and so are the rates.
+            _twins[original] = Merge(new Support(twin, spec.Held, spec.Node.At) { Springs = springs });
         }
     }
 
@@ -134,7 +141,11 @@ internal sealed class SupportResolver
         if (_byNode.TryGetValue(support.Node, out int same))
         {
             Support first = _supports[same];
-            _supports[same] = first with { Held = [.. first.Held.Zip(support.Held, (a, b) => a || b)] };
+            _supports[same] = first with
+            {
+                Held = [.. first.Held.Zip(support.Held, (a, b) => a || b)],
+                Springs = [.. first.Springs.Zip(support.Springs, (a, b) => a + b)],
+            };
             return same;
         }
 

@@ -9,8 +9,17 @@ namespace FrameGen.Model.Resolving;
 /// <param name="Axes">Local axes.</param>
 internal sealed record PlacedTube(TubeEnd From, TubeEnd To, TubeAxes Axes)
 {
+    /// <summary>Its axis where it bends; null for a straight tube.</summary>
+    public TubePath? Bent { get; init; }
+
     /// <summary>Length of the axis, mm.</summary>
-    public double Length { get; } = (To.Point - From.Point).Length;
+    public double Length => Bent?.Length ?? (To.Point - From.Point).Length;
+
+    /// <summary>The point of the axis at a distance along it, mm.</summary>
+    public Vector3 PointAt(double distance) => Bent?.PointAt(distance) ?? From.Point + (distance * Axes.X);
+
+    /// <summary>Unit direction from an end into the tube.</summary>
+    public Vector3 Into(End end) => end == End.From ? Axes.X : -(Bent?.Pieces[^1].Along ?? Axes.X);
 
     /// <summary>The end asked for.</summary>
     public TubeEnd At(End end) => end == End.From ? From : To;
@@ -77,8 +86,20 @@ internal static class TubePlacement
             return null;
         }
 
-        Vector3 along = axis.To - axis.From;
-        if (!(along.Length > NodePlacement.Near))
+        if (draft.Via.Any(v => v == fromNode || v == toNode))
+        {
+            values.Diagnostics.Error(draft.At, $"tube {draft.Name}: via names the node it begins or ends at; name only the corners between");
+            return null;
+        }
+
+        TubePath? bent = nodes.BentAxisOf(tube);
+        if (draft.Spec.Bend is not null && bent is null)
+        {
+            return null;
+        }
+
+        Vector3 along = bent?.Pieces[0].Along ?? axis.To - axis.From;
+        if (bent is null && !(along.Length > NodePlacement.Near))
         {
             values.Diagnostics.Error(
                 draft.At,
@@ -95,7 +116,7 @@ internal static class TubePlacement
         }
 
         return sound && from is not null && to is not null
-            ? new PlacedTube(from.At(fromNode, axis.From), to.At(toNode, axis.To), TubeAxes.Along(along, up))
+            ? new PlacedTube(from.At(fromNode, axis.From), to.At(toNode, axis.To), TubeAxes.Along(along, up)) { Bent = bent }
             : null;
     }
 

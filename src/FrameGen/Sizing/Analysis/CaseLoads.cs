@@ -69,7 +69,7 @@ internal sealed record CaseLoads(
         {
             for (int i = 0; i < topology.Tubes[t].Count && (along[t] != Vector3.Zero || weightPerKg != Vector3.Zero); i++)
             {
-                elements.Add(new LoadedElement(topology.Tubes[t].First + i, model.Tubes[t].Group, along[t]));
+                elements.Add(new LoadedElement(topology.Tubes[t].First + i, model.Tubes[t].Group, along[t], topology.Tubes[t].Arcs[i]?.Stretch ?? 1));
             }
         }
 
@@ -84,7 +84,7 @@ internal sealed record CaseLoads(
         for (int i = 0; i < Elements.Count; i++)
         {
             LoadedElement element = Elements[i];
-            loads[i] = new ElementLoad(element.Element, element.Given + (massPerLength[element.Group] * WeightPerKg));
+            loads[i] = new ElementLoad(element.Element, element.Stretch * (element.Given + (massPerLength[element.Group] * WeightPerKg)));
         }
     }
 }
@@ -92,5 +92,6 @@ internal sealed record CaseLoads(
 /// <summary>An element with a load along it.</summary>
 /// <param name="Element">Index of the element.</param>
 /// <param name="Group">Index of its group.</param>
-/// <param name="Given">The load that no design changes, N/mm, global.</param>
-internal readonly record struct LoadedElement(int Element, int Group, Vector3 Given);
+/// <param name="Given">The load that no design changes, N per mm of the tube's axis, global.</param>
+/// <param name="Stretch">Length of the tube's axis over that of the element: more than 1 in a bend.</param>
+internal readonly record struct LoadedElement(int Element, int Group, Vector3 Given, double Stretch);

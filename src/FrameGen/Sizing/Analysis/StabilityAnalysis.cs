@@ -94,6 +94,9 @@ internal sealed class StabilityAnalysis
         return largest;
     }
 
+    private static BeamInertia Stretched(BeamInertia inertia, double stretch) =>
+        new(stretch * inertia.MassPerLength, stretch * inertia.RotaryY, stretch * inertia.RotaryZ, stretch * inertia.Polar);
+
     private FactoredFrame Factored(int solver)
     {
         if (!_isFactored[solver])
@@ -143,7 +146,11 @@ internal sealed class StabilityAnalysis
             int group = model.Tubes[t].Group;
             var inertia = BeamInertia.Of(_analysis.Profiles[group], model.Groups[group].Material.Density, carried[t]);
             TubeElements tube = structure.Topology.Tubes[t];
-            Array.Fill(elements, inertia, refined.First(tube.First), refined.First(tube.First + tube.Count) - refined.First(tube.First));
+            for (int i = 0; i < tube.Count; i++)
+            {
+                int first = refined.First(tube.First + i);
+                Array.Fill(elements, Stretched(inertia, tube.Arcs[i]?.Stretch ?? 1), first, refined.First(tube.First + i + 1) - first);
+            }
         }
 
         return new FrameMass(elements, points);

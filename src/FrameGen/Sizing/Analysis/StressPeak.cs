@@ -61,6 +61,31 @@ internal readonly record struct StressPeak(double Stress, double At)
         return peak;
     }
 
+    /// <summary>Looks at a stretch of a tube. Places are distances from the tube's start.</summary>
+    /// <param name="piece">The piece of the tube that it is on.</param>
+    /// <param name="section">Its section.</param>
+    /// <param name="from">Start of the stretch.</param>
+    /// <param name="to">End of the stretch.</param>
+    /// <remarks>In a bend the ends and the middle of each chord are looked at: 1.5 degrees apart no stress changes by more than 0.04 %.</remarks>
+    public static StressPeak Find(in DiagramPiece piece, Section section, double from, double to)
+    {
+        if (piece.Arc is null)
+        {
+            StressPeak peak = Find(piece.Forces, section, from - piece.From, to - piece.From);
+            return peak with { At = piece.From + peak.At };
+        }
+
+        var highest = new StressPeak(double.NegativeInfinity, from);
+        foreach (double at in (ReadOnlySpan<double>)[from, 0.5 * (from + to), to])
+        {
+            SectionForces there = piece.At(at);
+            double stress = section.VonMises(in there);
+            highest = stress > highest.Stress ? new StressPeak(stress, at) : highest;
+        }
+
+        return highest;
+    }
+
     private StressPeak OrInside(in ElementForces forces, Section section, double x, double from, double to) =>
         x > from && x < to ? Or(forces, section, x) : this; // a shear that never vanishes gives ±∞ or NaN, which is not inside
 

@@ -29,8 +29,11 @@ internal sealed class StructuralModel
     /// <summary>For buckling and vibration.</summary>
     public FineModel Fine { get; }
 
-    /// <summary>Position in <see cref="Solvers"/> of the supports that the frame vibrates on; null when no target asks for frequencies.</summary>
+    /// <summary>Position in <see cref="Solvers"/> of the supports that the frame vibrates on; null when there are none.</summary>
     public int? VibrationSolver { get; private init; }
+
+    /// <summary>True where stiffness and loads are sums over the groups, of what each one's section gives: no springs and no hinges.</summary>
+    public bool IsLinearInSections { get; private init; }
 
     /// <summary>Builds it.</summary>
     /// <param name="model">Resolved: supports, loads, masses and targets stand on nodes that tubes meet.</param>
@@ -41,8 +44,15 @@ internal sealed class StructuralModel
         var sets = new List<int[]>();
         List<CaseLoads> cases = [.. model.Cases.Select(c => CaseLoads.Build(model, topology, c, SolverFor(c.Supports)))];
         List<UnitLoad> units = [.. model.Targets.OfType<StiffnessTarget>().Select(t => UnitLoad.Build(topology, t, SolverFor(t.Supports)))];
-        int? vibration = model.Targets.OfType<FrequencyTarget>().FirstOrDefault() is { } frequency ? SolverFor(frequency.Supports) : null;
-        return new StructuralModel(model, topology, solvers, cases, units) { VibrationSolver = vibration };
+        int? vibration = model.Targets.OfType<FrequencyTarget>().FirstOrDefault() is { } frequency ? SolverFor(frequency.Supports)
+            : model.Supports.Count > 0 ? SolverFor([.. Enumerable.Range(0, model.Supports.Count)])
+            : null;
+        return new StructuralModel(model, topology, solvers, cases, units)
+        {
+            VibrationSolver = vibration,
+            IsLinearInSections = !model.Supports.Any(s => s.Springs.Any(rate => rate > 0))
+                && !topology.Frame.Elements.Any(e => e.Hinges != Hinges.None),
+        };
 
         int SolverFor(IReadOnlyList<int> supports)
         {
@@ -56,7 +66,7 @@ internal sealed class StructuralModel
             sets.Add(set);
             solvers.Add(new FrameSolver(
                 topology.Frame,
-                [.. set.Select(s => new Restraint(topology.JointOfNode[model.Supports[s].Node], model.Supports[s].Held))]));
+                [.. set.Select(s => new Restraint(topology.JointOfNode[model.Supports[s].Node], model.Supports[s].Held) { Springs = model.Supports[s].Springs })]));
             return sets.Count - 1;
         }
     }

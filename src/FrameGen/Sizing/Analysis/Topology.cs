@@ -4,10 +4,10 @@ using FrameGen.Model;
 
 namespace FrameGen.Sizing.Analysis;
 
-/// <summary>Joints and elements: a tube with nodes or point loads on it is several elements of one piece.</summary>
+/// <summary>Joints and elements: a tube with nodes or point loads on it is several elements of one piece, a bend a chain of chords.</summary>
 /// <param name="Frame">For the solver; an element's profile is its tube's group.</param>
 /// <param name="JointOfNode">Joint of each node of the frame; −1 for a node that no tube meets.</param>
-/// <param name="NodeOfJoint">Node of each joint; −1 where only a load stands.</param>
+/// <param name="NodeOfJoint">Node of each joint; −1 where only a load stands, or chords of a bend meet.</param>
 /// <param name="Tubes">By tube: its stations and elements.</param>
 internal sealed record Topology(
     BeamFrame Frame, IReadOnlyList<int> JointOfNode, IReadOnlyList<int> NodeOfJoint, IReadOnlyList<TubeElements> Tubes)
@@ -32,35 +32,73 @@ internal sealed record Topology(
 
         var elements = new List<BeamElement>();
         var tubes = new List<TubeElements>();
-        List<double>[] loaded = PlacesOfPointLoads(model);
+        List<double>[] places = PlacesOfPointLoads(model);
+        for (int t = 0; t < places.Length; t++)
+        {
+            places[t].AddRange(ArcChord.Places(model.Tubes[t]));
+        }
+
         for (int t = 0; t < model.Tubes.Count; t++)
         {
             Tube tube = model.Tubes[t];
             List<Station> stations = NodeStations(model, tube, jointOfNode);
-            foreach (double place in loaded[t].Where(p => stations.TrueForAll(s => Math.Abs(s.Distance - p) >= Lengths.Same)))
+            foreach (double place in places[t].Where(p => stations.TrueForAll(s => Math.Abs(s.Distance - p) >= Lengths.Same)))
             {
                 stations.Add(new Station(place, positions.Count, -1, Vector3.Zero));
-                positions.Add(tube.From.Point + (place * tube.Axes.X));
+                positions.Add(tube.PointAt(place));
                 nodeOfJoint.Add(-1);
             }
 
             stations.Sort((a, b) => a.Distance.CompareTo(b.Distance));
-            tubes.Add(new TubeElements(elements.Count, stations));
+            Hinges hinges = HingesOf(model, tube);
+            var arcs = new ArcChord?[stations.Count - 1];
+            tubes.Add(new TubeElements(elements.Count, stations, arcs));
             for (int i = 1; i < stations.Count; i++)
             {
+                ArcChord? arc = ArcChord.Of(tube, stations[i - 1].Distance, stations[i].Distance);
+                arcs[i - 1] = arc;
+                Hinges ends = (i == 1 ? Hinges.Start : Hinges.None) | (i + 1 == stations.Count ? Hinges.End : Hinges.None);
                 elements.Add(new BeamElement(
-                    stations[i - 1].Joint, stations[i].Joint, stations[i - 1].Offset, stations[i].Offset, tube.Axes, tube.Group));
+                    stations[i - 1].Joint,
+                    stations[i].Joint,
+                    stations[i - 1].Offset,
+                    stations[i].Offset,
+                    arc?.Axes ?? tube.AxesAt(0.5 * (stations[i - 1].Distance + stations[i].Distance)),
+                    tube.Group)
+                {
+                    Hinges = hinges & ends,
+                });
             }
         }
 
         return new Topology(new BeamFrame(positions, elements), jointOfNode, nodeOfJoint, tubes);
     }
 
+    // Where a tube ends alone at a node that nothing turns or keeps from turning, the node turns with the tube, hinge or not: a pinned foot.
+    private static Hinges HingesOf(FrameModel model, Tube tube)
+    {
+        Hinges hinges = tube.Hinges;
+        if (hinges != Hinges.None)
+        {
+            hinges &= TurnsFreely(model, tube.From.Node) ? ~Hinges.Start : hinges;
+            hinges &= TurnsFreely(model, tube.To.Node) ? ~Hinges.End : hinges;
+        }
+
+        return hinges;
+    }
+
+    private static bool TurnsFreely(FrameModel model, int node) =>
+        model.EndsAt[node].Count == 1
+        && model.Nodes[node].Through is null
+        && !model.Supports.Any(s => s.Node == node && s.ResistsTurning)
+        && !model.Cases.Any(c => c.NodeLoads.Any(l => l.Node == node && l.Moment != Vector3.Zero))
+        && !model.Targets.OfType<StiffnessTarget>().Any(t => t.Turning && (t.To == node || t.From == node));
+
     private static List<Station> NodeStations(FrameModel model, Tube tube, int[] jointOfNode)
     {
         List<Station> stations = [At(0, tube.From.Node, tube.From.Point)];
         stations.AddRange(tube.NodesOn.OrderBy(n => model.Nodes[n].ThroughDistance).Select(n =>
-            At(model.Nodes[n].ThroughDistance, n, tube.From.Point + (model.Nodes[n].ThroughDistance * tube.Axes.X))));
+            At(model.Nodes[n].ThroughDistance, n, tube.PointAt(model.Nodes[n].ThroughDistance))));
         stations.Add(At(tube.Length, tube.To.Node, tube.To.Point));
         return stations;
 
@@ -100,7 +138,10 @@ internal sealed record Topology(
 internal readonly record struct Station(double Distance, int Joint, int Node, Vector3 Offset);
 
 /// <summary>The elements of one tube: element First + i lies between stations i and i + 1.</summary>
-internal sealed record TubeElements(int First, IReadOnlyList<Station> Stations)
+/// <param name="First">Its first element.</param>
+/// <param name="Stations">Where its elements meet, from its start.</param>
+/// <param name="Arcs">By element: the piece of a bend that it is a chord of; null on a straight.</param>
+internal sealed record TubeElements(int First, IReadOnlyList<Station> Stations, IReadOnlyList<ArcChord?> Arcs)
 {
     public int Count => Stations.Count - 1;
 

@@ -26,9 +26,8 @@ internal static class TubeScan
         var most = new TubeUse(-1, 0, 0, yield, false);
         for (int i = 0; i < elements.Count; i++)
         {
-            double start = elements.Stations[i].Distance;
-            double stop = elements.Stations[i + 1].Distance;
-            ElementForces forces = solution.Forces(elements.First + i);
+            DiagramPiece piece = Piece(solution, elements, i);
+            (double start, double stop) = (piece.From, piece.To);
 
             // Stretches between weld zones and within them, in order; a touching edge belongs to both.
             double reached = start;
@@ -60,11 +59,11 @@ internal static class TubeScan
 
             void Look(double from, double to, double allowed, bool nearWeld)
             {
-                StressPeak peak = StressPeak.Find(in forces, section, from - start, to - start);
+                StressPeak peak = StressPeak.Find(in piece, section, from, to);
                 double share = peak.Stress / allowed;
                 if (!(share <= most.Share))
                 {
-                    most = new TubeUse(share, start + peak.At, peak.Stress, allowed, nearWeld);
+                    most = new TubeUse(share, peak.At, peak.Stress, allowed, nearWeld);
                 }
             }
         }
@@ -82,28 +81,45 @@ internal static class TubeScan
         Section section = analysis.Sections[group];
         Material material = structure.Model.Groups[group].Material;
         var highest = new StressPeak(double.NegativeInfinity, 0);
-        for (int i = 0; i < elements.Count; i++)
+        var pieces = new DiagramPiece[elements.Count];
+        for (int i = 0; i < pieces.Length; i++)
         {
-            ElementForces forces = solution.Forces(elements.First + i);
-            StressPeak peak = StressPeak.Find(in forces, section, 0, forces.Length);
-            if (peak.Stress > highest.Stress)
-            {
-                highest = peak with { At = elements.Stations[i].Distance + peak.At };
-            }
+            pieces[i] = Piece(solution, elements, i);
+            StressPeak peak = StressPeak.Find(in pieces[i], section, pieces[i].From, pieces[i].To);
+            highest = peak.Stress > highest.Stress ? peak : highest;
         }
 
-        ElementForces last = solution.Forces(elements.First + elements.Count - 1);
+        DiagramPiece last = pieces[^1];
         bool known = material.Yield is not null && (material.YieldWelded is not null || analysis.Welds().Of(tube).Length == 0);
         return new TubeForces(
             highest.Stress,
             highest.At,
-            solution.Forces(elements.First).Start.N,
-            last.At(last.Length).N,
+            pieces[0].At(0).N,
+            last.At(last.To).N,
             MinAxial(solution, elements.First, elements.Count))
         {
-            Use = known ? MostUsed(analysis, loadCase, tube) : null,
+            Diagram = new TubeDiagram(pieces),
+            Use = known ? WithShares(MostUsed(analysis, loadCase, tube), pieces, section) : null,
         };
     }
+
+    // Where a load makes the forces jump, those on the side of the higher stress.
+    private static TubeUse WithShares(TubeUse use, DiagramPiece[] pieces, Section section)
+    {
+        SectionForces worst = default;
+        double highest = double.NegativeInfinity;
+        foreach (DiagramPiece piece in pieces.Where(p => use.At >= p.From && use.At <= p.To))
+        {
+            SectionForces there = piece.At(use.At);
+            double stress = section.VonMises(in there);
+            (worst, highest) = stress > highest ? (there, stress) : (worst, highest);
+        }
+
+        return use with { Shares = StressShares.Of(section, in worst) };
+    }
+
+    private static DiagramPiece Piece(FrameSolution solution, TubeElements elements, int i) => new(
+        elements.Stations[i].Distance, elements.Stations[i + 1].Distance, solution.Forces(elements.First + i), elements.Arcs[i]);
 
     /// <summary>The lowest axial force along elements that follow each other, N: linear along each, so an end's.</summary>
     public static double MinAxial(FrameSolution solution, int first, int count)

@@ -66,7 +66,7 @@ internal sealed class WeldPairs
         bool IsWelded(WeldMember member) => model.Groups[model.Tubes[member.Tube].Group].Welded;
 
         Vector3 Away(WeldMember member) =>
-            member.At > 0 && member.Slot >= 0 ? -model.Tubes[member.Tube].Axes.X : model.Tubes[member.Tube].Axes.X;
+            member.Slot < 0 ? model.Tubes[member.Tube].AxesAt(member.At).X : model.Tubes[member.Tube].Into(member.At > 0 ? End.To : End.From);
     }
 }
 

@@ -43,7 +43,9 @@ internal sealed class StressResponses(DesignSpace space, StructuralModel structu
 
         foreach ((TubeUse use, int tube, int loadCase) in worst)
         {
-            if (tube >= 0 && target.SafetyFactor * use.Share > above && Make(design, target, use, tube, loadCase) is { } response)
+            // In a bend the forces are turned to the axis, and the place is one of the arc, not of its chord: no row is made of that.
+            bool isInBend = tube >= 0 && space.Model.Tubes[tube].Bent?.PieceAt(use.At).IsArc == true;
+            if (tube >= 0 && !isInBend && target.SafetyFactor * use.Share > above && Make(design, target, use, tube, loadCase) is { } response)
             {
                 yield return response;
             }

@@ -39,7 +39,7 @@ internal sealed class Weights
         {
             foreach (LoadedElement element in _structure.Cases[load.Index].Elements)
             {
-                work += OnElement(element.Element, element.Given, field);
+                work += OnElement(element.Element, element.Stretch * element.Given, field);
             }
         }
 
@@ -54,7 +54,7 @@ internal sealed class Weights
         {
             foreach (LoadedElement element in _structure.Cases[load.Index].Elements)
             {
-                work[element.Group] += OnElement(element.Element, _structure.Cases[load.Index].WeightPerKg, field);
+                work[element.Group] += OnElement(element.Element, element.Stretch * _structure.Cases[load.Index].WeightPerKg, field);
             }
         }
 
@@ -81,7 +81,7 @@ internal sealed class Weights
                 {
                     int group = g;
                     solution = factored.Solve(
-                        new BeamLoads([], [.. loads.Elements.Where(e => e.Group == group).Select(e => new ElementLoad(e.Element, loads.WeightPerKg))]), solution);
+                        new BeamLoads([], [.. loads.Elements.Where(e => e.Group == group).Select(e => new ElementLoad(e.Element, e.Stretch * loads.WeightPerKg))]), solution);
                     energies[g] = Math.Max(0, Own(LoadSet.Case(loadCase), solution)[g]);
                 }
             }

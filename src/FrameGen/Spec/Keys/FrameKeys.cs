@@ -1,3 +1,4 @@
+using FrameGen.Mechanics.Frames;
 using FrameGen.Spec.Forms;
 using static FrameGen.Spec.Keys.CommonForms;
 
@@ -102,12 +103,11 @@ internal static class FrameKeys
 
     private static readonly Key<EndCutSpec> ToEnd = new("to", End, "the cut at the `to` end", "{gap: 0.2 mm}");
 
-    private static readonly ListForm<string> HingeAxes = new(
-        "moments (ry, rz)", new WordForm<string>([("ry", "ry"), ("rz", "rz")]), 1, 2, axis => axis);
+    private static readonly Key<IReadOnlyList<Hinges>> HingeFrom = new(
+        "from", HingeAxes(Hinges.StartX, Hinges.StartY, Hinges.StartZ), "moments not carried at the `from` end", "[ry, rz]");
 
-    private static readonly Key<IReadOnlyList<string>> HingeFrom = new("from", HingeAxes, "moments not carried at the `from` end", "[ry, rz]");
-
-    private static readonly Key<IReadOnlyList<string>> HingeTo = new("to", HingeAxes, "moments not carried at the `to` end", "[ry]");
+    private static readonly Key<IReadOnlyList<Hinges>> HingeTo = new(
+        "to", HingeAxes(Hinges.EndX, Hinges.EndY, Hinges.EndZ), "moments not carried at the `to` end", "[ry]");
 
     private static readonly Key<AxisEnd> From = new("from", EndPoint, "where its axis begins", "front-l") { IsRequired = true };
 
@@ -116,21 +116,22 @@ internal static class FrameKeys
     private static readonly Key<Placed<string>> Group = new("group", GroupName, "the group whose section it has", "rails") { IsRequired = true };
 
     private static readonly Key<IReadOnlyList<Placed<string>>> Via =
-        new("via", NodeNames, "nodes where it bends", "[elbow]") { IsNotSupportedYet = true };
+        new("via", Names("nodes", NodeName, 1), "nodes where it bends, in their order along the tube", "[elbow]");
 
     private static readonly Key<SpecQuantity> BendRadius =
-        new("bend_radius", Positive(QuantityKind.Length), "of the centre line, at every bend", "100 mm") { IsNotSupportedYet = true };
+        new("bend_radius", Positive(QuantityKind.Length), "of the centre line, at every bend", "100 mm");
 
     private static readonly Key<Direction> Up = new("up", AxisDirection, "direction of the top line, clock angle 0", "x");
 
-    private static readonly Key<bool> Hinge = new(
+    private static readonly Key<Placed<Hinges>> Hinge = new(
         "hinge",
-        new MapForm<bool>("a hinge", [HingeFrom, HingeTo], _ => true, map => map.AtLeastOne(HingeFrom, HingeTo)),
+        new MapForm<Placed<Hinges>>(
+            "a hinge",
+            [HingeFrom, HingeTo],
+            map => new Placed<Hinges>(map.Items(HingeFrom).Concat(map.Items(HingeTo)).Aggregate(Hinges.None, (all, one) => all | one), map.At),
+            CheckHinge),
         "moments that its ends do not carry, about local axes",
-        "{from: [ry, rz]}")
-    {
-        IsNotSupportedYet = true,
-    };
+        "{from: [ry, rz]}");
 
     private static readonly Key<TubeEndCuts> Ends = new(
         "ends",
@@ -154,7 +155,11 @@ internal static class FrameKeys
             End(map.Get(From), cuts?.From),
             End(map.Get(To), cuts?.To),
             map.Get(Group),
-            map.Find(Up)?.Vector);
+            map.Find(Up)?.Vector)
+        {
+            Hinges = map.Find(Hinge)?.Value ?? Hinges.None,
+            Bend = map.Find(Via) is { } via ? new BendSpec(via, map.Get(BendRadius)) : null,
+        };
 
         TubeEndSpec End(AxisEnd axis, EndCutSpec? cut) =>
             new(axis.Node, axis.Offset, cut ?? new EndCutSpec(RequestedCut.Default, null, null, Wrap: false, map.Owner.At));
@@ -171,6 +176,22 @@ internal static class FrameKeys
         if (cut == RequestedCut.Square && map.Has(EndGap))
         {
             map.Error(map.PlaceOf(EndGap), "'gap' is left between a coped end and its mates, and this end is square; remove one of the two");
+        }
+    }
+
+    private static ListForm<Hinges> HingeAxes(Hinges x, Hinges y, Hinges z) => new(
+        "moments (rx, ry, rz)",
+        new WordForm<Hinges>([("rx", x), ("ry", y), ("rz", z)]),
+        1,
+        3,
+        axis => axis == x ? "rx" : axis == y ? "ry" : "rz");
+
+    private static void CheckHinge(MapReading map)
+    {
+        map.AtLeastOne(HingeFrom, HingeTo);
+        if (map.Items(HingeFrom).Contains(Hinges.StartX) && map.Items(HingeTo).Contains(Hinges.EndX))
+        {
+            map.Error(map.PlaceOf(HingeTo), "with 'rx' at both ends the tube can spin about its own axis; leave it out at one end");
         }
     }
 

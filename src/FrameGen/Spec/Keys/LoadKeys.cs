@@ -19,7 +19,7 @@ internal static class LoadKeys
         "what can't move or turn",
         "[x, y, z]");
 
-    private static readonly Key[] SpringRates =
+    private static readonly Key<SpecQuantity>[] SpringRates =
     [
         .. Freedoms.Select(word => new Key<SpecQuantity>(
             word,
@@ -28,14 +28,12 @@ internal static class LoadKeys
             word.StartsWith('r') ? "12 N.m/deg" : "40 N/mm")),
     ];
 
-    private static readonly Key<bool> Spring = new(
+    private static readonly Key<IReadOnlyList<SpecQuantity?>> Spring = new(
         "spring",
-        new MapForm<bool>("a spring", SpringRates, _ => true, map => map.AtLeastOne(SpringRates)),
-        "springs it stands on",
-        "{z: 40 N/mm}")
-    {
-        IsNotSupportedYet = true,
-    };
+        new MapForm<IReadOnlyList<SpecQuantity?>>(
+            "a spring", SpringRates, map => [.. SpringRates.Select(map.Find)], map => map.AtLeastOne(SpringRates)),
+        "springs it stands on, in directions that `hold` leaves free",
+        "{z: 40 N/mm}");
 
     private static readonly Key<bool> SupportMirror = MirrorKey();
 
@@ -49,8 +47,22 @@ internal static class LoadKeys
             map => new SupportSpec(
                 map.Owner,
                 [.. Enumerable.Range(0, Freedoms.Length).Select(map.Items(Hold).Contains)],
-                map.FindValue(SupportMirror) ?? true),
-            map => map.AtLeastOne(Hold, Spring)));
+                map.FindValue(SupportMirror) ?? true)
+            {
+                Springs = map.Find(Spring) ?? new SpecQuantity?[Freedoms.Length],
+            },
+            CheckSupport));
+
+    private static void CheckSupport(MapReading map)
+    {
+        map.AtLeastOne(Hold, Spring);
+        IReadOnlyList<SpecQuantity?> springs = map.Find(Spring) ?? [];
+        foreach (int both in map.Items(Hold).Where(f => f < springs.Count && springs[f] is not null))
+        {
+            map.Error(
+                springs[both]!.At, $"'{Freedoms[both]}' is held, and a spring there does nothing; remove it from 'hold' or from 'spring'");
+        }
+    }
 
     private static readonly Key<Placed<string>> MassNode = new("node", NodeName, "the node it sits on", "coupling");
 

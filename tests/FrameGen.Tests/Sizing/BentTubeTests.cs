@@ -1,0 +1,136 @@
+using FrameGen.Geometry;
+using FrameGen.Mechanics.Sections;
+using FrameGen.Sizing;
+using Xunit;
+
+namespace FrameGen.Tests.Sizing;
+
+/// <summary>
+/// Bent tubes against the closed forms of curved bars (A. Castigliano): a quarter circle of R = 1000 mm, tube 20 x 2 mm, clamped at one end, F = 100 N at
+/// the other; the straights at its ends are next to nothing. With shear and stretch: F∫(N²/EA + κV²/GA) besides bending and torsion.
+/// </summary>
+public class BentTubeTests
+{
+    private const double R = 1000;
+    private const double F = 100;
+    private const double Stub = 0.2;
+    private const double E = 210_000;
+    private const double G = E / 2.6;
+
+    private static readonly RoundTube Tube = new(20, 2);
+
+    // Half of what a stiffness may be off, since it is one of two figures that are compared.
+    private const double Converged = 0.001;
+
+    [Fact]
+    public void A_quarter_circle_pushed_in_its_plane_square_to_its_end()
+    {
+        // From the free end at angle φ: M = FR sin φ, N and V of sizes F sin φ and F cos φ; each squared integral is π/4.
+        double expected = F * R * Math.PI / 4 * ((R * R / (E * Tube.Iy)) + (1 / (E * Tube.Area)) + (1 / (G * Shear)));
+        SizedFrame sized = Quarter(new Vector3(F, 0, 0));
+        Assert.Equal(expected, sized.Cases[0].Displacements[1]!.Value.X, Converged * expected);
+    }
+
+    [Fact]
+    public void A_quarter_circle_pushed_along_its_end()
+    {
+        // M = FR(1 − cos φ): ∫(1 − cos φ)² = 3π/4 − 2.
+        double expected = (F * R * ((3 * Math.PI / 4) - 2) * R * R / (E * Tube.Iy)) + (F * R * Math.PI / 4 * ((1 / (E * Tube.Area)) + (1 / (G * Shear))));
+        SizedFrame sized = Quarter(new Vector3(0, F, 0));
+        Assert.Equal(expected, sized.Cases[0].Displacements[1]!.Value.Y, Converged * expected);
+    }
+
+    // AFNOR, Guide de validation des progiciels de calcul de structures (1990), SSLL06/89, with its own section and another steel: w = FR³ (π/4EI + (3π/4 − 2)/GJ).
+    [Fact]
+    public void A_quarter_circle_pushed_out_of_its_plane()
+    {
+        double expected = (F * R * R * R * ((Math.PI / (4 * E * Tube.Iy)) + (((3 * Math.PI / 4) - 2) / (G * Tube.J)))) + (F * R * Math.PI / 2 / (G * Shear));
+        SizedFrame sized = Quarter(new Vector3(0, 0, F));
+        Assert.Equal(expected, sized.Cases[0].Displacements[1]!.Value.Z, Converged * expected);
+
+        // 15 degrees from the clamp: torsion FR(1 − cos 75°), bending FR sin 75°; published 74.1180 and 96.5925 N.m.
+        TubeDiagram diagram = sized.Cases[0].Tubes[0].Diagram;
+        var there = diagram.At(Stub + (R * Math.PI / 12));
+        Assert.Equal(74.1181, Math.Abs(there.T) / 1000, 0.02);
+        Assert.Equal(96.5926, Math.Abs(there.My) / 1000, 0.02);
+        Assert.Equal(F, Math.Abs(there.Vz), 1e-6);
+        Assert.Equal(0, there.Mz, 1e-3);
+        Assert.Equal(0, there.N, 1e-6);
+    }
+
+    [Fact]
+    public void Along_a_bend_thrust_turns_into_shear()
+    {
+        // The push F at the free end is shear there and thrust at the clamp; at angle φ from the clamp N = −F sin... by components of one force.
+        TubeDiagram diagram = Quarter(new Vector3(F, 0, 0)).Cases[0].Tubes[0].Diagram;
+        foreach (double degrees in new[] { 1.5, 17, 44.2, 80 })
+        {
+            double angle = degrees * Math.PI / 180;
+            var there = diagram.At(Stub + (R * angle));
+            Assert.Equal(F * Math.Cos(angle), there.N, 1e-6);
+            Assert.Equal(F * Math.Sin(angle), Math.Abs(there.Vy), 1e-6);
+            Assert.Equal(F * R * Math.Cos(angle), Math.Abs(there.Mz), 0.3 * F);
+        }
+    }
+
+    [Fact]
+    public void The_worst_stress_of_a_bend_is_that_of_its_largest_moment()
+    {
+        // Clamp: M = FR and N = F, both at once.
+        double expected = (F * R / Tube.ElasticModulusY) + (F / Tube.Area);
+        TubeForces forces = Quarter(new Vector3(F, 0, 0)).Cases[0].Tubes[0];
+        Assert.Equal(expected, forces.MaxStress, 0.001 * expected);
+        Assert.InRange(forces.MaxStressAt, 0, Stub + 1);
+        Assert.InRange(forces.Use!.Value.Shares.Bending, 0.98, 1);
+    }
+
+    [Fact]
+    public void It_weighs_what_its_true_length_does()
+    {
+        FrameBuilder builder = Sketch().MassAlong("bow", 3);
+        SizedFrame sized = builder.Case("weight", new Vector3(0, 0, -1)).Case("line", Vector3.Zero, builder.Line("bow", 0, -0.2, 0)).Size();
+        double length = (R * Math.PI / 2) + (2 * Stub);
+        double weight = 9.80665 * ((7850e-9 * Tube.Area * length) + 3);
+        Assert.Equal(weight, sized.Cases[0].Reactions[0].Force.Z, 1e-9 * weight);
+        Assert.Equal(0.2 * length, sized.Cases[1].Reactions[0].Force.Y, 1e-8);
+        Assert.Equal(7850e-9 * Tube.Area * length, sized.MassKg, 1e-9);
+    }
+
+    [Fact]
+    public void Loads_stand_at_places_along_the_axis()
+    {
+        // Half way round, in the bend: the arm to the clamp is R sin 45° one way and R (1 − cos 45°) the other.
+        FrameBuilder builder = Sketch();
+        SizedFrame sized = builder.Case("half", Vector3.Zero, builder.Point("bow", Stub + (R * Math.PI / 4), 0, 0, F)).Size();
+        (Vector3 force, Vector3 moment) = sized.Cases[0].Reactions[0];
+        Assert.Equal(-F, force.Z, 1e-8);
+        Assert.Equal(-F * R * (1 - Math.Cos(Math.PI / 4)), moment.X, 0.01);
+        Assert.Equal(F * ((R * Math.Sin(Math.PI / 4)) + Stub), moment.Y, 0.01);
+    }
+
+    // S. Timoshenko, J. Gere, Theory of Elastic Stability (1961), section 7.3: a circular arch with pinned ends and central angle 2α buckles under an even radial pressure at
+    // q = EI/R³ (π²/α² − 1). For a half circle 3 EI/R³. The pressure is put on as forces that follow no bending, on each chord's ends, as a dead load would be, for which the
+    // factor lies a little higher; here only that the bend carries compression and has a factor at all is looked at.
+    [Fact]
+    public void A_bend_in_compression_has_a_buckling_factor()
+    {
+        FrameBuilder builder = new FrameBuilder().Fixed("tubes", Tube)
+            .Node("a", -500, 0, 0).Node("b", 500, 0, 0).Tube("arch", "a", "b", "tubes").Bend("arch", 499.9, new Vector3(-500, 0, 500), new Vector3(500, 0, 500))
+            .Hold("a", "x", "y", "z", "rx", "rz").Hold("b", "x", "y", "z", "rx", "rz");
+        SizedFrame sized = builder.Case("down", Vector3.Zero, builder.Line("arch", 0, 0, -0.5)).Size();
+        Assert.NotNull(sized.Cases[0].BucklingFactor);
+        Assert.Equal("tube arch", sized.Cases[0].BucklesAt);
+    }
+
+    private static double Shear => Tube.ShearAreas(0.3).Y;
+
+    // From the clamp at (0, 0, 0) along x, round to y.
+    private static FrameBuilder Sketch() => new FrameBuilder().Fixed("tubes", Tube)
+        .Node("clamp", 0, 0, 0).Node("free", R + Stub, R + Stub, 0).Tube("bow", "clamp", "free", "tubes").Bend("bow", R, new Vector3(R + Stub, 0, 0)).Clamp("clamp");
+
+    private static SizedFrame Quarter(Vector3 force)
+    {
+        FrameBuilder builder = Sketch();
+        return builder.Case("push", Vector3.Zero, builder.Force("free", force.X, force.Y, force.Z)).Size();
+    }
+}
