@@ -32,14 +32,14 @@ internal readonly ref struct ElementFields
     }
 
     /// <summary>Fields of one element with six stiffnesses.</summary>
-    /// <param name="element">The element.</param>
+    /// <param name="element">The element; without hinges.</param>
     /// <param name="length">L, mm.</param>
     /// <param name="stiffness">Six values, in the order of its modes.</param>
     public ElementFields(BeamElement element, double length, ReadOnlySpan<double> stiffness)
     {
         (_element, _length) = (element, length);
-        _phiY = Phi(stiffness[2], stiffness[4]);
-        _phiZ = Phi(stiffness[3], stiffness[5]);
+        _xy = new Plane(length, stiffness[2], stiffness[4], 0, startHinged: false, endHinged: false);
+        _xz = new Plane(length, stiffness[3], stiffness[5], 0, startHinged: false, endHinged: false);
     }
 
     /// <summary>Displacement along local x at ξ = x/L.</summary>

@@ -164,6 +164,10 @@ public sealed record FrameMass(IReadOnlyList<BeamInertia> Elements, IReadOnlyLis
 /// <param name="Polar">ρ(Iy + Iz), kg·mm, about its axis.</param>
 public readonly record struct BeamInertia(double MassPerLength, double RotaryY, double RotaryZ, double Polar)
 {
+    /// <summary>Of an element that stands for a longer piece of tube, as a chord does for its arc.</summary>
+    /// <param name="factor">True length over the element's.</param>
+    public BeamInertia Stretched(double factor) => new(factor * MassPerLength, factor * RotaryY, factor * RotaryZ, factor * Polar);
+
     /// <summary>Of a profile in a metal, rotary inertia included.</summary>
     /// <param name="profile">The profile.</param>
     /// <param name="density">ρ, kg/mm³.</param>

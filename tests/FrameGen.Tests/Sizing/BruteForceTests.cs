@@ -1,4 +1,5 @@
 using FrameGen.Diagnostics;
+using FrameGen.Mechanics.Frames;
 using FrameGen.Model;
 using FrameGen.Sizing;
 using FrameGen.Sizing.Analysis;
@@ -21,6 +22,27 @@ public sealed class BruteForceTests(ITestOutputHelper output)
     public void A_proven_design_is_the_first_that_a_look_at_all_of_them_finds(int seed)
     {
         FrameModel model = RandomFrames.Make(seed, MostDesigns);
+        ExpectFirstOfAll(model);
+    }
+
+    // Springs of the feet's own size at two corners.
+    [Theory]
+    [InlineData(3)]
+    [InlineData(8)]
+    [InlineData(11)]
+    [InlineData(17)]
+    public void Also_on_springs(int seed) =>
+        ExpectFirstOfAll(RandomFrames.Make(seed, 1_000, f => f.Spring("b1", 40, 60, 0, 0, 0, 2e6).Spring("a3", 100, 0, 80, 0, 0, 0)));
+
+    [Theory]
+    [InlineData(3)]
+    [InlineData(8)]
+    [InlineData(11)]
+    public void Also_with_hinges(int seed) =>
+        ExpectFirstOfAll(RandomFrames.Make(seed, 300, f => f.Hinge("t4", Hinges.StartY | Hinges.StartZ | Hinges.EndY | Hinges.EndZ).Hinge("t3", Hinges.EndZ | Hinges.EndX)));
+
+    private void ExpectFirstOfAll(FrameModel model)
+    {
         Everything all = Everything.Of(model);
         DiagnosticList diagnostics = [];
         SizedFrame? sized = SectionSizer.Size(model, diagnostics, null, 2);

@@ -85,10 +85,26 @@ internal sealed class FrameBuilder
         return this;
     }
 
-    /// <summary>Six rates, along x, y, z and about them.</summary>
+    /// <summary>Six rates, along x, y, z and about them; acts in all that is written already, too.</summary>
     public FrameBuilder Spring(string node, params double[] rates)
     {
+        int spring = _supports.Count;
         _supports.Add(new Support(NodeIndex(node), new bool[6], Place) { Springs = rates });
+        for (int i = 0; i < _cases.Count; i++)
+        {
+            _cases[i] = _cases[i] with { Supports = [.. _cases[i].Supports, spring] };
+        }
+
+        for (int i = 0; i < _targets.Count; i++)
+        {
+            _targets[i] = _targets[i] switch
+            {
+                StiffnessTarget t => t with { Supports = [.. t.Supports, spring] },
+                FrequencyTarget t => t with { Supports = [.. t.Supports, spring] },
+                Target t => t,
+            };
+        }
+
         return this;
     }
 

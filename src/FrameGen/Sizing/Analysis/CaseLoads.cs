@@ -69,7 +69,7 @@ internal sealed record CaseLoads(
         {
             for (int i = 0; i < topology.Tubes[t].Count && (along[t] != Vector3.Zero || weightPerKg != Vector3.Zero); i++)
             {
-                elements.Add(new LoadedElement(topology.Tubes[t].First + i, model.Tubes[t].Group, along[t], topology.Tubes[t].Arcs[i]?.Stretch ?? 1));
+                elements.Add(new LoadedElement(topology.Tubes[t].First + i, model.Tubes[t].Group, along[t], topology.Tubes[t].StretchOf(i)));
             }
         }
 

@@ -94,9 +94,6 @@ internal sealed class StabilityAnalysis
         return largest;
     }
 
-    private static BeamInertia Stretched(BeamInertia inertia, double stretch) =>
-        new(stretch * inertia.MassPerLength, stretch * inertia.RotaryY, stretch * inertia.RotaryZ, stretch * inertia.Polar);
-
     private FactoredFrame Factored(int solver)
     {
         if (!_isFactored[solver])
@@ -149,7 +146,7 @@ internal sealed class StabilityAnalysis
             for (int i = 0; i < tube.Count; i++)
             {
                 int first = refined.First(tube.First + i);
-                Array.Fill(elements, Stretched(inertia, tube.Arcs[i]?.Stretch ?? 1), first, refined.First(tube.First + i + 1) - first);
+                Array.Fill(elements, inertia.Stretched(tube.StretchOf(i)), first, refined.First(tube.First + i + 1) - first);
             }
         }
 

@@ -32,7 +32,7 @@ internal sealed class StructuralModel
     /// <summary>Position in <see cref="Solvers"/> of the supports that the frame vibrates on; null when there are none.</summary>
     public int? VibrationSolver { get; private init; }
 
-    /// <summary>True where stiffness and loads are sums over the groups, of what each one's section gives: no springs and no hinges.</summary>
+    /// <summary>True where stiffness and loads are sums over the groups, of what each one's section gives: no hinges.</summary>
     public bool IsLinearInSections { get; private init; }
 
     /// <summary>Builds it.</summary>
@@ -50,8 +50,7 @@ internal sealed class StructuralModel
         return new StructuralModel(model, topology, solvers, cases, units)
         {
             VibrationSolver = vibration,
-            IsLinearInSections = !model.Supports.Any(s => s.Springs.Any(rate => rate > 0))
-                && !topology.Frame.Elements.Any(e => e.Hinges != Hinges.None),
+            IsLinearInSections = !topology.Frame.Elements.Any(e => e.Hinges != Hinges.None),
         };
 
         int SolverFor(IReadOnlyList<int> supports)

@@ -145,6 +145,9 @@ internal sealed record TubeElements(int First, IReadOnlyList<Station> Stations, 
 {
     public int Count => Stations.Count - 1;
 
+    /// <summary>Length of the tube's axis over that of an element: more than 1 in a bend.</summary>
+    public double StretchOf(int i) => Arcs[i]?.Stretch ?? 1;
+
     /// <summary>The station at a distance from the tube's start.</summary>
     public Station At(double distance) => Stations.MinBy(s => Math.Abs(s.Distance - distance));
 }

@@ -1,3 +1,4 @@
+using FrameGen.Geometry;
 using FrameGen.Mechanics.Frames;
 using FrameGen.Mechanics.Stability;
 using FrameGen.Model;
@@ -50,9 +51,9 @@ internal sealed class ModeCuts(DesignSpace space, StructuralModel structure, Sti
                 BeamProfile profile = space[g][c].Profile;
                 double stiff = Stiffness(energies, g, profile, shape);
                 double inert = 0;
-                foreach ((int fine, int tube) in FineElements(g))
+                foreach ((int fine, int tube, double stretch) in FineElements(g))
                 {
-                    var inertia = BeamInertia.Of(profile, space.Model.Groups[g].Material.Density, carried[tube]);
+                    BeamInertia inertia = BeamInertia.Of(profile, space.Model.Groups[g].Material.Density, carried[tube]).Stretched(stretch);
                     inert += energies.Inertia(fine, profile, inertia, shape);
                 }
 
@@ -133,7 +134,7 @@ internal sealed class ModeCuts(DesignSpace space, StructuralModel structure, Sti
     {
         Span<double> strains = stackalloc double[StiffnessTable.Modes];
         double sum = 0;
-        foreach ((int fine, _) in FineElements(group))
+        foreach ((int fine, _, _) in FineElements(group))
         {
             energies.Strains(fine, shape, strains);
             sum += energies.Energy(fine, profile, strains);
@@ -142,7 +143,7 @@ internal sealed class ModeCuts(DesignSpace space, StructuralModel structure, Sti
         return sum;
     }
 
-    private IEnumerable<(int Fine, int Tube)> FineElements(int group)
+    private IEnumerable<(int Fine, int Tube, double Stretch)> FineElements(int group)
     {
         RefinedFrame refined = structure.Fine.Refined;
         for (int tube = 0; tube < space.Model.Tubes.Count; tube++)
@@ -150,13 +151,31 @@ internal sealed class ModeCuts(DesignSpace space, StructuralModel structure, Sti
             TubeElements elements = structure.Topology.Tubes[tube];
             if (space.Model.Tubes[tube].Group == group)
             {
-                for (int fine = refined.First(elements.First); fine < refined.First(elements.First + elements.Count); fine++)
+                for (int i = 0; i < elements.Count; i++)
                 {
-                    yield return (fine, tube);
+                    for (int fine = refined.First(elements.First + i); fine < refined.First(elements.First + i + 1); fine++)
+                    {
+                        yield return (fine, tube, elements.StretchOf(i));
+                    }
                 }
             }
         }
     }
 
-    private static double SpringEnergy(FrameSolver solver, ModeShape shape) => 0;
+    // What does not move needs no looking at: a spring on a held freedom does nothing.
+    private static double SpringEnergy(FrameSolver solver, ModeShape shape)
+    {
+        double energy = 0;
+        foreach (Restraint restraint in solver.Restraints)
+        {
+            if (restraint.Springs is { } rates)
+            {
+                (Vector3 shift, Vector3 turn) = (shape.Displacement(restraint.Node), shape.Rotation(restraint.Node));
+                energy += (rates[0] * shift.X * shift.X) + (rates[1] * shift.Y * shift.Y) + (rates[2] * shift.Z * shift.Z)
+                    + (rates[3] * turn.X * turn.X) + (rates[4] * turn.Y * turn.Y) + (rates[5] * turn.Z * turn.Z);
+            }
+        }
+
+        return energy;
+    }
 }

@@ -30,8 +30,7 @@ internal sealed class TargetCuts
     /// <param name="above">Only from what uses more of its limit than this share.</param>
     public IEnumerable<ProgramRow> From(DesignAnalysis design, TargetCheck check, double above)
     {
-        // Springs resist beside all groups, and what a hinge makes of a load along its tube depends on the section: no rows then, designs are only excluded
-        // one by one.
+        // What a hinge makes of a load along its tube depends on the section: no rows then, designs are only excluded one by one.
         if (!_structure.IsLinearInSections)
         {
             yield break;
