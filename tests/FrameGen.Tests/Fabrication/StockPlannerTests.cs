@@ -116,8 +116,8 @@ public class StockPlannerTests
         ShopPackage package = Plan([400, 300], Prices);
         StockLot lot = package.Stock.Lots[0];
         StockBar bar = lot.Bars[0];
-        StockLot short1 = lot with { Bars = [bar with { Cuts = [bar.Cuts[0]] }] };
-        Assert.Throws<SelfCheckException>(() => SelfCheck.Stock(package with { Stock = new StockPlan([short1]) }));
+        StockLot once = lot with { Bars = [bar with { Cuts = [bar.Cuts[0]] }] };
+        Assert.Throws<SelfCheckException>(() => SelfCheck.Stock(package with { Stock = new StockPlan([once]) }));
         StockLot twice = lot with { Bars = [bar with { Cuts = [bar.Cuts[0], bar.Cuts[0]] }] };
         Assert.Throws<SelfCheckException>(() => SelfCheck.Stock(package with { Stock = new StockPlan([twice]) }));
     }

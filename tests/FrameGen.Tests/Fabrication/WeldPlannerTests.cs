@@ -44,6 +44,25 @@ public class WeldPlannerTests
         Assert.Equal(welds.Seams[1].Length * 1.5 * 1.5 / 2 * GateFrame.Density, welds.Seams[1].FillerKg, 1e-12);
     }
 
+    // A square post narrower than the flat it stands on: its whole outline, walls square to the flat. EN 10219-2: corners of 2 x 2 mm.
+    [Fact]
+    public void A_square_post_on_a_flat_is_a_fillet_all_round()
+    {
+        const string Square = """
+            framegen: 1
+            nodes: {a: [0 mm, 0 mm, 0 mm], b: [0 mm, 900 mm, 0 mm], mid: {on: sill, at: 50 %}, top: [0 mm, 450 mm, 400 mm]}
+            tubes: {sill: {from: a, to: b, group: all}, post: {from: mid, to: top, group: thin}}
+            groups: {all: {material: S235, section: square 60 x 3 mm}, thin: {material: S235, section: square 30 x 2 mm}}
+            """;
+        WeldSeam seam = Assert.Single(WeldPlanner.Plan(PlannedText.Of(Square).Cut).Seams);
+        double outline = (4 * (30 - (2 * 4))) + (2 * Math.PI * 4);
+        Assert.Equal(outline, seam.Length, 1e-6);
+        Assert.Equal(outline, seam.Fillet, 1e-6);
+        Assert.Equal(Math.PI / 2, seam.Least, 1e-6);
+        Assert.Equal(Math.PI / 2, seam.Most, 1e-6);
+        Assert.Equal(2, seam.Leg);
+    }
+
     [Fact]
     public void Tubes_joined_without_heat_take_no_filler()
     {
