@@ -54,7 +54,7 @@ public class WeldPlannerTests
             tubes: {sill: {from: a, to: b, group: all}, post: {from: mid, to: top, group: thin}}
             groups: {all: {material: S235, section: square 60 x 3 mm}, thin: {material: S235, section: square 30 x 2 mm}}
             """;
-        WeldSeam seam = Assert.Single(WeldPlanner.Plan(PlannedText.Of(Square).Cut).Seams);
+        WeldSeam seam = Assert.Single(WeldPlanner.Plan(PlannedText.Cut(Square)).Seams);
         double outline = (4 * (30 - (2 * 4))) + (2 * Math.PI * 4);
         Assert.Equal(outline, seam.Length, 1e-6);
         Assert.Equal(outline, seam.Fillet, 1e-6);
