@@ -1,4 +1,5 @@
 using FrameGen.Cli.Reports;
+using FrameGen.Fabrication;
 using FrameGen.Output;
 using FrameGen.Output.Folders;
 using FrameGen.Sizing;
@@ -43,8 +44,9 @@ internal sealed class FreezeCommand(Terminal terminal, string spec, bool add, bo
 
         SizedFrame? sized = _job.With(p => p.Size(p.Resolve(add ? p.Read(spec) : p.ReadUnfrozen(spec), newGroupsChoose: add)));
         bool refused = sized?.Status == SizingStatus.Unmet && !anyway;
+        ShopPackage? package = sized is null || refused || !FramePipeline.CanCope(sized) ? null : _job.With(p => p.Plan(p.Cope(sized)));
         _job.PrintDiagnostics("; nothing was frozen");
-        Outcome outcome = sized is null || refused ? Outcome.Nothing : Write(FrozenText.Write(sized), exists);
+        Outcome outcome = sized is null || refused || _job.Diagnostics.HasErrors ? Outcome.Nothing : Write(FrozenText.Write(sized, package), exists);
         int code = _job.CodeFor(sized);
         if (json)
         {

@@ -83,7 +83,16 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
 
     /// <summary>Plans the shop's work.</summary>
     public ShopPackage? Plan(CutFrame? cut) =>
-        cut is null ? null : At("planning the parts", () => ShopPlanner.Plan(cut, diagnostics));
+        cut is null ? null : At("planning the parts", () =>
+        {
+            ShopPackage? package = ShopPlanner.Plan(cut, diagnostics);
+            if (package is not null)
+            {
+                FrozenMarks.Look(package, diagnostics);
+            }
+
+            return package;
+        });
 
     /// <summary>Lays out every file.</summary>
     /// <exception cref="SelfCheckException">The outputs disagree with each other: a fault of the program.</exception>

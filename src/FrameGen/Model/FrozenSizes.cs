@@ -6,9 +6,16 @@ namespace FrameGen.Model;
 /// <param name="Tool">Name and version of the program that froze them.</param>
 /// <param name="SpecChanged">True where the spec is not what it was then.</param>
 /// <param name="ChangedStock">Names of stock lists that are not what they were then.</param>
+/// <param name="Marks">The part that each tube was when they were frozen, with its hand, in the file's order.</param>
 /// <param name="Free">The same frame with its groups as the spec has them: what would be sized today.</param>
 public sealed record FrozenSizes(
-    string FileName, string Sha256, string Tool, bool SpecChanged, IReadOnlyList<string> ChangedStock, FrameModel Free);
+    string FileName,
+    string Sha256,
+    string Tool,
+    bool SpecChanged,
+    IReadOnlyList<string> ChangedStock,
+    IReadOnlyList<(string Tube, string Mark)> Marks,
+    FrameModel Free);
 
 /// <summary>A stock list that sizes come from, and what its contents are known by.</summary>
 /// <param name="List">Name.</param>

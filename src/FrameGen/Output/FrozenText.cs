@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using FrameGen.Fabrication;
 using FrameGen.Model;
 using FrameGen.Sizing;
 
@@ -10,8 +11,9 @@ internal static class FrozenText
 {
     /// <summary>Writes the file.</summary>
     /// <param name="sized">The frame whose sizes are pinned.</param>
+    /// <param name="package">Its parts; null where its ends can't be cut.</param>
     /// <returns>UTF-8 text with <c>\n</c> at the ends of lines, the same for the same frame and version.</returns>
-    public static byte[] Write(SizedFrame sized)
+    public static byte[] Write(SizedFrame sized, ShopPackage? package)
     {
         SpecIdentity spec = sized.Model.Spec;
         var text = new StringBuilder();
@@ -25,6 +27,11 @@ internal static class FrozenText
         Line(text, $"  tool: {ToolIdentity.Name} {ToolIdentity.Version}");
         WriteStock(text, sized);
         WriteGroups(text, sized);
+        if (package is not null)
+        {
+            WriteMarks(text, package);
+        }
+
         return Encoding.UTF8.GetBytes(text.ToString());
     }
 
@@ -57,6 +64,17 @@ internal static class FrozenText
                 ? $"section: {chosen.Nominal.Name}}}"
                 : $"section: {(chosen.Nominal.Name + ",").PadRight(section + 1)} stock: {chosen.StockList}}}";
             Line(text, $"  {(group.Name + ":").PadRight(name)} {{material: {(Quoted(group.Material.Name) + ",").PadRight(material)} {size}");
+        }
+    }
+
+    private static void WriteMarks(StringBuilder text, ShopPackage package)
+    {
+        FrameModel model = package.Cut.Sized.Model;
+        Line(text, $"marks:                  # the part that each tube was");
+        int name = model.Tubes.Max(t => t.Name.Length) + 1;
+        foreach ((int tube, string mark) in package.Parts.SelectMany(p => p.Tubes.Select(t => (t, p.Name))).OrderBy(p => p.t))
+        {
+            Line(text, $"  {(model.Tubes[tube].Name + ":").PadRight(name)} {mark}");
         }
     }
 

@@ -8,8 +8,13 @@ namespace FrameGen.Spec;
 /// <param name="Origin">What was frozen, and by what.</param>
 /// <param name="Stock">The lists that the sizes came from.</param>
 /// <param name="Groups">One a group of that frame.</param>
+/// <param name="Marks">The part that each tube was; none where its ends were not cut then.</param>
 public sealed record FrozenSpec(
-    SourceFile File, FrozenOriginSpec Origin, IReadOnlyList<FrozenStockSpec> Stock, IReadOnlyList<FrozenGroupSpec> Groups)
+    SourceFile File,
+    FrozenOriginSpec Origin,
+    IReadOnlyList<FrozenStockSpec> Stock,
+    IReadOnlyList<FrozenGroupSpec> Groups,
+    IReadOnlyList<FrozenMarkSpec> Marks)
 {
     private const string Ending = ".frozen.yaml";
 
@@ -35,3 +40,8 @@ public sealed record FrozenStockSpec(Placed<string> Name, string Version);
 
 /// <summary>The pinned size of a group.</summary>
 public sealed record FrozenGroupSpec(Placed<string> Name, Placed<string> Material, Placed<Section> Section, Placed<string>? Stock);
+
+/// <summary>The part that a tube was.</summary>
+/// <param name="Tube">The tube.</param>
+/// <param name="Mark">Mark of the part, with its hand.</param>
+public sealed record FrozenMarkSpec(Placed<string> Tube, string Mark);

@@ -52,7 +52,11 @@ internal sealed class IncludedFiles(Func<string, byte[]?> content)
         }
 
         return new FrozenSpec(
-            new SourceFile(path, bytes), read.Get(FrozenKeys.Freezes), read.Items(FrozenKeys.Stock), read.Get(FrozenKeys.Groups));
+            new SourceFile(path, bytes),
+            read.Get(FrozenKeys.Freezes),
+            read.Items(FrozenKeys.Stock),
+            read.Get(FrozenKeys.Groups),
+            read.Items(FrozenKeys.Marks));
     }
 
     private MapReading? Read(string path, byte[] bytes, MapForm<MapReading> form)

@@ -188,6 +188,18 @@ public sealed class FreezeTests : IDisposable
     }
 
     [Fact]
+    public void Pieces_that_are_no_longer_those_that_were_cut_are_named()
+    {
+        Run("freeze", SpecPath);
+        Assert.Contains("  arm: arms-500", File.ReadAllText(FrozenPath), StringComparison.Ordinal);
+        Assert.DoesNotContain("pieces", Run("check", SpecPath).Error, StringComparison.Ordinal);
+        Change("[500 mm,", "[480 mm,");
+        string error = Run("check", SpecPath).Error;
+        Assert.Contains("arm.frozen.yaml: these pieces have another length or other ends", error, StringComparison.Ordinal);
+        Assert.Matches("arm was arms-500[a-z]+ and is arms-480[a-z]+", error);
+    }
+
+    [Fact]
     public void A_tube_of_a_frozen_group_can_be_measured()
     {
         Run("freeze", SpecPath);

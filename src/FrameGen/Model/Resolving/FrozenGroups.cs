@@ -71,6 +71,7 @@ internal sealed class FrozenGroups(FrozenSpec frozen, StockTable stock, SpecValu
                     .Where(s => !string.Equals(stock.VersionOf(s.Name.Value), s.Version, StringComparison.Ordinal))
                     .Select(s => s.Name.Value),
             ],
+            [.. frozen.Marks.Select(m => (m.Tube.Value, m.Mark))],
             free);
     }
 

@@ -58,6 +58,14 @@ internal static class FrozenKeys
         IsRequired = true,
     };
 
+    /// <summary>The parts of that time.</summary>
+    public static readonly Key<IReadOnlyList<FrozenMarkSpec>> Marks = new(
+        "marks",
+        new NamedForm<FrozenMarkSpec>(
+            "tube", TubeName, new OwnedForm<string, FrozenMarkSpec>(Text, (tube, mark) => new FrozenMarkSpec(tube, mark))),
+        "the mark of the part that each tube was",
+        "{rail-l: rails-1200kt}");
+
     /// <summary>A file of pinned sizes.</summary>
-    public static readonly MapForm<MapReading> File = new("a file of pinned sizes", [FileKeys.FrameGen, Freezes, Stock, Groups], map => map);
+    public static readonly MapForm<MapReading> File = new("a file of pinned sizes", [FileKeys.FrameGen, Freezes, Stock, Groups, Marks], map => map);
 }
