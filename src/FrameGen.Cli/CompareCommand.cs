@@ -66,7 +66,7 @@ internal sealed class CompareCommand(Terminal terminal, CompareRequest request)
         var comparison = ShapeComparison.Of(need, Metals(supply, own?.Material), ComparedShape.All(request.ThinWall), walls, supply, own);
         if (request.Svg is { } svg)
         {
-            File.WriteAllBytes(svg, SvgWriter.Write(ComparisonPlot.Draw(comparison), "Mass against outer size at equal stiffness"));
+            WritePlot(svg, comparison);
         }
 
         if (request.Json)
@@ -83,6 +83,19 @@ internal sealed class CompareCommand(Terminal terminal, CompareRequest request)
         }
 
         return ExitCode.Done;
+    }
+
+    // A picture may be drawn anew; anything else of that name is somebody's work.
+    private static void WritePlot(string path, ShapeComparison comparison)
+    {
+        byte[] picture = SvgWriter.Write(ComparisonPlot.Draw(comparison), "Mass against outer size at equal stiffness");
+        const int Beginning = 60;
+        if (File.Exists(path) && new FileInfo(path).Length > 0 && !File.ReadAllBytes(path).AsSpan().StartsWith(picture.AsSpan(0, Beginning)))
+        {
+            throw new WrongInputException($"{path} is there already and is no plot; name another file for --svg");
+        }
+
+        File.WriteAllBytes(path, picture);
     }
 
     private static Material MaterialOf(SizedFrame sized, int tube) => sized.Model.Groups[sized.Model.Tubes[tube].Group].Material;

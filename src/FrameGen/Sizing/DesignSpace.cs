@@ -149,7 +149,7 @@ internal sealed class DesignSpace
             for (int before = 0; before < g && first; before++)
             {
                 first = !string.Equals(Model.Groups[g].Material.Name, Model.Groups[before].Material.Name, StringComparison.Ordinal)
-                    || !_options[g][choice[g]].Section.Equals(_options[before][choice[before]].Section);
+                    || !_options[g][choice[g]].Candidate.Nominal.Equals(_options[before][choice[before]].Candidate.Nominal);
             }
 
             different += first ? 1 : 0;

@@ -103,6 +103,12 @@ public sealed class CompareTests : IDisposable
         Assert.Contains("6082-T6", texts);
         int curves = picture.Descendants().Count(e => e.Name.LocalName is "path" && e.Attribute("d")!.Value.Count(c => c is 'L') > 40);
         Assert.Equal(2 * 4, curves);
+
+        // A plot is drawn over a plot, and over nothing else.
+        Assert.Equal(0, Run("compare", "--min-bending-stiffness", "100 N.m2", "--material", "S235", "--svg", file).Code);
+        _scratch.Write("notes.txt", "bought three bars");
+        Assert.Equal(2, Run("compare", "--min-bending-stiffness", "100 N.m2", "--material", "S235", "--svg", _scratch["notes.txt"]).Code);
+        Assert.Equal("bought three bars", File.ReadAllText(_scratch["notes.txt"]));
     }
 
     [Theory]
