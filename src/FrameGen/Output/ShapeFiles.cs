@@ -45,6 +45,7 @@ internal static class ShapeFiles
             "preview/frame.stl", StlWriter.Write([.. cut.Tubes.Select(t => InPlace(t.Tube))]));
 
         yield return new OutputFile("templates.pdf", TemplatesPdf.Write(package));
+        yield return new OutputFile("layout.dxf", Dxf(LayoutDrawing.Draw(package)));
 
         byte[] Dxf(Drawing drawing) => DxfWriter.Write(WithSquare(drawing), options.Dxf);
 

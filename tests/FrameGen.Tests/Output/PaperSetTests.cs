@@ -20,7 +20,7 @@ public class PaperSetTests
         string[] expected =
         [
             "cut-list.csv", "cut-list.md", "ends.csv", "stock-plan.csv", "stock-plan.md", "setup.csv", "setup.md",
-            "welds.csv", "welds.md", "frame.json", "manifest.json", "templates.pdf",
+            "welds.csv", "welds.md", "frame.json", "manifest.json", "templates.pdf", "layout.dxf",
             $"developed/{post}.dxf", $"developed/{arm}.dxf", $"developed/{rail}.dxf", $"templates/{post}.dxf", $"templates/{arm}.dxf",
             "spec/gate.yaml", "spec/gate-2.yaml", "preview/frame.stl", $"preview/{post}.stl", $"preview/{arm}.stl", $"preview/{rail}.stl",
         ];
