@@ -65,7 +65,7 @@ internal sealed class JointPlan
                 ends[i] = new EndPlan(id, CutKind.Cope, frame, limit, 0, mates, null);
             }
 
-            before.Add(new MateSource(id.Tube, frame.Axis, tube.Axes, Skin(id.Tube), limit));
+            before.Add(new MateSource(id.Tube, frame.Axis, frame.Axes, Skin(id.Tube), limit));
         }
 
         return new JointPlan(ends, runOut, asker);
