@@ -1,6 +1,7 @@
 using BenchmarkDotNet.Running;
 using FrameGen.Benchmarks.Fabrication;
 using FrameGen.Benchmarks.Mechanics;
+using FrameGen.Benchmarks.Sizing;
 
 if (args.Length > 0 && string.Equals(args[0], LatticeRun.Option, StringComparison.Ordinal))
 {
@@ -9,6 +10,10 @@ if (args.Length > 0 && string.Equals(args[0], LatticeRun.Option, StringCompariso
 else if (args.Contains(CuttingTimes.Option, StringComparer.Ordinal))
 {
     CuttingTimes.Print(Console.Out);
+}
+else if (args.Contains("--sizing", StringComparer.Ordinal))
+{
+    SizingGrowth.Print(Console.Out);
 }
 else if (args.Contains("--ratios", StringComparer.Ordinal))
 {

@@ -40,6 +40,9 @@ public sealed record FrameModel(
     /// <summary>Where the sizes are pinned; null where they are free.</summary>
     public FrozenSizes? Frozen { get; init; }
 
+    /// <summary>How sizes are chosen.</summary>
+    public SizingSpec Sizing { get; init; } = SizingSpec.Default;
+
     /// <summary>By node: the tube ends there, in the order of <see cref="Tubes"/>; a through tube has none there.</summary>
     public IReadOnlyList<IReadOnlyList<TubeEndId>> EndsAt { get; } = EndsByNode(Nodes.Count, Tubes);
 

@@ -62,6 +62,7 @@ public static class ModelResolver
         LoadCase?[] cases = CaseResolver.Resolve(spec.Cases, frame, supports, out NameIndex caseNames);
         Target?[] bound = BindTargets(spec, frame, caseNames, supports, groupNames, groups, groupOfTube);
         IReadOnlyList<JointRequest> joints = JointResolver.Resolve(spec.Joints, frame);
+        PriceCheck.Run(spec.Sizing, groups, groupOfTube, diagnostics);
 
         if (diagnostics.HasErrors || shop is null)
         {
@@ -83,6 +84,7 @@ public static class ModelResolver
             shop.Value.Fabrication)
         {
             Have = have,
+            Sizing = spec.Sizing,
             Stock = StockOf(used.Groups, stock),
         };
         return frozen is null ? model : model with { Frozen = frozen.Describe(spec.Files[0], Free(model, free, groups, groupOfTube)) };

@@ -3,6 +3,7 @@ using FrameGen.Geometry;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Sizing;
+using FrameGen.Spec;
 
 namespace FrameGen.Output;
 
@@ -50,9 +51,15 @@ internal static class SizingJson
     {
         json.WriteStartObject("sizing");
         json.WriteString("status", StatusWord(sized.Status));
-        json.WriteString("objective", "mass");
+        json.WriteString("objective", sized.Model.Sizing.Objective == SizingObjective.Cost ? "cost" : "mass");
         json.Number("mass_kg", sized.MassKg);
         json.Number("bound_kg", sized.BoundKg);
+        if (sized.Model.Sizing.Objective == SizingObjective.Cost)
+        {
+            json.Number("cost", sized.Cost);
+            json.Number("bound_cost", sized.BoundCost);
+        }
+
         json.WriteNumber("analyses", sized.Analyses);
         if (sized.Model.Frozen is { } frozen)
         {

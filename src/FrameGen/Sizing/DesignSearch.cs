@@ -1,7 +1,7 @@
 using System.Runtime.ExceptionServices;
 using FrameGen.Mechanics.Frames;
 using FrameGen.Sizing.Analysis;
-using FrameGen.Sizing.Program;
+using FrameGen.Sizing.Search;
 using FrameGen.Sizing.Targets;
 
 namespace FrameGen.Sizing;
@@ -53,7 +53,7 @@ internal sealed class DesignSearch
     public IReadOnlyList<TargetCheck> Checks { get; }
 
     /// <summary>Rows that every design satisfies which meets the targets: what breaks one needs no analysis.</summary>
-    public ChoiceProgram? Rows { get; init; }
+    public SizingProgram? Rows { get; init; }
 
     /// <summary>The first design in the order that fits and meets every target.</summary>
     /// <exception cref="MechanismException">A design before it can move without strain.</exception>
@@ -104,7 +104,7 @@ internal sealed class DesignSearch
         var merged = new Tally(Checks.Count);
         Walk(() => new Tally(Checks.Count), (analysis, tally, rank) =>
         {
-            if (_joints.Fits(analysis.Choice, analysis.Sections))
+            if (_space.IsAllowed(analysis.Choice) && _joints.Fits(analysis.Choice, analysis.Sections))
             {
                 double worst = 0;
                 for (int t = 0; t < Checks.Count; t++)
@@ -147,7 +147,7 @@ internal sealed class DesignSearch
 
     private Verdict Judge(DesignAnalysis analysis, ref int lastRefusal)
     {
-        if (Rows?.Keeps(analysis.Choice) == false || !_joints.Fits(analysis.Choice, analysis.Sections))
+        if (Rows?.Allows(analysis.Choice) == false || !_joints.Fits(analysis.Choice, analysis.Sections))
         {
             return Verdict.IsOut;
         }

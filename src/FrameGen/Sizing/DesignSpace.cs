@@ -2,6 +2,7 @@ using FrameGen.Mechanics.Frames;
 using FrameGen.Mechanics.Materials;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
+using FrameGen.Spec;
 
 namespace FrameGen.Sizing;
 
@@ -13,6 +14,9 @@ internal sealed class DesignSpace
 {
     /// <summary>Units in a kilogram: far below any difference that sizes make, so that rounding decides nothing.</summary>
     public const double UnitsPerKg = 1e9;
+
+    /// <summary>Units in the shop's own money, where cost is made least.</summary>
+    public const double UnitsPerMoney = 1e6;
 
     private readonly Option[][] _options;
 
@@ -26,6 +30,9 @@ internal sealed class DesignSpace
             Count = Count > long.MaxValue / group.Length ? long.MaxValue : Count * group.Length;
         }
     }
+
+    /// <summary>Different sizes at most; null for any number.</summary>
+    public int? MostSizes { get; private init; }
 
     public FrameModel Model { get; }
 
@@ -64,12 +71,15 @@ internal sealed class DesignSpace
                 kept = [.. group.Candidates];
             }
 
-            options[g] = Describe(kept, group.Material, lengths[g]);
+            options[g] = Describe(kept, group.Material, lengths[g], model.Sizing.Objective == SizingObjective.Cost);
         }
 
         emptied = none;
-        return new DesignSpace(model, options);
+        return new DesignSpace(model, options) { MostSizes = model.Sizing.DifferentSizes };
     }
+
+    /// <summary>The same with any number of different sizes.</summary>
+    public DesignSpace WithAnySizes() => new(Model, _options);
 
     /// <summary>The design of a number, into <paramref name="choice"/>.</summary>
     public void Decode(int design, Span<int> choice)
@@ -158,7 +168,7 @@ internal sealed class DesignSpace
         return different;
     }
 
-    private static Option[] Describe(List<Candidate> candidates, Material material, double length)
+    private static Option[] Describe(List<Candidate> candidates, Material material, double length, bool byCost)
     {
         // Positions by name decide ties; ordinal, so that no culture does.
         List<string> names = [.. candidates.Select(c => c.Section.Name).Order(StringComparer.Ordinal)];
@@ -175,15 +185,25 @@ internal sealed class DesignSpace
                 section.OuterSize / 2,
                 names.IndexOf(section.Name))
             {
-                Units = (long)Math.Round(massPerLength * length * UnitsPerKg),
+                MassUnits = (long)Math.Round(massPerLength * length * UnitsPerKg),
+                Units = (long)Math.Round(byCost ? (candidate.PricePerMetre ?? 0) * length / 1000 * UnitsPerMoney : massPerLength * length * UnitsPerKg),
             };
         })];
     }
 
-    /// <summary>Which of two designs of the same cost comes first: fewer different sizes, then the sections' names group by group.</summary>
+    /// <summary>True where a design has no more different sizes than the spec allows.</summary>
+    public bool IsAllowed(ReadOnlySpan<int> choice) => MostSizes is not { } most || DifferentSizes(choice) <= most;
+
+    /// <summary>Which of two designs that come to the same comes first: the lighter, then fewer different sizes, then the sections' names group by group.</summary>
     public int CompareTies(ReadOnlySpan<int> a, ReadOnlySpan<int> b)
     {
-        int order = DifferentSizes(a).CompareTo(DifferentSizes(b));
+        long heavier = 0;
+        for (int g = 0; g < _options.Length; g++)
+        {
+            heavier += _options[g][a[g]].MassUnits - _options[g][b[g]].MassUnits;
+        }
+
+        int order = heavier != 0 ? Math.Sign(heavier) : DifferentSizes(a).CompareTo(DifferentSizes(b));
         for (int g = 0; g < _options.Length && order == 0; g++)
         {
             order = _options[g][a[g]].NameRank.CompareTo(_options[g][b[g]].NameRank);
@@ -221,4 +241,7 @@ internal sealed record Option(
 
     /// <summary>What it adds to the objective.</summary>
     public long Units { get; init; }
+
+    /// <summary>Its mass in units.</summary>
+    public long MassUnits { get; init; }
 }

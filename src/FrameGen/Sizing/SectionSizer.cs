@@ -70,7 +70,15 @@ public static class SectionSizer
         int[]? found = lightest.Run(MostAnalyses);
         if (!lightest.SomeFit)
         {
-            FitReport.Explain(analysis, diagnostics);
+            if (model.Sizing.DifferentSizes is { } most && new LightestSearch(space.WithAnySizes(), analysis, [], welds).Fits())
+            {
+                diagnostics.Error(model.Sizing.At, $"sizing: different_sizes: {most} is too few: no choice of so few sizes serves every group and fits every joint; allow more, or give groups more sizes in common");
+            }
+            else
+            {
+                FitReport.Explain(analysis, diagnostics);
+            }
+
             return null;
         }
 
@@ -88,12 +96,11 @@ public static class SectionSizer
 
         if (space.Count > MostDesigns)
         {
-            diagnostics.Error(null, TooManyDesigns(space));
-            return null;
+            return FinishLarge(space, checks, analysis, lightest, diagnostics);
         }
 
         // What the program could not settle within its budget is looked through one by one; its rows spare most of the work.
-        var search = new DesignSearch(space, space.InOrder(), checks, analysis.Joints, newAnalysis, threads, progress) { Rows = lightest.Program };
+        var search = new DesignSearch(space, space.InOrder(), checks, analysis.Joints, newAnalysis, threads, progress) { Rows = lightest.Rows };
         if (!hopeless && lightest.Bound < long.MaxValue && search.FindFirst() is { Rank: { } rank } result)
         {
             search.Turn(analysis, rank);
@@ -106,17 +113,22 @@ public static class SectionSizer
         return SizingFinish.Describe(analysis, SizingStatus.Unmet, lightest.Analyses, search.Checks, diagnostics);
     }
 
-    private static string TooManyDesigns(DesignSpace space)
+    // Too many designs to look at each: exchanges from the lightest design that no row refuses, and what is proven is the bound.
+    private static SizedFrame? FinishLarge(
+        DesignSpace space, IReadOnlyList<TargetCheck> checks, DesignAnalysis analysis, LightestSearch lightest, DiagnosticList diagnostics)
     {
-        List<int> chosen = [.. Enumerable.Range(0, space.Groups).Where(g => space[g].Length > 1).OrderByDescending(g => space[g].Length).ThenBy(g => g)];
-        string count = space.Count == long.MaxValue ? "more designs than can be counted" : $"{Wording.Count(space.Count)} designs";
-        string groups = string.Join(", ", chosen.Select(g => $"{space.Model.Groups[g].Name} {Wording.Count(space[g].Length)}"));
+        var exchange = new ExchangeSearch(space, analysis, checks, lightest.Rows);
+        int[]? found = exchange.Run(lightest.Last, MostAnalyses);
+        long analyses = lightest.Analyses + exchange.Analyses;
+        if (found is not null && lightest.Bound < long.MaxValue)
+        {
+            analysis.Set(found);
+            bool proven = lightest.Bound >= space.UnitsOf(found);
+            return SizingFinish.Describe(
+                analysis, proven ? SizingStatus.ProvenLightest : SizingStatus.BestFound, analyses, checks, diagnostics, proven ? null : lightest.Bound);
+        }
 
-        // As many for each group as fit into the limit when all have the same.
-        int each = (int)Math.Floor(Math.Pow(MostDesigns, 1.0 / chosen.Count) + 1e-9);
-        string advice = each > 1
-            ? $"narrow the ranges of the largest (od, wall, fewer stock lists): about {Wording.Count(each)} candidates a group are few enough"
-            : "give some groups a fixed section, or put tubes of several groups into one";
-        return $"there are {count} to choose from, and no more than {Wording.Count(MostDesigns)} are gone through; candidates: {groups}; {advice}";
+        exchange.Describe(diagnostics, lightest.Bound == long.MaxValue);
+        return SizingFinish.Describe(analysis, SizingStatus.Unmet, analyses, checks, diagnostics);
     }
 }

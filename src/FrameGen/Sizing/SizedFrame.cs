@@ -40,6 +40,12 @@ public sealed record SizedFrame(
     IReadOnlyList<CaseResult> Cases,
     IReadOnlyList<NodeJoint> Joints)
 {
+    /// <summary>Price of the tubes on axis lengths, in the shop's own money; null where cost is not what is made least.</summary>
+    public double? Cost { get; init; }
+
+    /// <summary>No design that meets the targets costs less; null where there is none, or cost is not what is made least.</summary>
+    public double? BoundCost { get; init; }
+
     /// <summary>The lowest natural frequencies, Hz, lowest first, with all supports or those of the frequency target; null when nothing is analysed.</summary>
     public IReadOnlyList<double>? Frequencies { get; init; }
 

@@ -4,6 +4,7 @@ using FrameGen.Mechanics.Frames;
 using FrameGen.Model;
 using FrameGen.Sizing.Analysis;
 using FrameGen.Sizing.Targets;
+using FrameGen.Spec;
 
 namespace FrameGen.Sizing;
 
@@ -14,9 +15,15 @@ internal static class SizingFinish
     public const double LargestError = 1e-9;
 
     /// <summary>Describes the design that the analysis stands at.</summary>
+    /// <param name="analysis">The analysis.</param>
+    /// <param name="status">How sure the choice is.</param>
+    /// <param name="analyses">Designs analysed on the way.</param>
+    /// <param name="checks">The targets.</param>
+    /// <param name="diagnostics">Takes warnings, and errors where the numbers can't be trusted.</param>
+    /// <param name="bound">Units that no design comes below; null where this one is proven.</param>
     /// <returns>Null when its numbers can't be trusted: an error was reported.</returns>
     public static SizedFrame? Describe(
-        DesignAnalysis analysis, SizingStatus status, long analyses, IReadOnlyList<TargetCheck> checks, DiagnosticList diagnostics)
+        DesignAnalysis analysis, SizingStatus status, long analyses, IReadOnlyList<TargetCheck> checks, DiagnosticList diagnostics, long? bound = null)
     {
         FrameModel model = analysis.Space.Model;
         List<CaseResult> cases = [.. model.Cases.Select((_, c) => DescribeCase(analysis, c))];
@@ -40,17 +47,21 @@ internal static class SizingFinish
         }
 
         double mass = analysis.Space.MassOf(analysis.Choice);
+        bool byCost = model.Sizing.Objective == SizingObjective.Cost;
+        double cost = analysis.Space.UnitsOf(analysis.Choice) / DesignSpace.UnitsPerMoney;
         return new SizedFrame(
             model,
             chosen,
             status,
             mass,
-            status == SizingStatus.Unmet ? null : mass,
+            status == SizingStatus.Unmet || byCost ? null : bound is { } kg ? kg / DesignSpace.UnitsPerKg : mass,
             analyses,
             targets,
             cases,
             [.. Enumerable.Range(0, model.Nodes.Count).Select(n => JointOrder.At(model, n, analysis.Sections))])
         {
+            Cost = byCost ? cost : null,
+            BoundCost = status == SizingStatus.Unmet || !byCost ? null : bound is { } money ? money / DesignSpace.UnitsPerMoney : cost,
             Frequencies = analysis.Structure?.VibrationSolver is null ? null : [.. analysis.Stability.Modes().Select(m => m.Hertz)],
         };
     }

@@ -67,7 +67,7 @@ internal static class UnmetReport
     }
 
     // 4.2 mm, 40 % over the limit of 3 mm; 120 mm, 40 times the limit of 3 mm.
-    private static string Amount(TargetResult result)
+    public static string Amount(TargetResult result)
     {
         bool isMinimum = result.Value < result.Limit;
         double off = Math.Abs(result.Value - result.Limit) / result.Limit;

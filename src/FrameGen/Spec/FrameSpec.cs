@@ -48,6 +48,9 @@ public sealed record FrameSpec(
     /// <summary>Sizes of tubes in hand, in the order written.</summary>
     public IReadOnlyList<MeasuredSpec> Measured { get; init; } = [];
 
+    /// <summary>How sizes are chosen.</summary>
+    public SizingSpec Sizing { get; init; } = SizingSpec.Default;
+
     /// <summary>The pinned sizes beside the spec; null where there are none.</summary>
     public FrozenSpec? Frozen { get; init; }
 }

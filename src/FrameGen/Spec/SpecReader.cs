@@ -60,5 +60,6 @@ public static class SpecReader
         root.Find(FileKeys.Fabrication) ?? new FabricationSpec(null, null, null, null, null, null, null, null, null))
     {
         Measured = root.Items(FileKeys.Measured),
+        Sizing = root.Find(FileKeys.Sizing) ?? SizingSpec.Default,
     };
 }

@@ -64,7 +64,7 @@ public sealed class BruteForceTests(ITestOutputHelper output)
     {
         Everything all = Everything.Of(RandomFrames.Make(seed, 400));
         var random = new Random(seed);
-        var program = SizingProgram.Of(all.Space);
+        ChoiceProgram program = new SizingProgram(all.Space).Program;
         var cuts = new TargetCuts(all.Space, all.Structure, all.Welds);
         var rows = new List<(TargetCheck Check, ProgramRow Row)>();
         DesignAnalysis analysis = all.NewAnalysis();
@@ -124,7 +124,7 @@ public sealed class BruteForceTests(ITestOutputHelper output)
             {
                 space.Decode(order[rank], choice);
                 analysis.Set(choice);
-                if (joints.Fits(choice, analysis.Sections) && cheapFirst.All(c => c.Ratio(analysis) <= 1))
+                if (space.IsAllowed(choice) && joints.Fits(choice, analysis.Sections) && cheapFirst.All(c => c.Ratio(analysis) <= 1))
                 {
                     return all with { First = [.. choice], Rank = rank };
                 }

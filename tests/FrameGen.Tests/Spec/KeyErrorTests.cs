@@ -151,8 +151,6 @@ public class KeyErrorTests
     {
         { "group: posts, ends: {to: {cut: {plane: [1, 0, 0]}}}", "plane", "plane" },
         { "group: posts, ends: {to: {vent: 4 mm}}", "vent", "vent" },
-        { "\nsizing: {objective: cost}", "cost", "objective: cost" },
-        { "\nsizing: {different_sizes: 3}", "different_sizes", "different_sizes" },
     };
 
     [Theory]
@@ -217,7 +215,7 @@ public class KeyErrorTests
             display: {length: in, fraction: 1/16, mass: lb, force: lbf}
             have: [{section: rod 9 mm, material: S235, lengths: [1850 mm, 920 mm]}]
             stock: {rack: {material: [S235, 1.4301], bar: 6 m, price_per_m: 4.2, sizes: [round 25 x 1.5 mm]}}
-            sizing: {objective: mass}
+            sizing: {objective: cost, different_sizes: 3}
             supports: {foot: {hold: [x, y, z, rx, ry, rz], mirror: false}}
             cases:
               push: {supports: [foot], loads: [{tube: post, at: 40 %, force: [1 N, 0 N, 0 N]}, {tube: post, distance: 3 mm, moment: [1 Nm, 0 Nm, 0 Nm]}]}

@@ -31,19 +31,31 @@ internal sealed class LightestSearch
         _checks = [.. checks.Where(c => c.NeedsFrame).OrderBy(c => c.Cost)];
         _cheap = _checks.TakeWhile(c => c.Cost < 10).Count();
         _cuts = analysis.Structure is { } structure && _checks.Count > 0 ? new TargetCuts(space, structure, welds) : null;
-        Program = SizingProgram.Of(space);
+        Rows = new SizingProgram(space);
         _fits = new FitRows(space, analysis.Joints, Program);
         _tree = new ProgramTree(Program);
     }
 
-    /// <summary>The program with all rows found so far.</summary>
-    public ChoiceProgram Program { get; }
+    /// <summary>All rows found so far.</summary>
+    public SizingProgram Rows { get; }
+
+    private ChoiceProgram Program => Rows.Program;
 
     /// <summary>Designs analysed.</summary>
     public int Analyses { get; private set; }
 
     /// <summary>Designs that fit were met with: where none was, no joint can be made.</summary>
     public bool SomeFit { get; private set; }
+
+    /// <summary>The last design that could be made.</summary>
+    public int[] Last { get; private set; } = [];
+
+    /// <summary>Whether any design can be made.</summary>
+    public bool Fits()
+    {
+        _ = Run(1);
+        return SomeFit;
+    }
 
     /// <summary>Parts of the program's search looked at.</summary>
     public long Parts => _tree.Parts;
@@ -61,7 +73,7 @@ internal sealed class LightestSearch
             long left = best is null ? MostParts - _tree.Parts : MostPartsForTies;
             if (_tree.Next(left) is not { } found)
             {
-                Bound = best is null ? _tree.Bound : Program.CostOf(best);
+                Bound = best is null ? _tree.Bound : _space.UnitsOf(best);
                 return best;
             }
 
@@ -79,6 +91,7 @@ internal sealed class LightestSearch
             }
 
             SomeFit = true;
+            Last = choice;
             if (best is null && Analyses >= budget)
             {
                 Bound = _tree.Bound;

@@ -74,7 +74,7 @@ internal static class FileKeys
     public static readonly Key<FabricationSpec> Fabrication =
         new("fabrication", ShopKeys.Fabrication, "how ends are cut and papers drawn", "{cut: radial, kerf: 2 mm}");
 
-    private static readonly Key<bool> Sizing = new("sizing", StockKeys.Sizing, "how sizes are chosen", "{objective: mass}");
+    public static readonly Key<SizingSpec> Sizing = new("sizing", StockKeys.Sizing, "how sizes are chosen", "{objective: mass}");
 
     /// <summary>A spec.</summary>
     public static readonly MapForm<MapReading> Spec = new(

@@ -149,9 +149,9 @@ internal static class StockKeys
                 map.Owner, map.Find(MeasuredOd), map.Find(MeasuredHeight), map.Find(MeasuredWidth), map.Find(MeasuredWall)),
             map => map.AtLeastOne(MeasuredOd, MeasuredHeight, MeasuredWidth, MeasuredWall)));
 
-    private static readonly Key<bool> Objective = new(
+    private static readonly Key<SizingObjective> Objective = new(
         "objective",
-        new WordForm<bool>([("mass", true)], ["cost"], word => $"objective: {word}"),
+        new WordForm<SizingObjective>([("mass", SizingObjective.Mass), ("cost", SizingObjective.Cost)]),
         "what is made least",
         "mass");
 
@@ -159,11 +159,14 @@ internal static class StockKeys
         "different_sizes",
         new PlainNumberForm("a whole number such as 3", isWhole: true),
         "at most so many different tubes to buy",
-        "3")
-    {
-        IsNotSupportedYet = true,
-    };
+        "3");
 
     /// <summary>How sizes are chosen.</summary>
-    public static readonly MapForm<bool> Sizing = new("sizing", [Objective, DifferentSizes], _ => true);
+    public static readonly MapForm<SizingSpec> Sizing = new(
+        "sizing",
+        [Objective, DifferentSizes],
+        map => new SizingSpec(
+            map.FindValue(Objective) ?? SizingObjective.Mass,
+            map.FindValue(DifferentSizes) is { } most ? (int)Math.Min(most, int.MaxValue) : null,
+            map.Owner.At));
 }
