@@ -11,7 +11,7 @@ namespace FrameGen.Sizing.Search;
 /// </summary>
 internal sealed class LightestSearch
 {
-    private const long MostParts = 400_000;
+    private const long MostParts = 20_000;
     private const long MostPartsForTies = 20_000;
 
     // Rows of targets that are near their limit are worth having too.
