@@ -51,16 +51,19 @@ internal sealed class ForeignProgram
     }
 
     /// <summary>Runs it; its standard output. Fails the test where it ends with another code than 0.</summary>
-    public string Run(params string[] arguments)
+    public string Run(params string[] arguments) => RunIn(string.Empty, arguments);
+
+    /// <summary>Runs it in a folder of its own, for a program that leaves files where it stands.</summary>
+    public string RunIn(string folder, params string[] arguments)
     {
-        (int exitCode, string output, string errors) = Start(arguments);
+        (int exitCode, string output, string errors) = Start(arguments, folder);
         Assert.True(exitCode == 0, $"{_file} {string.Join(' ', arguments)} ended with {exitCode}:\n{output}\n{errors}");
         return output;
     }
 
-    private (int ExitCode, string Output, string Errors) Start(string[] arguments)
+    private (int ExitCode, string Output, string Errors) Start(string[] arguments, string folder = "")
     {
-        var start = new ProcessStartInfo(_file, arguments) { UseShellExecute = false, RedirectStandardOutput = true, RedirectStandardError = true };
+        var start = new ProcessStartInfo(_file, arguments) { WorkingDirectory = folder, UseShellExecute = false, RedirectStandardOutput = true, RedirectStandardError = true };
         start.Environment["LC_ALL"] = "C.UTF-8";
         try
         {
@@ -96,6 +99,9 @@ internal sealed class ScratchFolder : IDisposable
 
     /// <summary>Path of a file in it.</summary>
     public string this[string name] => Path.Combine(_folder.FullName, name);
+
+    /// <summary>Its own path.</summary>
+    public string Place => _folder.FullName;
 
     /// <summary>Writes a file; its path.</summary>
     public string Write(string name, byte[] content)
