@@ -1,4 +1,5 @@
 using FrameGen.Geometry;
+using FrameGen.Mechanics.Frames;
 
 namespace FrameGen.Sizing;
 
@@ -24,6 +25,9 @@ public sealed record CaseResult(
 
     /// <summary>Where it then moves most: <c>node top</c>, <c>tube strut</c>; empty when nothing is compressed.</summary>
     public string BucklesAt { get; init; } = "";
+
+    /// <summary>By tube: how its axis moves, place by place from its start; empty where that was not asked for.</summary>
+    public IReadOnlyList<IReadOnlyList<AxisPlace>> Axes { get; init; } = [];
 
     /// <summary>The tube nearest its yield, the first of equals; by the highest stress where the yield of some tube is not known.</summary>
     public int MostUsedTube()
@@ -57,6 +61,11 @@ public sealed record CaseResult(
         return largest;
     }
 }
+
+/// <summary>How a place on a tube's axis moves in a case.</summary>
+/// <param name="Distance">From the tube's start, mm.</param>
+/// <param name="Motion">Displacement and rotation there, global axes.</param>
+public readonly record struct AxisPlace(double Distance, AxisMotion Motion);
 
 /// <summary>What one load case does to one tube.</summary>
 /// <param name="MaxStress">Highest von Mises stress, MPa.</param>

@@ -32,7 +32,7 @@ internal static class SizingFinish
             return null;
         }
 
-        List<TargetResult> targets = [.. checks.Select(c => c.Result(analysis))];
+        List<TargetResult> targets = [.. checks.Select(c => c.Result(analysis) with { ByTube = ByTube(analysis, c) })];
         if (status == SizingStatus.Unmet && model.Groups.All(g => g.IsFixed))
         {
             UnmetReport.ExplainFixed(targets, checks, diagnostics);
@@ -66,6 +66,12 @@ internal static class SizingFinish
         };
     }
 
+    private static IReadOnlyList<double?> ByTube(DesignAnalysis analysis, TargetCheck check)
+    {
+        double?[] ratios = [.. analysis.Space.Model.Tubes.Select((_, t) => check.RatioOf(analysis, t))];
+        return Array.Exists(ratios, r => r is not null) ? ratios : [];
+    }
+
     private static CaseResult DescribeCase(DesignAnalysis analysis, int loadCase)
     {
         FrameModel model = analysis.Space.Model;
@@ -82,6 +88,7 @@ internal static class SizingFinish
         {
             BucklingFactor = analysis.Stability.Case(loadCase)?.Factor,
             BucklesAt = analysis.Stability.WhereBuckling(loadCase),
+            Axes = [.. model.Tubes.Select((_, t) => DeflectedTube.Describe(analysis, loadCase, t))],
         };
     }
 

@@ -14,4 +14,7 @@ public sealed record TargetResult(
 {
     /// <summary>True when the target holds.</summary>
     public bool Met => Ratio <= 1;
+
+    /// <summary>By tube: the share of the limit that it uses by itself, null where the target does not look at it; empty for a target that looks at no single tubes.</summary>
+    public IReadOnlyList<double?> ByTube { get; init; } = [];
 }

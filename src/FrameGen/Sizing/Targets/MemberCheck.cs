@@ -29,6 +29,10 @@ internal abstract class MemberCheck(FrameModel model, MemberTarget target) : Tar
     }
 
     /// <inheritdoc/>
+    public override double? RatioOf(DesignAnalysis analysis, int tube) =>
+        target.Tubes.Contains(tube) ? Ratio(Model.Tubes[tube], analysis.Sections[Model.Tubes[tube].Group]) : null;
+
+    /// <inheritdoc/>
     public override bool Allows(int group, Section section)
     {
         for (int i = 0; i < target.Tubes.Count; i++)

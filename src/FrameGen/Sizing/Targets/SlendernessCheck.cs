@@ -57,6 +57,13 @@ internal sealed class SlendernessCheck : TargetCheck
                 $"{Model.Tubes[span.Tube].Name} between {Model.Nodes[span.From].Name} and {Model.Nodes[span.To].Name}, {Wording.Number(span.Length)} mm");
     }
 
+    /// <inheritdoc/>
+    public override double? RatioOf(DesignAnalysis analysis, int tube)
+    {
+        int group = Model.Tubes[tube].Group;
+        return Ratio(group, analysis.Sections[group], LongestOfTube(Model, tube).Length);
+    }
+
     private static double Radius(Section section) => Math.Min(section.RadiusOfGyrationY, section.RadiusOfGyrationZ);
 
     private static Span LongestOf(FrameModel model, int group)
@@ -64,38 +71,45 @@ internal sealed class SlendernessCheck : TargetCheck
         var longest = new Span(-1, 0, -1, -1);
         for (int t = 0; t < model.Tubes.Count; t++)
         {
-            Tube tube = model.Tubes[t];
-            if (tube.Group != group)
+            if (model.Tubes[t].Group == group && LongestOfTube(model, t) is var span && span.Length > longest.Length)
             {
-                continue;
-            }
-
-            (double at, int from) = (0, tube.From.Node);
-            foreach (int node in tube.NodesOn.OrderBy(n => model.Nodes[n].ThroughDistance))
-            {
-                Offer(model.Nodes[node].ThroughDistance, node);
-            }
-
-            Offer(tube.Length, tube.To.Node);
-
-            void Offer(double next, int node)
-            {
-                if (next - at > longest.Length)
-                {
-                    longest = new Span(t, next - at, from, node);
-                }
-
-                (at, from) = (next, node);
+                longest = span;
             }
         }
 
         return longest;
     }
 
-    private double Ratio(int group, Section section)
+    private static Span LongestOfTube(FrameModel model, int index)
+    {
+        Tube tube = model.Tubes[index];
+        var longest = new Span(-1, 0, -1, -1);
+        (double at, int from) = (0, tube.From.Node);
+        foreach (int node in tube.NodesOn.OrderBy(n => model.Nodes[n].ThroughDistance))
+        {
+            Offer(model.Nodes[node].ThroughDistance, node);
+        }
+
+        Offer(tube.Length, tube.To.Node);
+        return longest;
+
+        void Offer(double next, int node)
+        {
+            if (next - at > longest.Length)
+            {
+                longest = new Span(index, next - at, from, node);
+            }
+
+            (at, from) = (next, node);
+        }
+    }
+
+    private double Ratio(int group, Section section) => Ratio(group, section, _longest[group].Length);
+
+    private double Ratio(int group, Section section, double length)
     {
         (double wall, double limit) = Wall(group, section);
-        return Math.Max(_longest[group].Length / Radius(section) / _target.Max, wall / limit);
+        return Math.Max(length / Radius(section) / _target.Max, wall / limit);
     }
 
     // Diameter or flat over thickness and its limit; 0 where the wall isn't looked at, or there is none.

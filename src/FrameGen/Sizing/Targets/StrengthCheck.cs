@@ -57,6 +57,11 @@ internal sealed class StrengthCheck : TargetCheck
             where);
     }
 
+    /// <inheritdoc/>
+    public override double? RatioOf(DesignAnalysis analysis, int tube) => Array.IndexOf(_tubes, tube) < 0
+        ? null
+        : _target.SafetyFactor * _target.Cases.Max(c => TubeScan.MostUsed(analysis, c, tube).Share);
+
     private (TubeUse Use, int Tube, int Case) Worst(DesignAnalysis analysis, double enough)
     {
         (TubeUse Use, int Tube, int Case) worst = (default, -1, -1);

@@ -34,6 +34,9 @@ internal abstract class TargetCheck(FrameModel model, Target target)
     /// <summary>Value, limit and words for people.</summary>
     public abstract TargetResult Result(DesignAnalysis analysis);
 
+    /// <summary>Share of the limit that one tube uses by itself; null where the target does not look at that tube, or at no single tubes.</summary>
+    public virtual double? RatioOf(DesignAnalysis analysis, int tube) => null;
+
     /// <summary>The checks of all targets of a frame, in the spec's order.</summary>
     public static IReadOnlyList<TargetCheck> All(FrameModel model)
     {
