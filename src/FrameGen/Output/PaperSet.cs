@@ -1,4 +1,5 @@
 using FrameGen.Fabrication;
+using FrameGen.Output.Report;
 
 namespace FrameGen.Output;
 
@@ -13,17 +14,23 @@ public static class PaperSet
     {
         var (copies, includes) = SpecCopies.Make(package.Cut.Sized.Model.Spec);
         WeldList welds = WeldPlanner.Plan(package.Cut);
+        var cutList = CutListModel.From(package);
+        var stock = StockPlanModel.From(package);
+        var setup = SetupModel.From(package);
+        var seams = WeldsModel.From(package, welds);
+        var report = ReportModel.From(package, cutList, stock, setup, seams);
         var files = new List<OutputFile>
         {
+            OutputFile.FromText("report.html", TextTemplate.Render("report.html", report)),
             OutputFile.FromText("cut-list.csv", CutListCsv.Write(package)),
-            OutputFile.FromText("cut-list.md", TextTemplate.Render("cut-list.md", CutListModel.From(package))),
+            OutputFile.FromText("cut-list.md", TextTemplate.Render("cut-list.md", cutList)),
             OutputFile.FromText("ends.csv", EndsCsv.Write(package)),
             OutputFile.FromText("stock-plan.csv", StockPlanCsv.Write(package)),
-            OutputFile.FromText("stock-plan.md", TextTemplate.Render("stock-plan.md", StockPlanModel.From(package))),
+            OutputFile.FromText("stock-plan.md", TextTemplate.Render("stock-plan.md", stock)),
             OutputFile.FromText("setup.csv", SetupCsv.Write(package)),
-            OutputFile.FromText("setup.md", TextTemplate.Render("setup.md", SetupModel.From(package))),
+            OutputFile.FromText("setup.md", TextTemplate.Render("setup.md", setup)),
             OutputFile.FromText("welds.csv", WeldsCsv.Write(package.Cut, welds)),
-            OutputFile.FromText("welds.md", TextTemplate.Render("welds.md", WeldsModel.From(package, welds))),
+            OutputFile.FromText("welds.md", TextTemplate.Render("welds.md", seams)),
             new("frame.json", FrameJson.Write(package)),
         };
         files.AddRange(ShapeFiles.Create(package, options ?? PaperOptions.Default));

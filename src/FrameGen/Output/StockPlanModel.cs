@@ -80,7 +80,8 @@ public sealed record StockCutting(string Section, string Material, IReadOnlyList
 /// <param name="Length">As delivered.</param>
 /// <param name="Cuts">Pieces in the order of sawing.</param>
 /// <param name="Offcut">What is left.</param>
-public sealed record StockBarCut(string Label, int Count, bool Rack, string Length, IReadOnlyList<StockPieceCut> Cuts, string Offcut)
+/// <param name="LengthMm">As delivered, a number for drawing.</param>
+public sealed record StockBarCut(string Label, int Count, bool Rack, string Length, IReadOnlyList<StockPieceCut> Cuts, string Offcut, double LengthMm)
 {
     internal static IEnumerable<StockBarCut> Of(StockLot lot, DisplayFormat display)
     {
@@ -103,9 +104,12 @@ public sealed record StockBarCut(string Label, int Count, bool Rack, string Leng
                         c.Part.Name,
                         display.MeasuredNumber(c.To - c.From),
                         display.MeasuredNumber(c.From),
-                        display.MeasuredNumber(c.To))),
+                        display.MeasuredNumber(c.To),
+                        c.From,
+                        c.To)),
                 ],
-                display.MeasuredNumber(bar.Offcut));
+                display.MeasuredNumber(bar.Offcut),
+                lot.BarLength);
             first = last + 1;
         }
     }
@@ -119,4 +123,6 @@ public sealed record StockBarCut(string Label, int Count, bool Rack, string Leng
 /// <param name="Length">Its cut length.</param>
 /// <param name="From">Where it begins, from the bar's end.</param>
 /// <param name="To">Where it ends, from the bar's end.</param>
-public sealed record StockPieceCut(string Mark, string Length, string From, string To);
+/// <param name="FromMm">Where it begins, a number for drawing.</param>
+/// <param name="ToMm">Where it ends, a number for drawing.</param>
+public sealed record StockPieceCut(string Mark, string Length, string From, string To, double FromMm, double ToMm);

@@ -57,7 +57,9 @@ internal static class TextTemplate
         return name.EndsWith(".md", StringComparison.Ordinal) ? MarkdownText.AlignTables(text) : text;
     }
 
-    private static string Load(string name)
+    /// <summary>A built-in template, or a part of one, as it stands.</summary>
+    /// <param name="name">Name of the file in templates/.</param>
+    public static string Load(string name)
     {
         using Stream stream = typeof(TextTemplate).Assembly.GetManifestResourceStream($"templates/{name}")
             ?? throw new InvalidOperationException($"The template {name} is not built in.");
