@@ -66,7 +66,7 @@ internal static class SizingFinish
         };
     }
 
-    private static IReadOnlyList<double?> ByTube(DesignAnalysis analysis, TargetCheck check)
+    private static double?[] ByTube(DesignAnalysis analysis, TargetCheck check)
     {
         double?[] ratios = [.. analysis.Space.Model.Tubes.Select((_, t) => check.RatioOf(analysis, t))];
         return Array.Exists(ratios, r => r is not null) ? ratios : [];

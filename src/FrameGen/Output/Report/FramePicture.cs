@@ -104,7 +104,7 @@ public sealed record FramePicture(string Width, string Height, IReadOnlyList<Pic
     }
 
     // A mark stands on its tube, at the first place where it covers no other; twins and crowded tubes go without.
-    private static IReadOnlyList<PictureLabel> Label(ShopPackage package, Camera camera)
+    private static List<PictureLabel> Label(ShopPackage package, Camera camera)
     {
         string[] marks = PartMarks.NamesByTube(package);
         List<(double X, double Y, double Half)> taken = [];

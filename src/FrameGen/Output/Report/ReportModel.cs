@@ -86,18 +86,18 @@ public sealed record ReportAnswer(string Question, string Answer, string Detail,
 {
     internal static ReportAnswer OnTargets(SizedFrame sized)
     {
-        const string Question = "Does it meet the targets?";
+        const string Asked = "Does it meet the targets?";
         if (sized.Targets.Count == 0)
         {
-            return new ReportAnswer(Question, "No target is set", "Nothing here says that the frame is stiff or strong enough.", IsBad: true);
+            return new ReportAnswer(Asked, "No target is set", "Nothing here says that the frame is stiff or strong enough.", IsBad: true);
         }
 
         TargetResult nearest = sized.Targets.MaxBy(t => t.Ratio)!;
         string use = $"{nearest.Kind} of {nearest.Label}, {SizingModel.Percent(nearest.Ratio)} of its limit";
         int missed = sized.Targets.Count(t => !t.Met);
         return missed > 0
-            ? new ReportAnswer(Question, $"No, {Whole(missed)} of {Whole(sized.Targets.Count)} missed", $"Worst: {use}.", IsBad: true)
-            : new ReportAnswer(Question, sized.Targets.Count == 1 ? "Yes" : $"Yes, all {Whole(sized.Targets.Count)}", $"Nearest its limit: {use}.", IsBad: false);
+            ? new ReportAnswer(Asked, $"No, {Whole(missed)} of {Whole(sized.Targets.Count)} missed", $"Worst: {use}.", IsBad: true)
+            : new ReportAnswer(Asked, sized.Targets.Count == 1 ? "Yes" : $"Yes, all {Whole(sized.Targets.Count)}", $"Nearest its limit: {use}.", IsBad: false);
     }
 
     internal static ReportAnswer OnMass(ShopPackage package, SizingModel sizing)
@@ -108,17 +108,17 @@ public sealed record ReportAnswer(string Question, string Answer, string Detail,
 
     internal static ReportAnswer OnBuying(StockPlanModel stock)
     {
-        const string Question = "What do I buy?";
+        const string Asked = "What do I buy?";
         if (stock.Bars == 0)
         {
-            return new ReportAnswer(Question, "Nothing", "The rack has it all.", IsBad: false);
+            return new ReportAnswer(Asked, "Nothing", "The rack has it all.", IsBad: false);
         }
 
         bool sameLength = stock.Buy.All(l => string.Equals(l.BarLength, stock.Buy[0].BarLength, StringComparison.Ordinal));
         string lots = string.Join("; ", stock.Buy.Select(l =>
             $"{Whole(l.Bars)} of {l.Section} {l.Material}{(sameLength ? string.Empty : $", {l.BarLength} {stock.Head.LengthUnit}")}"));
         string cost = stock.Cost.Length > 0 ? $", {stock.Cost} in all" : string.Empty;
-        return new ReportAnswer(Question, $"{Whole(stock.Bars)} {(stock.Bars == 1 ? "bar" : "bars")}, {stock.Mass} {stock.Head.MassUnit}{cost}", $"{(sameLength ? $"{stock.Buy[0].BarLength} {stock.Head.LengthUnit} long: " : string.Empty)}{lots}.", IsBad: false);
+        return new ReportAnswer(Asked, $"{Whole(stock.Bars)} {(stock.Bars == 1 ? "bar" : "bars")}, {stock.Mass} {stock.Head.MassUnit}{cost}", $"{(sameLength ? $"{stock.Buy[0].BarLength} {stock.Head.LengthUnit} long: " : string.Empty)}{lots}.", IsBad: false);
     }
 
     private static string Whole(int count) => count.ToString(CultureInfo.InvariantCulture);

@@ -142,7 +142,7 @@ internal sealed class SceneJson(ShopPackage package)
     // A target that looks at single tubes has a share for some of them.
     private IEnumerable<TargetResult> Limits() => _sized.Targets.Where(t => t.ByTube.Count > 0);
 
-    private string Stress(TubeForces forces)
+    private static string Stress(TubeForces forces)
     {
         string stress = string.Create(CultureInfo.InvariantCulture, $"{FixedDigits.Tenths(forces.MaxStress)} MPa");
         return forces.Use is { } use ? $"{stress}, {SizingModel.Percent(use.Share)} of yield" : stress;
