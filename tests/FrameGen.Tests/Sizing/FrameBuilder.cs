@@ -78,6 +78,14 @@ internal sealed class FrameBuilder
         return this;
     }
 
+    /// <summary>Turns a tube's top line, at its start, towards a direction.</summary>
+    public FrameBuilder Up(string tube, Vector3 up)
+    {
+        int t = TubeIndex(tube);
+        _tubes[t] = _tubes[t] with { Axes = TubeAxes.Along(_tubes[t].Axes.X, up) };
+        return this;
+    }
+
     public FrameBuilder Hinge(string tube, Hinges hinges)
     {
         int t = TubeIndex(tube);
