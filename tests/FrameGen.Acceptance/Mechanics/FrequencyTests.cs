@@ -38,6 +38,30 @@ public class FrequencyTests
         }
     }
 
+    /// <summary>
+    /// The first four roots of each frequency equation of a uniform beam (R. Blevins; D. Young, R. Felgar): cosh x cos x = -1, sin x = 0, cosh x cos x = 1, tan x = tanh x.
+    /// Elements of length h put a root too high by (βh)⁴/2880 of itself.
+    /// </summary>
+    [Theory]
+    [InlineData("111111", "001110", 1.8751041, 4.6940911, 7.8547574, 10.9955407)]
+    [InlineData("111110", "111110", 3.1415927, 6.2831853, 9.4247780, 12.5663706)]
+    [InlineData("111111", "111111", 4.7300407, 7.8532046, 10.9956078, 14.1371655)]
+    [InlineData("111111", "111110", 3.9266023, 7.0685827, 10.2101761, 13.3517688)]
+    public void Roots_of_the_frequency_equations(string start, string end, params double[] roots)
+    {
+        const int Elements = 64;
+        const double Length = 1500;
+        var beam = new DividedFrame(Elements, "101110", Vector3.Zero, new Vector3(Length, 0, 0));
+        beam.Profile(Profile(Tube, 210_000, double.PositiveInfinity)).Member(0, 1).Hold(0, start).Hold(1, end);
+        double[] hertz = beam.Frequencies(4, 7.85e-6);
+        double unit = Math.Sqrt(1000 * 210_000 * Tube.Iz / (7.85e-6 * Tube.Area)) / (2 * Math.PI * Length * Length);
+        for (int i = 0; i < roots.Length; i++)
+        {
+            double high = Math.Pow(roots[i] / Elements, 4) / 2880;
+            Assert.Equal(roots[i], Math.Sqrt(hertz[i] / unit) * (1 - high), 1e-7);
+        }
+    }
+
     [Fact]
     public void A_rod_along_itself()
     {

@@ -104,6 +104,35 @@ public class SpaceFrameTests
             solution.Forces(0).Start.N, solution.Forces(1).Start.N, solution.Forces(2).Start.N, solution.Forces(3).Start.N);
     }
 
+    // G. Sennett, Matrix Analysis of Structures, section 3.8: two spans of 120 in, EI = 2.9e6, clamped on the left, on rollers in the middle, which settles by
+    // 0.25 in, and on the right. The settlement is what a push in the middle of the beam without that roller makes; more digits, and the
+    // rotations, from an independent program.
+    [Fact]
+    public void Sennett_settlement_of_a_support()
+    {
+        const double Span = 120;
+        const double Settlement = 0.25;
+        FrameCase Beam(double push) => new FrameCase(new(0, 0, 0), new(Span, 0, 0), new(2 * Span, 0, 0))
+            .Profile(2.9e4, 1e4, 1e3, 1e2, 1e2, 1e2).Member(0, 1).Member(1, 2)
+            .Hold(0, "111111").Hold(2, "011000").Load(1, new(0, 0, push));
+        double push = -Settlement / Beam(1).Solve().Displacement(1).Z;
+        FrameSolution solution = Beam(push).Solve();
+        Assert.Equal(-Settlement, solution.Displacement(1).Z, 1e-12);
+        ElementForces left = solution.Forces(0);
+        ElementForces right = solution.Forces(1);
+        Printed.Equal("3.9558", TruncatedAt(4, Math.Abs(left.Start.Vz)));
+        Printed.Equal("258.92857 215.7738", Math.Abs(left.Start.My), Math.Abs(right.Start.My));
+        Printed.Equal("1.7981", Math.Abs(right.Start.Vz));
+        Printed.Equal(
+            "3.95585317 258.928571 1.79811508 215.773810", Math.Abs(left.Start.Vz), Math.Abs(left.Start.My), Math.Abs(right.Start.Vz), Math.Abs(right.Start.My));
+
+        // Turned clockwise in the x-z plane, seen from -y, is a positive turn about y.
+        Printed.Equal("8.92857e-4 -3.57143e-3", solution.Rotation(1).Y, solution.Rotation(2).Y);
+
+        // The book cuts the digits it does not print.
+        static double TruncatedAt(int decimals, double value) => Math.Floor(value * Math.Pow(10, decimals)) / Math.Pow(10, decimals);
+    }
+
     // AFNOR, Guide de validation des progiciels de calcul de structures (1990), SSLL06/89: quarter circle R = 1 m, tube 20 x 2 mm,
     // loaded square to its plane at the free end. Chords, from an independent program; the closed form is 134.6187 mm.
     [Theory]

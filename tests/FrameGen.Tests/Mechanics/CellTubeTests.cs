@@ -20,6 +20,21 @@ public class CellTubeTests
         Assert.Equal((4 * 57 * 57 * 37 * 37 * 3 / 188.0) + (27 * 188 / 3.0), tube.J, 1e-6);
     }
 
+    // R. Bredt (1896); W. Young, R. Budynas, Roark's Formulas, table 10.1: 50 x 50 x 3 with sharp corners, 2Am t = 13 254 mm³, J = 311 469 mm⁴ and under
+    // 100 N.m shear of 7.54489 MPa, 3.975019e-3 rad a metre; the wall's own t³h/3 comes on top.
+    [Fact]
+    public void A_square_tube_twists_as_bredt_has_it()
+    {
+        var tube = new FlatSidedTube(50, 50, 3, 0);
+        double closed = tube.J - (27 * 188 / 3.0);
+        Assert.Equal(311_469.0, closed, 0.05);
+        Assert.Equal(3.975019e-3, 1e5 * 1000 / (closed * 210_000 / 2.6), 5e-10);
+
+        // Von Mises of pure shear at the outer skin, less the part T t/J that changes sign through the wall, is Bredt's flow for the closed cell's share of J.
+        double outer = tube.VonMises(new SectionForces(0, 0, 0, 1e5, 0, 0)) / Math.Sqrt(3);
+        Assert.Equal(7.54489, (outer - (1e5 * 3 / tube.J)) * tube.J / closed, 5e-6);
+    }
+
     [Fact]
     public void Corners_of_half_the_side_make_a_round_tube()
     {
