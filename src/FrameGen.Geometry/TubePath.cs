@@ -74,6 +74,10 @@ public sealed class TubePath
         return Pieces[last];
     }
 
+    /// <summary>The straight that a place lies on, or is nearest to; the earlier of two.</summary>
+    public PathPiece StraightAt(double distance) =>
+        Pieces.Where(p => !p.IsArc).MinBy(p => Math.Max(0, Math.Max(p.Start - distance, distance - p.Start - p.Length)))!;
+
     /// <summary>The point at a place, mm.</summary>
     public Vector3 PointAt(double distance)
     {

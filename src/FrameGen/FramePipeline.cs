@@ -51,7 +51,7 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
         model is null ? null : At("choosing sections", () => FrozenSizing.Size(model, diagnostics, Designs()));
 
     /// <summary>True where the ends of a frame's tubes can be cut: of straight round tubes and rods, so far.</summary>
-    public static bool CanCope(SizedFrame sized) => sized.Sections.All(s => s is RoundTube or Rod) && !Bent(sized).Any();
+    public static bool CanCope(SizedFrame sized) => sized.Sections.All(s => s is RoundTube or Rod);
 
     /// <summary>Cuts the tube ends.</summary>
     public CutFrame? Cope(SizedFrame? sized)
@@ -63,16 +63,6 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
 
         if (!CanCope(sized))
         {
-            foreach (Tube tube in Bent(sized).Where(t => t.Original is null))
-            {
-                diagnostics.Error(tube.At, $"not supported yet: papers of bent tubes, and tube {tube.Name} is bent (`check` and `size` work with it)");
-            }
-
-            if (diagnostics.HasErrors)
-            {
-                return null;
-            }
-
             string names = string.Join(", ", sized.Sections.Where(s => s is not (RoundTube or Rod)).Select(s => s.Name).Distinct(StringComparer.Ordinal));
             diagnostics.Error(null, $"not supported yet: patterns and papers of {names} (`check` and `size` work with them, this version can't draw their cut ends)");
             return null;
@@ -111,8 +101,6 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
     /// <returns>Every file of the output folder, or null when an error was reported.</returns>
     public IReadOnlyList<OutputFile>? Build(FrameSpec? spec, PaperOptions? options = null) =>
         Papers(Plan(Cope(Size(Resolve(spec)))), options);
-
-    private static IEnumerable<Tube> Bent(SizedFrame sized) => sized.Model.Tubes.Where(t => t.Bent is not null);
 
     private void NoteUnprinted(FrameModel model)
     {

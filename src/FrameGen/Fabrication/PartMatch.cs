@@ -8,8 +8,8 @@ namespace FrameGen.Fabrication;
 /// <summary>Whether a piece lies on another one, turned about the axis, its ends swapped, or in a mirror.</summary>
 /// <remarks>
 /// The outer curves of both ends of the drawn piece and of the other share one turn. It is looked for where a mate of one falls on a
-/// mate of the other, then at the peaks of the circular cross-correlation of the curves; what counts is the check at that turn, on
-/// the exact cuts, over the whole wall.
+/// mate of the other, then at the peaks of the circular cross-correlation of the curves; of bent tubes the first bends give it. What
+/// counts is the check at that turn, on the exact cuts, over the whole wall.
 /// </remarks>
 /// <param name="drawn">The piece that is drawn.</param>
 /// <param name="other">The piece that may be the same.</param>
@@ -60,6 +60,11 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
             return false;
         }
 
+        if (!BendsLookAlike(swapped))
+        {
+            return false;
+        }
+
         foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
         {
             (EndCut a, EndCut b) = (drawn.Cut[Source(end, swapped)], other.Cut[end]);
@@ -74,8 +79,57 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
         return true;
     }
 
+    /// <summary>Bends of the same angles and radii at the same places.</summary>
+    private bool BendsLookAlike(bool swapped)
+    {
+        if (drawn.Bends.Count != other.Bends.Count)
+        {
+            return false;
+        }
+
+        for (int i = 0; i < other.Bends.Count; i++)
+        {
+            (TubeBend a, TubeBend b) = (Bend(i, swapped), other.Bends[i]);
+            double start = swapped ? drawn.Length - a.Stop : a.Start;
+            if (Math.Abs(a.Radius - b.Radius) > tolerance
+                || Math.Abs(start - b.Start) > tolerance
+                || Math.Abs(a.Angle - b.Angle) * drawn.Length > tolerance)
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    /// <summary>Bends in the same planes at a turn; so far off that no place of the tube moves by more than the tolerance.</summary>
+    private bool BendsAgree(double turn, bool negated, bool swapped)
+    {
+        for (int i = 0; i < other.Bends.Count; i++)
+        {
+            double clock = Bend(i, swapped).Clock;
+            double off = Math.IEEERemainder((negated ? -clock : clock) + turn - other.Bends[i].Clock, 2 * Math.PI);
+            if (Math.Abs(off) * drawn.Length > tolerance)
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    private TubeBend Bend(int index, bool swapped) => drawn.Bends[swapped ? drawn.Bends.Count - 1 - index : index];
+
     private IEnumerable<double> Turns(bool negated, bool swapped)
     {
+        // A bent tube lies on another in one way only: bend in bend.
+        if (other.Bends.Count > 0)
+        {
+            double clock = Bend(0, swapped).Clock;
+            yield return other.Bends[0].Clock - (negated ? -clock : clock);
+            yield break;
+        }
+
         yield return 0;
         foreach (double turn in MateTurns(negated, swapped))
         {
@@ -207,6 +261,11 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
 
     private bool Agrees(double turn, bool negated, bool swapped)
     {
+        if (!BendsAgree(turn, negated, swapped))
+        {
+            return false;
+        }
+
         foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
         {
             (EndCut a, EndCut b) = (drawn.Cut[Source(end, swapped)], other.Cut[end]);

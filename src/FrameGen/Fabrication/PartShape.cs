@@ -26,6 +26,7 @@ internal sealed class PartShape
         Cut = tube;
         Section = cut.Sized.SectionOf(tube.Tube);
         Length = own.Length;
+        Bends = TubeBend.Of(own);
         (_from, _to) = (Spectrum(tube.From.Surface), Spectrum(tube.To.Surface));
     }
 
@@ -37,6 +38,9 @@ internal sealed class PartShape
 
     /// <summary>Of the axis between its own ends, mm.</summary>
     public double Length { get; }
+
+    /// <summary>Its bends; none of a straight tube.</summary>
+    public IReadOnlyList<TubeBend> Bends { get; }
 
     /// <summary>Distance from the axis of a place in the wall, mm.</summary>
     /// <param name="clock">Its clock angle, rad.</param>
@@ -59,6 +63,11 @@ internal sealed class PartShape
     {
         get
         {
+            if (BentHand() is var bent and not 0)
+            {
+                return bent;
+            }
+
             // Between the two ends, then of each end by itself; a mirror conjugates every coefficient.
             for (int k = 1; k < Harmonics; k++)
             {
@@ -95,6 +104,41 @@ internal sealed class PartShape
         {
             yield return Step((_from[k] * Complex.Conjugate(_to[k])).Real, 8);
         }
+
+        if (Bends.Count > 0)
+        {
+            yield return Bends.Count;
+            yield return Step(double.RadiansToDegrees(Bends.Sum(b => b.Angle)), 1);
+            yield return Step(double.RadiansToDegrees(Bends.Sum(b => Math.Abs(b.Rotation))), 1);
+            yield return Step(Math.Min(Bends[0].Start, Length - Bends[^1].Stop), 1);
+        }
+    }
+
+    // A mirror turns every rotation the other way; ends changed round, it keeps its sign. Then how each end lies to the bend next to it.
+    private int BentHand()
+    {
+        const double Visible = 1e-6;
+        double turns = Bends.Sum(b => Math.Sin(b.Rotation));
+        double twists = Bends.Sum(b => b.Straight * Math.Sin(b.Rotation));
+        foreach (double sum in (ReadOnlySpan<double>)[turns, twists])
+        {
+            if (Math.Abs(sum) > Visible)
+            {
+                return Math.Sign(sum);
+            }
+        }
+
+        for (int k = 1; k < Harmonics && Bends.Count > 0; k++)
+        {
+            Complex from = _from[k] * Complex.FromPolarCoordinates(1, k * Bends[0].Clock);
+            Complex to = _to[k] * Complex.FromPolarCoordinates(1, k * Bends[^1].Clock);
+            if (SignOf(from - to) is var sign and not 0)
+            {
+                return sign;
+            }
+        }
+
+        return 0;
     }
 
     private static long Step(double value, double step) => (long)Math.Floor((value / step) + 0.237);

@@ -1,3 +1,4 @@
+using System.Globalization;
 using FrameGen.Diagnostics;
 using FrameGen.Geometry;
 using FrameGen.Joints;
@@ -75,6 +76,12 @@ public static class ShopPlanner
     private static string Note(SizedFrame sized, CutTube tube)
     {
         var notes = new List<string>();
+        int bends = TubeBend.Of(sized.Model.Tubes[tube.Tube]).Count;
+        if (bends > 0)
+        {
+            notes.Add(bends == 1 ? "1 bend; cut length is straightened" : string.Create(CultureInfo.InvariantCulture, $"{bends} bends; cut length is straightened"));
+        }
+
         if (sized.Model.Fabrication.Cut == CutMode.Contour && (tube.From.Kind == CutKind.Cope || tube.To.Kind == CutKind.Cope))
         {
             notes.Add("contour cut");
@@ -105,7 +112,7 @@ public static class ShopPlanner
         FrameModel model = sized.Model;
         Contact seat = end.Contacts[0];
         (double own, double allowed) = JointFit.HalfWidths(
-            model.Tubes[tube], which, sized.SectionOf(tube), model.Tubes[seat.Tube], sized.SectionOf(seat.Tube));
+            model.Tubes[tube], which, sized.SectionOf(tube), model.StraightAt(seat.Tube, model.Tubes[tube][which].Node), sized.SectionOf(seat.Tube));
         return own + seat.Offset > allowed + Lengths.Same;
     }
 }

@@ -98,18 +98,18 @@ public static class WeldPlanner
     private static double AngleAt(CutFrame cut, TubeEndId id, EndCut end, double clock, double t)
     {
         Tube tube = cut.Sized.Model.Tubes[id.Tube];
+        TubeAxes axes = tube.AxesAt(id.End);
         (double sin, double cos) = Math.SinCos(clock);
         Outline own = cut.Sized.SectionOf(id.Tube).Outline;
-        Vector3 at = tube[id.End].Point + (t * tube.Into(id.End)) + (own.RadiusAt(sin, cos) * tube.Axes.Radial(clock));
-        Vector3 normal = Normal(own, tube.Axes, clock);
+        Vector3 at = tube[id.End].Point + (t * tube.Into(id.End)) + (own.RadiusAt(sin, cos) * axes.Radial(clock));
+        Vector3 normal = Normal(own, axes, clock);
         double nearest = double.PositiveInfinity;
         double angle = Math.PI;
         foreach (Contact contact in end.Contacts)
         {
-            Tube mate = cut.Sized.Model.Tubes[contact.Tube];
+            TubeStraight mate = cut.Sized.Model.StraightAt(contact.Tube, tube[id.End].Node);
             Outline skin = cut.Sized.SectionOf(contact.Tube).Outline;
-            Vector3 from = at - mate.From.Point;
-            (double z, double y) = (from.Dot(mate.Axes.Z), -from.Dot(mate.Axes.Y));
+            (double z, double y) = mate.InSection(at);
             double radius = Math.Sqrt((z * z) + (y * y));
             double off = radius > 0 ? Math.Abs(radius - skin.RadiusAt(y / radius, z / radius) - end.Gap) : double.PositiveInfinity;
             if (off < nearest)

@@ -10,7 +10,7 @@ public static class EndCoper
 {
     /// <summary>Cuts a sized frame.</summary>
     /// <param name="sized">The frame.</param>
-    /// <param name="diagnostics">Mates that miss, ends that overlap, run-outs too long: errors; an end only partly seated: a warning.</param>
+    /// <param name="diagnostics">Mates that miss, ends that overlap, run-outs too long, cuts in bends: errors; an end only partly seated: a warning.</param>
     /// <returns>The cut frame, or null when an error was reported.</returns>
     public static CutFrame? Cope(SizedFrame sized, DiagnosticList diagnostics)
     {
@@ -57,7 +57,7 @@ public static class EndCoper
             }
 
             Section section = sized.SectionOf(i);
-            if (TubeOverlap.Find(model.Tubes[i], section, first.Cut, last.Cut) is { } overlap)
+            if (model.Tubes[i].Bent is null && TubeOverlap.Find(model.Tubes[i], section, first.Cut, last.Cut) is { } overlap)
             {
                 JointReport.ReportOverlap(model, i, overlap, diagnostics);
                 failed = true;
@@ -67,7 +67,7 @@ public static class EndCoper
             tubes[i] = TubeMeasure.Measure(model, i, section, first, last);
         }
 
-        return failed ? null : WarnOfOverhangs(sized, tubes, diagnostics);
+        return failed || BendReport.Report(sized, tubes, diagnostics) ? null : WarnOfOverhangs(sized, tubes, diagnostics);
     }
 
     // What shows only once the seats are cut too.

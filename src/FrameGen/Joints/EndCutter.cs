@@ -38,7 +38,7 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
 
     private CutterEnd Cope(EndPlan end, Tube tube, Outline inner, Outline outer)
     {
-        ContourCope asMet = new(end.Mates, tube.Length / 2);
+        ContourCope asMet = new(end.Mates, tube.Middle(end.Id.End));
         bool[] touched = Touching.All(asMet, inner, outer, _sampler, out bool partlyMissing);
         List<Contact> contacts = [];
         for (int i = 0; i < touched.Length; i++)

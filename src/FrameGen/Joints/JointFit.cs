@@ -33,9 +33,9 @@ public static class JointFit
         return (section.Outline.HalfWidthAlong(end.Axes.InSection(normal)), seatSection.Outline.HalfWidthAlong(seatAxes.InSection(normal)));
     }
 
-    /// <summary>Likewise, of whole tubes.</summary>
-    internal static (double Own, double Seat) HalfWidths(Tube tube, End end, Section section, Tube seat, Section seatSection) => HalfWidths(
-        new EndFrame(tube[end].Point, tube.Into(end), tube.Axes), section, new Line3(seat.From.Point, seat.Axes.X), seat.Axes, seatSection);
+    /// <summary>Likewise, of an end of a tube and a straight of another.</summary>
+    internal static (double Own, double Seat) HalfWidths(Tube tube, End end, Section section, TubeStraight seat, Section seatSection) =>
+        HalfWidths(new EndFrame(tube[end].Point, tube.Into(end), tube.AxesAt(end)), section, seat.Axis, seat.Axes, seatSection);
 
     /// <summary>What stands in the way of a planned joint.</summary>
     internal static IReadOnlyList<FitProblem> Check(FrameModel model, JointPlan plan, IReadOnlyList<Section> sections)
@@ -55,7 +55,7 @@ public static class JointFit
                 continue;
             }
 
-            ContourCope cope = new(end.Mates, tube.Length / 2);
+            ContourCope cope = new(end.Mates, tube.Middle(end.Id.End));
             int seat = Touching.Seat(cope, section.Bore, section.Outline);
             if (seat < 0)
             {
@@ -66,7 +66,7 @@ public static class JointFit
 
             Mate mate = end.Mates[seat];
             (double half, double allowed) = HalfWidths(
-                end.Frame, section, mate.Axis, model.Tubes[mate.Tube].Axes, sections[model.Tubes[mate.Tube].Group]);
+                end.Frame, section, mate.Axis, mate.Axes, sections[model.Tubes[mate.Tube].Group]);
             double needed = half + mate.Axis.DistanceTo(end.Frame.Axis);
             if (needed > allowed + Outline.Graze && !tube[end.Id.End].Wrap)
             {

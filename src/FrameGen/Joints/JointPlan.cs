@@ -29,9 +29,8 @@ internal sealed class JointPlan
         List<MateSource> before = new(count + 1);
         if (joint.Through is { } through)
         {
-            Tube tube = model.Tubes[through];
-            double place = model.Nodes[joint.Node].ThroughDistance;
-            before.Add(new MateSource(through, AxisAt(tube, place), tube.AxesAt(place), Skin(through), null));
+            TubeStraight straight = model.StraightAt(through, joint.Node);
+            before.Add(new MateSource(through, straight.Axis, straight.Axes, Skin(through), null));
         }
 
         for (int i = 0; i < count; i++)
@@ -73,12 +72,7 @@ internal sealed class JointPlan
         Outline Skin(int tube) => sections[model.Tubes[tube].Group].Outline;
     }
 
-    private static EndFrame Frame(Tube tube, End end) => new(tube[end].Point, tube.Into(end), tube.AxesAt(end == End.From ? 0 : tube.Length));
-
-    // Joints stand on the straights of a bent tube.
-    private static Line3 AxisAt(Tube tube, double distance) => tube.Bent is { } bent
-        ? new Line3(bent.PieceAt(distance).Origin, bent.PieceAt(distance).Along)
-        : new Line3(tube.From.Point, tube.Axes.X);
+    private static EndFrame Frame(Tube tube, End end) => new(tube[end].Point, tube.Into(end), tube.AxesAt(end));
 
     // One plane for both tubes. Their end points agree but where their axes are written to pass the node at different
     // distances; then it stands halfway between them.

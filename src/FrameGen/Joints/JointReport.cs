@@ -43,7 +43,7 @@ internal static class JointReport
             foreach (Mate mate in end.Mates)
             {
                 (double own, double other) = JointFit.HalfWidths(
-                    end.Frame, sections[tube.Group], mate.Axis, model.Tubes[mate.Tube].Axes, sections[model.Tubes[mate.Tube].Group]);
+                    end.Frame, sections[tube.Group], mate.Axis, mate.Axes, sections[model.Tubes[mate.Tube].Group]);
                 double distance = mate.Axis.DistanceTo(end.Frame.Axis);
                 if (mate.Swallows && distance < own + other + place.Gap)
                 {
@@ -145,11 +145,11 @@ internal static class JointReport
         }
 
         (double own, double others) = JointFit.HalfWidths(
-            end.Frame, sections[tube.Group], axis, partner.Axes, sections[partner.Group]);
+            end.Frame, sections[tube.Group], axis, partner.AxesAt(other.End), sections[partner.Group]);
         double distance = end.Frame.Axis.DistanceTo(axis);
         double reach = own + others;
         Vector3 inPlane = end.Frame.Into.Cross(axis.Direction).Cross(end.Frame.Into).Normalized();
-        double half = sections[tube.Group].Outline.HalfWidthAlong(tube.Axes.InSection(inPlane));
+        double half = sections[tube.Group].Outline.HalfWidthAlong(end.Frame.Axes.InSection(inPlane));
         if (distance > reach)
         {
             diagnostics.Error(at, $"{name}: can't be mitred with {partner.Name}: the two miss each other by {distance - reach:0.0##} mm");

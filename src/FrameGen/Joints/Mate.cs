@@ -29,7 +29,7 @@ internal sealed partial class Mate
     /// <param name="frame">The end that is cut.</param>
     public Mate(MateSource source, double gap, in EndFrame frame)
     {
-        (Tube, Axis, _limit) = (source.Tube, source.Axis, source.Limit);
+        (Tube, Axis, Axes, _limit) = (source.Tube, source.Axis, source.Axes, source.Limit);
         _outline = source.Outline.Grown(gap);
         Vector3 normal = Axis.Direction.Cross(frame.Into);
         _sine = normal.Length;
@@ -55,6 +55,9 @@ internal sealed partial class Mate
 
     /// <summary>Its axis; at an end of the mate the direction points into it.</summary>
     public Line3 Axis { get; }
+
+    /// <summary>Its local axes there.</summary>
+    public TubeAxes Axes { get; }
 
     /// <summary>True where it runs through the node.</summary>
     public bool IsThrough => _limit is null;

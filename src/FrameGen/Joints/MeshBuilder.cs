@@ -31,8 +31,27 @@ internal sealed class MeshBuilder(Columns columns)
     /// <summary>Adds a vertex on the axis.</summary>
     public int AddOnAxis(double along) => Add(default, along);
 
-    /// <summary>The skin between two ends' loops.</summary>
-    public void Skin(Loop from, Loop to, bool outward)
+    /// <summary>The skin between two ends' loops, with square rings at places between them.</summary>
+    /// <param name="from">At the from end.</param>
+    /// <param name="to">At the to end.</param>
+    /// <param name="skin">The outline that both lie on.</param>
+    /// <param name="stations">Distances along the tube between the two loops, growing, mm.</param>
+    /// <param name="outward">True where it faces away from the axis.</param>
+    public void Skin(Loop from, Loop to, Outline skin, ReadOnlySpan<double> stations, bool outward)
+    {
+        Loop last = from;
+        double[] square = new double[columns.Clocks.Length];
+        foreach (double station in stations)
+        {
+            Loop next = AddLoop(skin, square, square, _ => station);
+            Skin(last, next, outward);
+            last = next;
+        }
+
+        Skin(last, to, outward);
+    }
+
+    private void Skin(Loop from, Loop to, bool outward)
     {
         int count = columns.Clocks.Length;
         Span<int> left = stackalloc int[4];

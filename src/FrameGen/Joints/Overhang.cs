@@ -21,7 +21,8 @@ internal static class Overhang
     public static double Of(FrameModel model, CutTube coped, End end, Section section, CutTube through, Section throughSection)
     {
         Tube tube = model.Tubes[coped.Tube];
-        Tube seat = model.Tubes[through.Tube];
+        TubeStraight seat = model.StraightAt(through.Tube, tube[end].Node);
+        TubeAxes axes = tube.AxesAt(end);
         Vector3 start = tube[end].Point;
         Vector3 into = tube.Into(end);
         EndCut cut = coped[end];
@@ -32,10 +33,10 @@ internal static class Overhang
         foreach (CurvePoint point in cut.Outer.Points)
         {
             (double sin, double cos) = Math.SinCos(point.Clock);
-            Vector3 wall = section.Outline.RadiusAt(sin, cos) * tube.Axes.Radial(point.Clock);
-            Vector3 place = start + wall + (point.T * into) - seat.From.Point;
-            double along = place.Dot(seat.Axes.X);
-            if (throughSection.Outline.Contains(seat.Axes.InSection(place), reach))
+            Vector3 wall = section.Outline.RadiusAt(sin, cos) * axes.Radial(point.Clock);
+            Vector3 place = start + wall + (point.T * into);
+            double along = seat.Along(place);
+            if (throughSection.Outline.Contains(seat.InSection(place), reach))
             {
                 past = Math.Max(past, Math.Max(through.Start - along, along - through.Stop));
             }

@@ -9,7 +9,8 @@ namespace FrameGen.Joints;
 /// The skins are cut into columns at clock angles shared by all curves, so that every edge is used by two triangles.
 /// Between the skins each cut face is a ring of quads, or several where it bends through the wall. A radially cut rod is
 /// the exception to the tolerance: its face is many-valued at the axis itself, and is closed there by a cone of a
-/// fiftieth of the radius.
+/// fiftieth of the radius. A bent tube is meshed straight, with rings of vertices where its bends begin and end and between, and
+/// then laid along its axis.
 /// </remarks>
 public static class TubeMesher
 {
@@ -32,15 +33,17 @@ public static class TubeMesher
         MeshBuilder builder = new(columns);
         EndLoops first = from.Loops(columns, builder, static t => t);
         EndLoops last = to.Loops(columns, builder, t => tube.Length - t);
-        builder.Skin(first.Outer, last.Outer, outward: true);
+        double[] stations = tube.Bent is { } bent ? BentMesh.Stations(bent, part, outer, cut.Sized.Model.Fabrication.Tolerance) : [];
+        builder.Skin(first.Outer, last.Outer, outer, stations, outward: true);
         if (!inner.IsPoint)
         {
-            builder.Skin(first.Inner!, last.Inner!, outward: false);
+            builder.Skin(first.Inner!, last.Inner!, inner, stations, outward: false);
         }
 
         builder.Face(first, outward: false);
         builder.Face(last, outward: true);
-        return builder.Build();
+        TriangleMesh mesh = builder.Build();
+        return tube.Bent is null ? mesh : BentMesh.Lay(mesh, tube);
     }
 
     /// <summary>The part where it stands in the frame, in global axes.</summary>

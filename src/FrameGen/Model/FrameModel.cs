@@ -69,6 +69,15 @@ public sealed record FrameModel(
         return nearest;
     }
 
+    /// <summary>The straight of a tube at a node which it ends at or runs through.</summary>
+    /// <param name="tube">Index of the tube.</param>
+    /// <param name="node">Index of the node.</param>
+    public TubeStraight StraightAt(int tube, int node)
+    {
+        Tube along = Tubes[tube];
+        return along.StraightAt(node == along.From.Node ? 0 : node == along.To.Node ? along.Length : Nodes[node].ThroughDistance);
+    }
+
     private static List<TubeEndId>[] EndsByNode(int nodes, IReadOnlyList<Tube> tubes)
     {
         var ends = new List<TubeEndId>[nodes];

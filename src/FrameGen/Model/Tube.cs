@@ -54,6 +54,30 @@ public sealed record Tube(
     /// <summary>Local axes at a distance along its axis from its start: carried round the bends with the tube.</summary>
     public TubeAxes AxesAt(double distance) => Bent?.Carry(Axes, distance) ?? Axes;
 
+    /// <summary>Local axes at an end.</summary>
+    public TubeAxes AxesAt(End end) => end == End.From ? Axes : AxesAt(Length);
+
+    /// <summary>The straight that a place lies on, or is nearest to: all of a straight tube.</summary>
+    /// <param name="distance">From its start along its axis, mm.</param>
+    public TubeStraight StraightAt(double distance)
+    {
+        if (Bent is null)
+        {
+            return new TubeStraight(new Line3(From.Point, Axes.X), Axes, 0, Length, false, false);
+        }
+
+        PathPiece piece = Bent.StraightAt(distance);
+        TubeAxes axes = Bent.Carry(Axes, piece.Start);
+        return new TubeStraight(
+            new Line3(piece.Origin, piece.Along), axes, piece.Start, piece.Start + piece.Length, piece != Bent.Pieces[0], piece != Bent.Pieces[^1]);
+    }
+
+    /// <summary>The straight at an end.</summary>
+    public TubeStraight StraightAt(End end) => StraightAt(end == End.From ? 0 : Length);
+
+    /// <summary>How far into the tube a cut of an end may be looked for, mm: half its length, or all of the straight there where that is longer.</summary>
+    public double Middle(End end) => Bent is null ? Length / 2 : Math.Max(Length / 2, StraightAt(end).To - StraightAt(end).From);
+
     /// <summary>The end asked for.</summary>
     public TubeEnd this[End end] => end == End.From ? From : To;
 

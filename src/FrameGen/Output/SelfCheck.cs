@@ -117,6 +117,8 @@ internal static class SelfCheck
         FrameModel model = cut.Sized.Model;
         Tube own = model.Tubes[tube.Tube];
         Tube other = model.Tubes[mate.Tube];
+        TubeStraight straight = model.StraightAt(mate.Tube, own[end].Node);
+        TubeAxes axes = own.AxesAt(end);
         Outline outer = cut.Sized.SectionOf(tube.Tube).Outline;
         Outline wall = cut.Sized.SectionOf(mate.Tube).Outline;
 
@@ -124,15 +126,14 @@ internal static class SelfCheck
         double spare = tube[end].Gap - model.Fabrication.Tolerance - 1e-6;
 
         // Metal of the mate, whatever its own ends look like: between its node points, and inside its longest cuts.
-        double first = Math.Max(0, mate.From.Outer.Max);
-        double last = other.Length - Math.Max(0, mate.To.Outer.Max);
+        double first = Math.Max(straight.From, mate.From.Outer.Max);
+        double last = Math.Min(straight.To, other.Length - Math.Max(0, mate.To.Outer.Max));
         foreach (CurvePoint point in tube[end].Outer.Points)
         {
             (double sin, double cos) = Math.SinCos(point.Clock);
-            Vector3 at = own[end].Point + (point.T * own.Into(end)) + (outer.RadiusAt(sin, cos) * own.Axes.Radial(point.Clock));
-            Vector3 from = at - other.From.Point;
-            double along = from.Dot(other.Axes.X);
-            Point2 across = other.Axes.InSection(from);
+            Vector3 at = own[end].Point + (point.T * own.Into(end)) + (outer.RadiusAt(sin, cos) * axes.Radial(point.Clock));
+            double along = straight.Along(at);
+            Point2 across = straight.InSection(at);
             double distance = across.DistanceTo(default);
             double clear = wall.RadiusAt(across.Y / distance, across.X / distance) + spare;
             if (!(along < first || along > last || distance >= clear))

@@ -38,4 +38,5 @@ public sealed record FabricationSpec(
     SpecQuantity? BarTrim,
     PageSize? Page,
     SpecQuantity? Grip,
+    SpecQuantity? Springback,
     SourcePlace? At);

@@ -57,7 +57,7 @@ public static class SpecReader
         root.Items(FileKeys.Cases),
         root.Items(FileKeys.Targets),
         root.Items(FileKeys.Joints),
-        root.Find(FileKeys.Fabrication) ?? new FabricationSpec(null, null, null, null, null, null, null, null, null))
+        root.Find(FileKeys.Fabrication) ?? new FabricationSpec(null, null, null, null, null, null, null, null, null, null))
     {
         Measured = root.Items(FileKeys.Measured),
         Sizing = root.Find(FileKeys.Sizing) ?? SizingSpec.Default,

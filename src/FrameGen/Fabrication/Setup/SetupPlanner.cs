@@ -32,7 +32,7 @@ public static class SetupPlanner
             double z = sized.Model.Nodes[joint.Node].Position.Z;
             foreach (int tube in joint.Tubes)
             {
-                table = Math.Min(table, z - Drop(sized, tube));
+                table = Math.Min(table, z - Drop(sized, tube, joint.Node));
             }
         }
 
@@ -40,9 +40,9 @@ public static class SetupPlanner
     }
 
     // Half the width of the section seen along the table: the tube's outline, in the direction that points down most.
-    private static double Drop(SizedFrame sized, int tube)
+    private static double Drop(SizedFrame sized, int tube, int node)
     {
-        TubeAxes axes = sized.Model.Tubes[tube].Axes;
+        TubeAxes axes = sized.Model.StraightAt(tube, node).Axes;
         double up = Math.Sqrt((axes.Z.Z * axes.Z.Z) + (axes.Y.Z * axes.Y.Z));
         return up <= UprightCosine ? 0 : up * sized.SectionOf(tube).Outline.HalfWidthAlong(new Point2(axes.Z.Z / up, -axes.Y.Z / up));
     }
@@ -51,8 +51,8 @@ public static class SetupPlanner
     {
         double height = sized.Model.Nodes[joint.Node].Position.Z - table;
         int[] first = [.. joint.Tubes.Take(1)];
-        bool isLevel = first is [var tube] && Math.Abs(sized.Model.Tubes[tube].Axes.X.Z) <= LevelSine;
-        return new JigNode(joint.Node, height, isLevel ? height - Drop(sized, first[0]) : null);
+        bool isLevel = first is [var tube] && Math.Abs(sized.Model.StraightAt(tube, joint.Node).Axes.X.Z) <= LevelSine;
+        return new JigNode(joint.Node, height, isLevel ? height - Drop(sized, first[0], joint.Node) : null);
     }
 
     private static JigTube TubeOf(Tube tube, int index)
@@ -75,7 +75,7 @@ public static class SetupPlanner
         {
             bool isThrough = tube == joint.Through;
             End? end = isThrough ? null : joint.Ends.First(e => e.Tube == tube).End;
-            Vector3 direction = end is { } at ? model.Tubes[tube].Into(at) : model.Tubes[tube].Axes.X;
+            Vector3 direction = end is { } at ? model.Tubes[tube].Into(at) : model.StraightAt(tube, joint.Node).Axes.X;
             steps.Add(new JointStep(tube, end, [.. before.Select(b => Angle(b.Direction, direction, b.IsThrough || isThrough))]));
             before.Add((direction, isThrough));
         }

@@ -18,6 +18,7 @@ internal static class FabricationResolver
         double? kerf = values.NotNegative(spec.Kerf, "fabrication: kerf", 2);
         double? trim = values.NotNegative(spec.BarTrim, "fabrication: bar_trim", 0);
         double? grip = values.NotNegative(spec.Grip, "fabrication: grip", 0);
+        double? spring = values.NotNegative(spec.Springback, "fabrication: springback", 0);
         if (tolerance is < FinestTolerance or > CoarsestTolerance)
         {
             values.Diagnostics.Error(
@@ -26,8 +27,12 @@ internal static class FabricationResolver
             return null;
         }
 
-        return gap is { } g && paper is { } p && tolerance is { } t && kerf is { } k && trim is { } b && grip is not null
-            ? (new Fabrication(spec.Cut ?? CutMode.Radial, p, t, k, b, spec.Page ?? PageSize.A4), g)
+        return gap is { } g && paper is { } p && tolerance is { } t && kerf is { } k && trim is { } b && grip is { } straight && spring is { } opens
+            ? (new Fabrication(spec.Cut ?? CutMode.Radial, p, t, k, b, spec.Page ?? PageSize.A4)
+            {
+                Grip = straight,
+                Springback = spec.Springback?.Kind == QuantityKind.Share ? new Springback(0, opens) : new Springback(opens, 0),
+            }, g)
             : null;
     }
 }

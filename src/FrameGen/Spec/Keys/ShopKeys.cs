@@ -117,7 +117,7 @@ internal static class ShopKeys
     private static readonly Key<SpecQuantity> Springback = new(
         "springback",
         new QuantityForm(ValueRange.NotNegative, QuantityKind.Angle, QuantityKind.Share),
-        "what a bend opens after bending; only bent tubes use it",
+        "what a bend opens after bending: degrees, or a share of its angle; the machine is set to so much more",
         "2 deg");
 
     /// <summary>The shop's preferences.</summary>
@@ -133,6 +133,7 @@ internal static class ShopKeys
             map.Find(BarTrim),
             map.FindValue(Page),
             map.Find(Grip),
+            map.Find(Springback),
             map.At));
 
     private static void CheckDisplay(MapReading map)
