@@ -54,6 +54,7 @@ public static class FrameJson
             json.Number("volume_mm3", cut.Volume);
             json.Number("mass_kg", cut.MassKg);
             json.Vector("top", tube.Axes.Z, 1);
+            WriteBends(json, sized.Model, cut);
             json.WriteStartObject("ends");
             WriteEnd(json, sized, cut, End.From);
             WriteEnd(json, sized, cut, End.To);
@@ -62,6 +63,32 @@ public static class FrameJson
         }
 
         json.WriteEndObject();
+    }
+
+    // Of bent tubes only.
+    private static void WriteBends(Utf8JsonWriter json, FrameModel model, CutTube cut)
+    {
+        IReadOnlyList<BendStep> steps = BendStep.Of(model, cut);
+        if (steps.Count == 0)
+        {
+            return;
+        }
+
+        json.WriteStartArray("bends");
+        foreach (BendStep step in steps)
+        {
+            json.WriteStartObject();
+            json.Number("straight_mm", step.Straight);
+            json.Number("start_mm", step.Start);
+            json.Number("rotation_deg", JsonText.Quiet(double.RadiansToDegrees(step.Bend.Rotation), 1));
+            json.Number("angle_deg", double.RadiansToDegrees(step.Bend.Angle));
+            json.Number("machine_angle_deg", double.RadiansToDegrees(step.MachineAngle));
+            json.Number("radius_mm", step.Bend.Radius);
+            json.Number("clock_deg", JsonText.Quiet(double.RadiansToDegrees(step.Bend.Clock), 1));
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
     }
 
     private static void WriteEnd(Utf8JsonWriter json, SizedFrame sized, CutTube tube, End end)

@@ -33,6 +33,12 @@ public static class PaperSet
             OutputFile.FromText("welds.md", TextTemplate.Render("welds.md", seams)),
             new("frame.json", FrameJson.Write(package)),
         };
+        if (package.Cut.Sized.Model.Tubes.Any(t => t.Bent is not null))
+        {
+            files.Add(OutputFile.FromText("bends.csv", BendsCsv.Write(package)));
+            files.Add(OutputFile.FromText("bends.md", TextTemplate.Render("bends.md", BendsModel.From(package))));
+        }
+
         files.AddRange(ShapeFiles.Create(package, options ?? PaperOptions.Default));
         files.AddRange(copies);
         SelfCheck.Totals(package);

@@ -22,6 +22,7 @@ internal static class DevelopedPattern
             new Polyline(PaperLayers.Cut, [.. pattern.From.Line, .. pattern.To.Line.Reverse()], Closed: true),
         };
         ScribeLines(pattern, shapes);
+        BendMarks.Draw(pattern, shapes);
         Words(pattern, shapes);
         return new Drawing(PaperLayers.All, shapes);
     }
@@ -104,9 +105,10 @@ internal static class DevelopedPattern
 
         words.Add($"{pattern.Part.Name}: outside, {PartWords.Section(pattern)}, cut length {pattern.Display.Length(pattern.Part.Drawn.CutLength)}");
         words.Add(PartWords.Tubes(pattern));
-        words.Add($"y counts along the axis from node {PartWords.NodeName(pattern, End.From)}; TOP faces {PartWords.TopFaces(pattern.Tube)} in the frame");
+        words.Add($"y counts along the axis from node {PartWords.NodeName(pattern, End.From)}; TOP faces {PartWords.TopFaces(pattern.Tube.Axes)} in the frame");
         words.Add(EndWords(pattern, pattern.From));
         words.Add(EndWords(pattern, pattern.To));
+        words.AddRange(BendMarks.Words(pattern));
         words.Add(PartWords.Origin(pattern.Sized.Model));
         words.Add(Cautions.WeldShrinkage);
         words.Add(Cautions.OnDrawings);
@@ -120,7 +122,7 @@ internal static class DevelopedPattern
     private static (double Low, double High) LongestClearStretch(PartPattern pattern)
     {
         (double first, double last) = (pattern.From.Deepest, pattern.To.Deepest);
-        double[] edges = [first, .. new[] { pattern.From.Datum, pattern.To.Datum }.Where(y => y > first && y < last).Order(), last];
+        double[] edges = [first, .. new[] { pattern.From.Datum, pattern.To.Datum }.Concat(BendMarks.Tangents(pattern)).Where(y => y > first && y < last).Order(), last];
         (double low, double high) = (edges[0], edges[1]);
         for (int i = 1; i + 1 < edges.Length; i++)
         {

@@ -61,12 +61,16 @@ internal sealed class LayoutView(ShopPackage package, double text)
         Vector3 Wall(End end, double clock, double t)
         {
             (double sin, double cos) = Math.SinCos(clock);
-            return tube[end].Point + (t * tube.Into(end)) + (outline.RadiusAt(sin, cos) * tube.Axes.Radial(clock));
+            return tube[end].Point + (t * tube.Into(end)) + (outline.RadiusAt(sin, cos) * tube.AxesAt(end).Radial(clock));
         }
 
         // The outermost wall lines to both sides, where the tube does not point at the viewer.
         Vector3 side = tube.Axes.X.Cross(toViewer);
-        if (side.Length > 1e-6)
+        if (tube.Bent is not null)
+        {
+            shapes.AddRange(LayoutBends.Draw(tube, cut, outline, toViewer, flat));
+        }
+        else if (side.Length > 1e-6)
         {
             Point2 a = flat(tube.From.Point), b = flat(tube.To.Point);
             shapes.Add(Polyline.Segment(LayoutDrawing.Axes, a, b));
@@ -90,7 +94,7 @@ internal sealed class LayoutView(ShopPackage package, double text)
             // The near half of a cut end; the whole of a flat one that faces the viewer.
             bool whole = cut[end].Kind != CutKind.Cope && -tube.Into(end).Dot(toViewer) > 1e-6;
             var run = new List<Point2>();
-            foreach (CurvePoint point in Turned(cut[end].Outer.Points, whole ? null : p => tube.Axes.Radial(p.Clock).Dot(toViewer) >= -1e-9))
+            foreach (CurvePoint point in Turned(cut[end].Outer.Points, whole ? null : p => tube.AxesAt(end).Radial(p.Clock).Dot(toViewer) >= -1e-9))
             {
                 run.Add(flat(Wall(end, point.Clock, point.T)));
             }

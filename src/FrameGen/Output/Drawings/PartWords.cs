@@ -80,10 +80,10 @@ internal static class PartWords
         return cut.Gap > 0 ? $"{mode}; gap {pattern.Display.Length(cut.Gap)}" : mode;
     }
 
-    /// <summary>The axis of the frame nearest to where the tube's top line faces: <c>+z</c>, <c>-y</c>.</summary>
-    public static string TopFaces(Tube tube)
+    /// <summary>The axis of the frame nearest to where the top line of a tube faces: <c>+z</c>, <c>-y</c>.</summary>
+    public static string TopFaces(TubeAxes axes)
     {
-        Vector3 top = tube.Axes.Z;
+        Vector3 top = axes.Z;
         (double size, string name) best = (Math.Abs(top.Z), top.Z >= 0 ? "+z" : "-z");
         foreach ((double value, string axis) in (ReadOnlySpan<(double, string)>)[(top.X, "x"), (top.Y, "y")])
         {

@@ -1,4 +1,5 @@
 using System.Globalization;
+using FrameGen.Fabrication;
 using FrameGen.Formats.Drawings;
 using FrameGen.Geometry;
 using FrameGen.Model;
@@ -71,6 +72,7 @@ internal sealed class TemplatePieceSketch
         Outline(baseEdge);
         Tab(baseEdge);
         ScribeLines(baseEdge);
+        BendLines(baseEdge);
         Bands();
         MatchMarks(row + (_inward * height / 2), mark);
         NameDatum(Math.Max(left, inset - _half), room);
@@ -141,7 +143,12 @@ internal sealed class TemplatePieceSketch
         words.Add(new($"Datum to the nearer end of a square-sawn {Measure(blank)} blank: {Measure(nearer)}", main));
         words.Add(new($"At {PartWords.NodeName(_pattern, _end.End)}: {PartWords.Mates(_pattern, _end.Cut)}"));
         words.Add(new(PartWords.Mode(_pattern, _end.Cut)));
-        words.Add(new($"Edges 180 meet, tab under. TOP lies on the tube's top line, which faces {PartWords.TopFaces(_pattern.Tube)} in the frame: one line for both ends"));
+        words.Add(new($"Edges 180 meet, tab under. TOP lies on the tube's top line, which faces {PartWords.TopFaces(_pattern.Tube.AxesAt(_end.End))} in the frame: one line for both ends"));
+        if (BendMarks.EndWords(_pattern, _end.End) is { } bends)
+        {
+            words.Add(new(bends));
+        }
+
         words.Add(new($"Arrows point to the {otherName} end, at {PartWords.NodeName(_pattern, other.End)}"));
         words.Add(new(PartWords.Section(_pattern)));
         words.Add(new(PartWords.Tubes(_pattern)));
@@ -218,6 +225,28 @@ internal sealed class TemplatePieceSketch
 
         Write(0.5 * size, _inward > 0 ? baseEdge - (0.6 * _text) - size : baseEdge + (0.6 * _text), size, "TOP");
         _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(-_half, _end.Datum), new(_half + TabWidth, _end.Datum)));
+    }
+
+    /// <summary>The line along the inside of the first bend, and at the to end of the last, from the cut to the datum, and its end at the base edge.</summary>
+    private void BendLines(double baseEdge)
+    {
+        double size = BandText(_text, _half / 2);
+        double line = _inward > 0 ? baseEdge - (0.6 * _text) - size : baseEdge + (0.6 * _text);
+        double top = (0.5 * size) + TextFit.Width("TOP", size);
+        foreach (BendStep step in BendMarks.AtEnd(_pattern, _end.End))
+        {
+            double x = BendMarks.Inside(_pattern, step);
+            _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(_scale * x, _end.At(x)), new(_scale * x, _end.Datum)));
+            _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(_scale * x, baseEdge), new(_scale * x, baseEdge - (_inward * 1.6 * _text))));
+
+            string name = string.Create(CultureInfo.InvariantCulture, $"BEND {step.Bend.Number}");
+            double width = TextFit.Width(name, size);
+
+            // Right of the line, left of it where TOP or the edge is there, or right of TOP.
+            double[] places = [(_scale * x) + (0.5 * size), (_scale * x) - (0.5 * size) - width, top + (0.5 * size)];
+            double place = places.FirstOrDefault(p => p > -_half && p + width < _half && (p > top || p + width < 0), places[0]);
+            Write(place, line, size, name);
+        }
     }
 
     /// <summary>WASTE beyond the long point; KEEP, clock angles and arrows between the deepest place and the datum.</summary>
