@@ -26,7 +26,7 @@ internal sealed class SpecBuilder
     private readonly List<TargetSpec> _targets = [];
     private readonly List<JointSpec> _joints = [];
     private MirrorSpec? _mirror;
-    private FabricationSpec _fabrication = new(null, null, null, null, null, null, null, null, null);
+    private FabricationSpec _fabrication = new(null, null, null, null, null, null, null, null, null, null);
     private string _title = string.Empty;
     private int _line = 1;
 

@@ -1,7 +1,6 @@
 using System.Globalization;
 using FrameGen.Fabrication;
 using FrameGen.Formats.Drawings;
-using FrameGen.Geometry;
 using FrameGen.Model;
 
 namespace FrameGen.Output.Drawings;
@@ -48,7 +47,7 @@ internal static class BendMarks
 
             string number = step.Bend.Number.ToString(CultureInfo.InvariantCulture);
             string name = $"BEND {number} INSIDE";
-            double height = TextFit.HeightFor(name, text, half - text);
+            double height = TextFit.HeightFor($"BEND {number} y 10000.0", text, half / 2);
             double width = TextFit.Width(name, height);
             double x = inside + (0.5 * height) + width > half ? inside - (0.5 * height) - width : inside + (0.5 * height);
             shapes.Add(new Text(PaperLayers.Text, new(x, ((start + stop) / 2) - (height / 2)), height, 0, name));
