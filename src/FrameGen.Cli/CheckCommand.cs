@@ -20,7 +20,7 @@ internal sealed class CheckCommand(Terminal terminal, string spec, bool json)
         }
         else
         {
-            _job.Diagnostics.Note(null, "not supported yet: cut ends of tubes that are not round, or bent; sizes, targets and cases are checked, joints are not");
+            _job.Diagnostics.Note(null, "not supported yet: cut ends of bent tubes that are not round; sizes, targets and cases are checked, joints are not");
         }
 
         _job.PrintDiagnostics(string.Empty);

@@ -50,8 +50,8 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
     public SizedFrame? Size(FrameModel? model) =>
         model is null ? null : At("choosing sections", () => FrozenSizing.Size(model, diagnostics, Designs()));
 
-    /// <summary>True where the ends of a frame's tubes can be cut: of straight round tubes and rods, so far.</summary>
-    public static bool CanCope(SizedFrame sized) => sized.Sections.All(s => s is RoundTube or Rod);
+    /// <summary>True where the ends of a frame's tubes can be cut: of straight tubes of any shape, and of bent round ones so far.</summary>
+    public static bool CanCope(SizedFrame sized) => !BentOnesNotRound(sized).Any();
 
     /// <summary>Cuts the tube ends.</summary>
     public CutFrame? Cope(SizedFrame? sized)
@@ -63,8 +63,11 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
 
         if (!CanCope(sized))
         {
-            string names = string.Join(", ", sized.Sections.Where(s => s is not (RoundTube or Rod)).Select(s => s.Name).Distinct(StringComparer.Ordinal));
-            diagnostics.Error(null, $"not supported yet: patterns and papers of {names} (`check` and `size` work with them, this version can't draw their cut ends)");
+            foreach (Tube tube in BentOnesNotRound(sized).Where(t => t.Original is null))
+            {
+                diagnostics.Error(tube.At, $"not supported yet: papers of bent tubes that are not round, and tube {tube.Name} of {sized.Sections[tube.Group].Name} is bent (`check` and `size` work with it)");
+            }
+
             return null;
         }
 
@@ -101,6 +104,9 @@ public sealed class FramePipeline(DiagnosticList diagnostics, IProgress<Pipeline
     /// <returns>Every file of the output folder, or null when an error was reported.</returns>
     public IReadOnlyList<OutputFile>? Build(FrameSpec? spec, PaperOptions? options = null) =>
         Papers(Plan(Cope(Size(Resolve(spec)))), options);
+
+    private static IEnumerable<Tube> BentOnesNotRound(SizedFrame sized) =>
+        sized.Model.Tubes.Where(t => t.Bent is not null && sized.Sections[t.Group] is not (RoundTube or Rod));
 
     private void NoteUnprinted(FrameModel model)
     {

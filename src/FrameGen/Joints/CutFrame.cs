@@ -40,11 +40,14 @@ public enum CutKind
 
     /// <summary>Square to the axis.</summary>
     Square,
+
+    /// <summary>On a plane that the spec gives.</summary>
+    Plane,
 }
 
 /// <summary>One cut end. Distances t run from the end's point into the tube, mm; clock angles are the tube's own.</summary>
 /// <param name="Kind">How it is cut.</param>
-/// <param name="Contacts">The tubes that cut it, in the joint's order; the first is the seat. Empty at a square end.</param>
+/// <param name="Contacts">The tubes that cut it, in the joint's order; the first is the seat. Empty at a square or plane end.</param>
 /// <param name="Gap">Left between it and its mates, mm; 0 where it is not coped.</param>
 /// <param name="Surface">Exact place of every wall line's cut.</param>
 /// <param name="Outer">The cut on the outer skin, within the tolerance, with every corner.</param>

@@ -47,6 +47,12 @@ internal sealed class JointPlan
                 limit = MiterFace(frame, other);
                 ends[i] = new EndPlan(id, CutKind.Miter, frame, limit, 0, [], partner);
             }
+            else if (end.Plane is { } normal)
+            {
+                Vector3 inward = normal.Dot(frame.Into) < 0 ? -normal : normal;
+                limit = new HalfSpace(frame.Point - ((end.Extend ?? 0) * frame.Into), inward);
+                ends[i] = new EndPlan(id, CutKind.Plane, frame, limit, end.Extend ?? 0, [], null);
+            }
             else if (before.Count == 0 || end.Cut == Spec.RequestedCut.Square || (joint.Corner == Corner.InLine && i < 2))
             {
                 double extension = end.Extend ?? (i == 0 ? runOut : 0);
@@ -92,7 +98,7 @@ internal sealed class JointPlan
 
         TubeEndId id = joint.Ends[0];
         Tube first = model.Tubes[id.Tube];
-        if (first[id.End].Extend is not null)
+        if (first[id.End].Extend is not null || first[id.End].Plane is not null)
         {
             return (0, -1);
         }
@@ -104,7 +110,7 @@ internal sealed class JointPlan
         {
             TubeEndId other = joint.Ends[i];
             Tube tube = model.Tubes[other.Tube];
-            if (tube[other.End].Cut == Spec.RequestedCut.Square)
+            if (tube[other.End].Cut is Spec.RequestedCut.Square or Spec.RequestedCut.Plane)
             {
                 continue;
             }
@@ -124,8 +130,8 @@ internal sealed class JointPlan
 /// <param name="Id">Which end.</param>
 /// <param name="Kind">How.</param>
 /// <param name="Frame">The end's point and directions.</param>
-/// <param name="Limit">Where it ends as a mate of others; the face itself at a square or mitred end.</param>
-/// <param name="Extension">Past the end point, mm; square ends.</param>
+/// <param name="Limit">Where it ends as a mate of others; the face itself at a square, plane or mitred end.</param>
+/// <param name="Extension">Past the end point, mm; square and plane ends.</param>
 /// <param name="Mates">What it is coped to, in order.</param>
 /// <param name="Partner">The end it is mitred with; null for none.</param>
 internal sealed record EndPlan(

@@ -22,7 +22,7 @@ internal static class JointReport
             Tube tube = model.Tubes[end.Id.Tube];
             TubeEnd place = tube[end.Id.End];
             string name = $"tube {tube.Name}, {Word(end.Id.End)} end at node {node}";
-            if (end.Kind != CutKind.Square && place.Extend is { } extend)
+            if (end.Kind is CutKind.Cope or CutKind.Miter && place.Extend is { } extend)
             {
                 string to = end.Kind == CutKind.Miter
                     ? $"mitred with {model.Tubes[end.Partner!.Value.Tube].Name}"
@@ -76,14 +76,20 @@ internal static class JointReport
     /// <summary>What shows once an end is cut.</summary>
     public static void ReportCut(FrameModel model, EndPlan end, CutterEnd cut, FitProblem? wide, DiagnosticList diagnostics)
     {
+        Tube tube = model.Tubes[end.Id.Tube];
+        TubeEnd place = tube[end.Id.End];
+        string name = $"tube {tube.Name}, {Word(end.Id.End)} end at node {model.Nodes[place.Node].Name}";
+        double length = cut.Cut.Outer.Max - cut.Cut.Outer.Min;
+        if (end.Kind == CutKind.Plane && Math.Asin(Math.Abs(end.Limit.Inward.Dot(end.Frame.Into))) is var slant && slant < FeatherAngle)
+        {
+            diagnostics.Warning(place.At, $"{name}: its plane crosses the tube at only {Degrees(slant)} degrees, so that its cut runs out in a feather edge {length:0.#} mm long; from 15 degrees up it can be welded sensibly");
+        }
+
         if (end.Kind != CutKind.Cope)
         {
             return;
         }
 
-        Tube tube = model.Tubes[end.Id.Tube];
-        TubeEnd place = tube[end.Id.End];
-        string name = $"tube {tube.Name}, {Word(end.Id.End)} end at node {model.Nodes[place.Node].Name}";
         const string Open = "part of its wall meets nothing and stops square at the node";
         const string Remedy = "choose a smaller tube or a larger seat, or allow it with `wrap: true`";
         if (wide is not null)
@@ -106,7 +112,6 @@ internal static class JointReport
             double angle = Math.Min(contact.Angle, Math.PI - contact.Angle);
             if (angle < FeatherAngle)
             {
-                double length = cut.Cut.Outer.Max - cut.Cut.Outer.Min;
                 diagnostics.Warning(place.At, $"{name}: meets {model.Tubes[contact.Tube].Name} at only {Degrees(angle)} degrees, so that its cut runs out in a feather edge {length:0.#} mm long; from 15 degrees up it can be welded sensibly");
             }
         }

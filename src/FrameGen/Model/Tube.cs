@@ -93,4 +93,8 @@ public sealed record Tube(
 /// <param name="Gap">Between a coped end and its mates, mm.</param>
 /// <param name="Wrap">True where it may be wider than its seat.</param>
 /// <param name="At">Where its cut is written.</param>
-public sealed record TubeEnd(int Node, Vector3 Point, RequestedCut Cut, double? Extend, double Gap, bool Wrap, SourcePlace At);
+public sealed record TubeEnd(int Node, Vector3 Point, RequestedCut Cut, double? Extend, double Gap, bool Wrap, SourcePlace At)
+{
+    /// <summary>Unit normal of the plane of a plane cut, global, to either side of it; null for other cuts.</summary>
+    public Vector3? Plane { get; init; }
+}

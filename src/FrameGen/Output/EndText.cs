@@ -6,11 +6,12 @@ namespace FrameGen.Output;
 /// <summary>Words for a tube's ends, the same on every paper.</summary>
 internal static class EndText
 {
-    /// <summary>The word of the spec and of frame.json: cope, miter, square.</summary>
+    /// <summary>The word of the spec and of frame.json: cope, miter, square, plane.</summary>
     public static string Kind(CutKind kind) => kind switch
     {
         CutKind.Cope => "cope",
         CutKind.Miter => "miter",
+        CutKind.Plane => "plane",
         _ => "square",
     };
 

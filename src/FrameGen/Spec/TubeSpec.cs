@@ -40,6 +40,9 @@ public enum RequestedCut
 
     /// <summary>Square to the axis.</summary>
     Square,
+
+    /// <summary>On a plane through the end's point.</summary>
+    Plane,
 }
 
 /// <summary>What a spec asks of one end.</summary>
@@ -48,4 +51,8 @@ public enum RequestedCut
 /// <param name="Gap">Between this end and its mates; null for the general one.</param>
 /// <param name="Wrap">True where it may be wider than its seat.</param>
 /// <param name="At">Where it is written; the tube's place where nothing is.</param>
-public sealed record EndCutSpec(RequestedCut Cut, SpecQuantity? Extend, SpecQuantity? Gap, bool Wrap, SourcePlace At);
+public sealed record EndCutSpec(RequestedCut Cut, SpecQuantity? Extend, SpecQuantity? Gap, bool Wrap, SourcePlace At)
+{
+    /// <summary>Normal of the plane of a plane cut; null for other cuts.</summary>
+    public SpecVector? Plane { get; init; }
+}

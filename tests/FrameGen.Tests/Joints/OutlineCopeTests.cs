@@ -60,7 +60,7 @@ public class OutlineCopeTests
             {
                 double radius = skin.RadiusAt(Math.Sin(clock), Math.Cos(clock));
                 Vector3 start = own.From.Point + (radius * own.Axes.Radial(clock));
-                double? met = solid.Walk(start, own.Axes.X, 200, -60);
+                double? met = solid.Walk(start, own.Axes.X, 140, -60);
                 Assert.NotNull(met);
                 Assert.Equal(met.Value, end.Surface.At(clock, radius), 1e-9);
             }
@@ -79,11 +79,11 @@ public class OutlineCopeTests
             double clock = -3.05 + (6.2 * i / 12);
             (double sin, double cos) = Math.SinCos(clock);
             double inner = Sections[tube].Bore.RadiusAt(sin, cos), outer = Sections[tube].Outline.RadiusAt(sin, cos);
-            const int Depths = 40;
+            const int Depths = 16;
             double most = Enumerable.Range(0, Depths + 1).Max(k =>
             {
                 Vector3 start = own.From.Point + ((inner + ((outer - inner) * k / Depths)) * own.Axes.Radial(clock));
-                return solid.Walk(start, own.Axes.X, 200, -60) ?? 0;
+                return solid.Walk(start, own.Axes.X, 140, -60) ?? 0;
             });
             double at = end.Surface.At(clock, outer);
 

@@ -29,7 +29,7 @@ internal sealed record PrismSolid(Vector3 Point, Vector3 Axis, Vector3 Top, Func
     /// <summary>t at which a walk from t = <paramref name="middle"/> down first comes inside; null where it never does.</summary>
     public double? Walk(Vector3 start, Vector3 into, double middle, double last)
     {
-        const double Step = 0.05;
+        const double Step = 0.25;
         for (double t = middle; t >= last; t -= Step)
         {
             if (!Holds(start + (t * into)))

@@ -149,7 +149,6 @@ public class KeyErrorTests
     /// <summary>Text whose effect comes later, the piece the error points to, and the key it names.</summary>
     public static TheoryData<string, string, string> NotYet => new()
     {
-        { "group: posts, ends: {to: {cut: {plane: [1, 0, 0]}}}", "plane", "plane" },
         { "group: posts, ends: {to: {vent: 4 mm}}", "vent", "vent" },
     };
 

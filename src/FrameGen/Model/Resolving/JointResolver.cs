@@ -164,7 +164,12 @@ internal sealed class JointResolver
 
         if (end.Cut != RequestedCut.Default)
         {
-            string cut = end.Cut == RequestedCut.Cope ? "cope" : "square";
+            string cut = end.Cut switch
+            {
+                RequestedCut.Cope => "cope",
+                RequestedCut.Plane => "{plane: ...}",
+                _ => "square",
+            };
             return Error(end.At, $"{whose}: tube {name} is to be mitred here, and its end asks for cut: {cut}; leave out one of them");
         }
 

@@ -67,8 +67,9 @@ internal static class TubePlacement
             up = mirror!.Of(written);
         }
 
-        EndRequest? from = Request(draft.Spec.From.Cut, $"tube {draft.Name}, from end", gap, values);
-        EndRequest? to = Request(draft.Spec.To.Cut, $"tube {draft.Name}, to end", gap, values);
+        Reflection? reflection = draft.Original is null ? null : mirror;
+        EndRequest? from = Request(draft.Spec.From.Cut, $"tube {draft.Name}, from end", gap, reflection, values);
+        EndRequest? to = Request(draft.Spec.To.Cut, $"tube {draft.Name}, to end", gap, reflection, values);
         if (draft is not { From: { } fromNode, To: { } toNode })
         {
             return null;
@@ -116,11 +117,25 @@ internal static class TubePlacement
         }
 
         return sound && from is not null && to is not null
+            && IsAcross(from, along, $"tube {draft.Name}, from end", values) & IsAcross(to, along, $"tube {draft.Name}, to end", values)
             ? new PlacedTube(from.At(fromNode, axis.From), to.At(toNode, axis.To), TubeAxes.Along(along, up)) { Bent = bent }
             : null;
     }
 
-    private static EndRequest? Request(EndCutSpec spec, string whose, double gap, SpecValues values)
+    // A plane along the tube never crosses it.
+    private static bool IsAcross(EndRequest end, Vector3 along, string whose, SpecValues values)
+    {
+        if (end.Plane is not { } normal || Math.Abs(normal.Dot(along)) > LeastSine * along.Length)
+        {
+            return true;
+        }
+
+        values.Diagnostics.Error(
+            end.Spec.Plane!.At, $"{whose}: the plane it is to be cut on runs along the tube and never crosses it; give the plane another normal");
+        return false;
+    }
+
+    private static EndRequest? Request(EndCutSpec spec, string whose, double gap, Reflection? reflection, SpecValues values)
     {
         double? extend = spec.Extend is null ? null : values.Of(spec.Extend);
         double? endGap = values.NotNegative(spec.Gap, $"{whose}: gap", gap);
@@ -131,11 +146,18 @@ internal static class TubePlacement
             return null;
         }
 
-        return endGap is { } g && (spec.Extend is null || extend is not null) ? new EndRequest(spec, extend, g) : null;
+        Vector3? plane = spec.Plane is null ? null : values.Direction(spec.Plane, $"{whose}: plane");
+        if (spec.Plane is not null && plane is null)
+        {
+            return null;
+        }
+
+        plane = plane is { } written && reflection is not null ? reflection.Of(written) : plane;
+        return endGap is { } g && (spec.Extend is null || extend is not null) ? new EndRequest(spec, extend, g, plane) : null;
     }
 
-    private sealed record EndRequest(EndCutSpec Spec, double? Extend, double Gap)
+    private sealed record EndRequest(EndCutSpec Spec, double? Extend, double Gap, Vector3? Plane)
     {
-        public TubeEnd At(int node, Vector3 point) => new(node, point, Spec.Cut, Extend, Gap, Spec.Wrap, Spec.At);
+        public TubeEnd At(int node, Vector3 point) => new(node, point, Spec.Cut, Extend, Gap, Spec.Wrap, Spec.At) { Plane = Plane };
     }
 }

@@ -47,9 +47,9 @@ internal static class PartWords
     /// <summary>What an end is cut to.</summary>
     public static string Mates(PartPattern pattern, EndCut cut)
     {
-        if (cut.Kind == CutKind.Square)
+        if (cut.Kind is CutKind.Square or CutKind.Plane)
         {
-            return "square";
+            return cut.Kind == CutKind.Square ? "square" : "cut on a plane";
         }
 
         string mates = string.Join(", ", cut.Contacts.Select(c => pattern.Sized.Model.Tubes[c.Tube].Name + Crossing(pattern, c)));
@@ -59,7 +59,7 @@ internal static class PartWords
     /// <summary>How the cut face lies, and what the saw or hole saw is set to.</summary>
     public static string Mode(PartPattern pattern, EndCut cut)
     {
-        if (cut.Kind == CutKind.Miter)
+        if (cut.Kind is CutKind.Miter or CutKind.Plane)
         {
             // The plane halves the angle between the axes; a square cut is half of a straight angle.
             return cut.Contacts is [var mate, ..]

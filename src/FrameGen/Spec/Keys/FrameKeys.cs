@@ -69,15 +69,14 @@ internal static class FrameKeys
         new("plane", new VectorForm(QuantityKind.Number, isDirection: true), "normal of the plane it is cut on", "[1, 0, 1]")
         {
             IsRequired = true,
-            IsNotSupportedYet = true,
         };
 
-    private static readonly Key<RequestedCut> EndCut = new(
+    private static readonly Key<CutChoice> EndCut = new(
         "cut",
-        new ByShapeForm<RequestedCut>(
+        new ByShapeForm<CutChoice>(
             "cope, square or {plane: [nx, ny, nz]}",
-            scalar: new WordForm<RequestedCut>([("cope", RequestedCut.Cope), ("square", RequestedCut.Square)]),
-            mapping: new MapForm<RequestedCut>("a plane cut", [CutPlane], _ => RequestedCut.Default)),
+            scalar: new WordForm<CutChoice>([("cope", new(RequestedCut.Cope, null)), ("square", new(RequestedCut.Square, null))]),
+            mapping: new MapForm<CutChoice>("a plane cut", [CutPlane], map => new CutChoice(RequestedCut.Plane, map.Get(CutPlane)))),
         "how it is cut; without it the end is coped to what stands before it in the joint's order",
         "square");
 
@@ -96,7 +95,10 @@ internal static class FrameKeys
         "a tube's end",
         [EndCut, Extend, EndGap, Vent, Wrap],
         map => new EndCutSpec(
-            map.FindValue(EndCut) ?? RequestedCut.Default, map.Find(Extend), map.Find(EndGap), map.FindValue(Wrap) ?? false, map.At),
+            map.Find(EndCut)?.Cut ?? RequestedCut.Default, map.Find(Extend), map.Find(EndGap), map.FindValue(Wrap) ?? false, map.At)
+        {
+            Plane = map.Find(EndCut)?.Plane,
+        },
         CheckEnd);
 
     private static readonly Key<EndCutSpec> FromEnd = new("from", End, "the cut at the `from` end", "{cut: square}");
@@ -167,15 +169,16 @@ internal static class FrameKeys
 
     private static void CheckEnd(MapReading map)
     {
-        RequestedCut? cut = map.FindValue(EndCut);
+        RequestedCut? cut = map.Find(EndCut)?.Cut;
         if (cut == RequestedCut.Cope && map.Has(Extend))
         {
             map.Error(map.PlaceOf(Extend), "'extend' moves a square or plane cut, and this end is coped; remove one of the two");
         }
 
-        if (cut == RequestedCut.Square && map.Has(EndGap))
+        if (cut is RequestedCut.Square or RequestedCut.Plane && map.Has(EndGap))
         {
-            map.Error(map.PlaceOf(EndGap), "'gap' is left between a coped end and its mates, and this end is square; remove one of the two");
+            string kind = cut == RequestedCut.Square ? "square" : "cut on a plane";
+            map.Error(map.PlaceOf(EndGap), $"'gap' is left between a coped end and its mates, and this end is {kind}; remove one of the two");
         }
     }
 
@@ -210,6 +213,9 @@ internal static class FrameKeys
             map.Error(to.Node.At, $"tube '{map.Owner.Value}' begins and ends at node '{to.Node.Value}'; give it two nodes");
         }
     }
+
+    /// <summary>How an end is to be cut, and the normal of the plane for a plane cut.</summary>
+    private sealed record CutChoice(RequestedCut Cut, SpecVector? Plane);
 
     /// <summary>A node, and how far from it the axis ends.</summary>
     private sealed record AxisEnd(Placed<string> Node, SpecVector? Offset);
