@@ -48,6 +48,16 @@ public sealed class FlatSidedOutline : Outline
     /// <summary>Half the length of the flats that run across, mm.</summary>
     public double CoreHalfWidth { get; }
 
+    /// <summary>Distances round the outline, mm, of the middles of its four corners, growing.</summary>
+    public IReadOnlyList<double> CornerMiddles
+    {
+        get
+        {
+            double first = CoreHalfWidth + (Corner * Math.PI / 4);
+            return [first - (Perimeter / 2), -first, first, (Perimeter / 2) - first];
+        }
+    }
+
     /// <inheritdoc/>
     public override double HalfHeight { get; }
 

@@ -42,13 +42,33 @@ internal readonly struct PartMatch(PartShape drawn, PartShape other, double tole
             }
 
             seen.Add(allowed);
-            if (Agrees(allowed, negated, swapped))
+            if (Agrees(allowed, negated, swapped) && VentsAgree(allowed, negated, swapped))
             {
                 return new Placement(other.Cut.Tube, allowed, swapped);
             }
         }
 
         return null;
+    }
+
+    private bool VentsAgree(double turn, bool negated, bool swapped)
+    {
+        foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
+        {
+            (Vent? a, Vent? b) = (drawn.Cut[Source(end, swapped)].Vent, other.Cut[end].Vent);
+            if (a is null && b is null)
+            {
+                continue;
+            }
+
+            if (a is null || b is null || a.Diameter != b.Diameter || Math.Abs(a.T - b.T) > tolerance
+                || Math.Abs(Math.IEEERemainder((negated ? -a.Clock : a.Clock) + turn - b.Clock, 2 * Math.PI)) > 1e-6)
+            {
+                return false;
+            }
+        }
+
+        return true;
     }
 
     /// <summary>Lengths and extents that no turn changes.</summary>

@@ -97,6 +97,18 @@ public static class ShopPlanner
             notes.Add("to end wider than its seat: fill by hand");
         }
 
+        foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
+        {
+            if (tube[end].Vent is { } vent)
+            {
+                double clock = double.RadiansToDegrees(vent.Clock);
+                double along = end == End.From ? vent.T : sized.Model.Tubes[tube.Tube].Length - vent.T;
+                notes.Add(string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"{(end == End.From ? "from" : "to")} end: drill {vent.Diameter:0.###} mm vent at y {along:0.0} mm, clock {(clock < 0 ? clock + 360 : clock):0}"));
+            }
+        }
+
         return string.Join("; ", notes);
     }
 

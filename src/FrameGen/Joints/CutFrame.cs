@@ -60,7 +60,11 @@ public sealed record EndCut(
     EndSurface Surface,
     EndCurve Outer,
     EndCurve Inner,
-    double OuterLength);
+    double OuterLength)
+{
+    /// <summary>A breathing hole near it; null for none. Volume and mass leave it out.</summary>
+    public Vent? Vent { get; init; }
+}
 
 /// <summary>A tube that cuts an end.</summary>
 /// <param name="Tube">Index of the mate.</param>

@@ -64,6 +64,7 @@ public static class EndCoper
                 continue;
             }
 
+            failed |= JointReport.ReportVents(model, i, section, first.Cut, last.Cut, diagnostics);
             tubes[i] = TubeMeasure.Measure(model, i, section, first, last);
         }
 

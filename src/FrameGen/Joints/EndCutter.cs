@@ -15,7 +15,10 @@ internal sealed class EndCutter(FrameModel model, IReadOnlyList<Section> section
     {
         Tube tube = model.Tubes[end.Id.Tube];
         Section section = sections[tube.Group];
-        return end.Kind == CutKind.Cope ? Cope(end, tube, section.Bore, section.Outline) : Plane(end, section.Bore, section.Outline);
+        CutterEnd cut = end.Kind == CutKind.Cope ? Cope(end, tube, section.Bore, section.Outline) : Plane(end, section.Bore, section.Outline);
+        return tube[end.Id.End].Vent is { } diameter
+            ? cut with { Cut = cut.Cut with { Vent = Vent.Beside(cut.Cut, diameter, section.Outline, end.Frame.Axes) } }
+            : cut;
     }
 
     private CutterEnd Plane(EndPlan end, Outline inner, Outline outer)

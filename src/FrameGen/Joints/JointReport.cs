@@ -126,6 +126,38 @@ internal static class JointReport
         diagnostics.Error(tube.At, $"tube {tube.Name}: its cuts at nodes {from} and {to} overlap by {overlap:0.0##} mm, so that nothing is left of it on one side; move the nodes apart, or change the `order` at one of them");
     }
 
+    /// <summary>Breathing holes that can't be drilled.</summary>
+    /// <returns>True where one can't.</returns>
+    public static bool ReportVents(FrameModel model, int index, Section section, EndCut from, EndCut to, DiagnosticList diagnostics)
+    {
+        Tube tube = model.Tubes[index];
+        bool failed = false;
+        foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
+        {
+            (EndCut own, EndCut other) = end == End.From ? (from, to) : (to, from);
+            if (own.Vent is not { } vent)
+            {
+                continue;
+            }
+
+            string name = $"tube {tube.Name}, {Word(end)} end at node {model.Nodes[tube[end].Node].Name}";
+            double most = Vent.Largest(section.Outline);
+            double room = tube.Length - Math.Max(other.Outer.Max, other.Vent?.T + (other.Vent?.Diameter / 2) ?? double.NegativeInfinity);
+            string? wrong = section is Rod
+                ? "a rod is solid and has nothing to vent; remove `vent`"
+                : vent.Diameter > most ? $"a vent of {vent.Diameter:0.###} mm is too large for {section.Name}, which takes {most:0.#} mm at most; give a smaller one"
+                : vent.T + (vent.Diameter / 2) > room ? $"the tube is too short for a vent here: the hole would end {vent.T + (vent.Diameter / 2):0.#} mm from the node and the other end begins at {room:0.#} mm; vent the other end"
+                : null;
+            if (wrong is not null)
+            {
+                diagnostics.Error(tube[end].At, $"{name}: {wrong}");
+                failed = true;
+            }
+        }
+
+        return failed;
+    }
+
     /// <summary>An end that reaches past the end of the tube it lands on.</summary>
     public static void ReportOverhang(FrameModel model, TubeEndId id, int through, double past, DiagnosticList diagnostics)
     {

@@ -97,4 +97,7 @@ public sealed record TubeEnd(int Node, Vector3 Point, RequestedCut Cut, double? 
 {
     /// <summary>Unit normal of the plane of a plane cut, global, to either side of it; null for other cuts.</summary>
     public Vector3? Plane { get; init; }
+
+    /// <summary>Diameter of a breathing hole near this end, mm; null for none.</summary>
+    public double? Vent { get; init; }
 }

@@ -86,11 +86,11 @@ internal static class SelfCheck
         Require(Math.Abs(meshed - volume) <= 1e-3 * volume, $"the mesh of {mark} holds {meshed} mm3 and the part {volume} mm3");
     }
 
-    /// <summary>A developed pattern is as wide as the tube's outline is long, within 1e-6 mm, and has one closed line to cut.</summary>
-    public static void DevelopedWidth(string mark, Drawing drawing, Section section)
+    /// <summary>A developed pattern is as wide as the tube's outline is long, within 1e-6 mm, and has one closed line to cut, and one for each vent.</summary>
+    public static void DevelopedWidth(string mark, Drawing drawing, Section section, int vents)
     {
         List<Polyline> cut = [.. drawing.Shapes.OfType<Polyline>().Where(p => p.Layer is "CUT")];
-        Require(cut.Count == 1 && cut[0].Closed, $"the developed pattern of {mark} has {cut.Count} lines to cut");
+        Require(cut.Count == 1 + vents && cut.TrueForAll(c => c.Closed), $"the developed pattern of {mark} has {cut.Count} lines to cut");
         double width = cut[0].Points.Max(p => p.X) - cut[0].Points.Min(p => p.X);
         Require(
             Math.Abs(width - section.Outline.Perimeter) <= 1e-6,

@@ -25,7 +25,8 @@ internal static class ShapeFiles
         {
             SelfCheck.NoInterference(cut, part.Drawn);
             Drawing developed = DevelopedPattern.Draw(package, part);
-            SelfCheck.DevelopedWidth(part.Name, developed, cut.Sized.SectionOf(part.Drawn.Tube));
+            int vents = (part.Drawn.From.Vent is null ? 0 : 1) + (part.Drawn.To.Vent is null ? 0 : 1);
+            SelfCheck.DevelopedWidth(part.Name, developed, cut.Sized.SectionOf(part.Drawn.Tube), vents);
             yield return new OutputFile($"developed/{part.Name}.dxf", Dxf(developed));
             if (TemplatePieces.Draw(package, part) is { } pieces)
             {

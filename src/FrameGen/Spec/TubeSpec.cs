@@ -55,4 +55,7 @@ public sealed record EndCutSpec(RequestedCut Cut, SpecQuantity? Extend, SpecQuan
 {
     /// <summary>Normal of the plane of a plane cut; null for other cuts.</summary>
     public SpecVector? Plane { get; init; }
+
+    /// <summary>Diameter of a breathing hole near this end; null for none.</summary>
+    public SpecQuantity? Vent { get; init; }
 }

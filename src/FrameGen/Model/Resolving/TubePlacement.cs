@@ -62,14 +62,10 @@ internal static class TubePlacement
         // Every value is looked at, whatever else is wrong.
         Vector3? up = draft.Spec.Up is null ? null : values.Direction(draft.Spec.Up, $"tube {draft.Name}: up");
         bool sound = draft.Spec.Up is null || up is not null;
-        if (draft.Original is not null && up is { } written)
-        {
-            up = mirror!.Of(written);
-        }
+        up = draft.Original is not null && up is { } written ? mirror!.Of(written) : up;
 
-        Reflection? reflection = draft.Original is null ? null : mirror;
-        EndRequest? from = Request(draft.Spec.From.Cut, $"tube {draft.Name}, from end", gap, reflection, values);
-        EndRequest? to = Request(draft.Spec.To.Cut, $"tube {draft.Name}, to end", gap, reflection, values);
+        EndRequest? from = Request(draft, draft.Spec.From.Cut, "from", gap, mirror, values);
+        EndRequest? to = Request(draft, draft.Spec.To.Cut, "to", gap, mirror, values);
         if (draft is not { From: { } fromNode, To: { } toNode })
         {
             return null;
@@ -117,26 +113,14 @@ internal static class TubePlacement
         }
 
         return sound && from is not null && to is not null
-            && IsAcross(from, along, $"tube {draft.Name}, from end", values) & IsAcross(to, along, $"tube {draft.Name}, to end", values)
+            && from.IsAcross(along, values) & to.IsAcross(along, values)
             ? new PlacedTube(from.At(fromNode, axis.From), to.At(toNode, axis.To), TubeAxes.Along(along, up)) { Bent = bent }
             : null;
     }
 
-    // A plane along the tube never crosses it.
-    private static bool IsAcross(EndRequest end, Vector3 along, string whose, SpecValues values)
+    private static EndRequest? Request(TubeDraft draft, EndCutSpec spec, string end, double gap, Reflection? mirror, SpecValues values)
     {
-        if (end.Plane is not { } normal || Math.Abs(normal.Dot(along)) > LeastSine * along.Length)
-        {
-            return true;
-        }
-
-        values.Diagnostics.Error(
-            end.Spec.Plane!.At, $"{whose}: the plane it is to be cut on runs along the tube and never crosses it; give the plane another normal");
-        return false;
-    }
-
-    private static EndRequest? Request(EndCutSpec spec, string whose, double gap, Reflection? reflection, SpecValues values)
-    {
+        string whose = $"tube {draft.Name}, {end} end";
         double? extend = spec.Extend is null ? null : values.Of(spec.Extend);
         double? endGap = values.NotNegative(spec.Gap, $"{whose}: gap", gap);
         if (spec is { Cut: RequestedCut.Cope, Extend: not null })
@@ -146,18 +130,37 @@ internal static class TubePlacement
             return null;
         }
 
+        double? vent = spec.Vent is null ? null : values.Positive(spec.Vent, $"{whose}: vent");
+        if (spec.Vent is not null && vent is null)
+        {
+            return null;
+        }
+
         Vector3? plane = spec.Plane is null ? null : values.Direction(spec.Plane, $"{whose}: plane");
         if (spec.Plane is not null && plane is null)
         {
             return null;
         }
 
-        plane = plane is { } written && reflection is not null ? reflection.Of(written) : plane;
-        return endGap is { } g && (spec.Extend is null || extend is not null) ? new EndRequest(spec, extend, g, plane) : null;
+        plane = plane is { } written && draft.Original is not null ? mirror!.Of(written) : plane;
+        return endGap is { } g && (spec.Extend is null || extend is not null) ? new EndRequest(whose, spec, extend, g, plane, vent) : null;
     }
 
-    private sealed record EndRequest(EndCutSpec Spec, double? Extend, double Gap, Vector3? Plane)
+    private sealed record EndRequest(string Whose, EndCutSpec Spec, double? Extend, double Gap, Vector3? Plane, double? Vent)
     {
-        public TubeEnd At(int node, Vector3 point) => new(node, point, Spec.Cut, Extend, Gap, Spec.Wrap, Spec.At) { Plane = Plane };
+        public TubeEnd At(int node, Vector3 point) => new(node, point, Spec.Cut, Extend, Gap, Spec.Wrap, Spec.At) { Plane = Plane, Vent = Vent };
+
+        // A plane along the tube never crosses it.
+        public bool IsAcross(Vector3 along, SpecValues values)
+        {
+            if (Plane is not { } normal || Math.Abs(normal.Dot(along)) > LeastSine * along.Length)
+            {
+                return true;
+            }
+
+            values.Diagnostics.Error(
+                Spec.Plane!.At, $"{Whose}: the plane it is to be cut on runs along the tube and never crosses it; give the plane another normal");
+            return false;
+        }
     }
 }

@@ -21,6 +21,8 @@ internal static class DevelopedPattern
         {
             new Polyline(PaperLayers.Cut, [.. pattern.From.Line, .. pattern.To.Line.Reverse()], Closed: true),
         };
+        shapes.AddRange(pattern.From.Holes);
+        shapes.AddRange(pattern.To.Holes);
         ScribeLines(pattern, shapes);
         BendMarks.Draw(pattern, shapes);
         Words(pattern, shapes);
@@ -46,6 +48,19 @@ internal static class DevelopedPattern
             {
                 double half = pattern.Perimeter / 2;
                 shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(-half, end.Datum), new(half, end.Datum)));
+                FoldLines(pattern, end, shapes);
+            }
+        }
+    }
+
+    /// <summary>The middles of a flat-sided tube's corners, from the cut line to the datum line: where a paper is folded.</summary>
+    private static void FoldLines(PartPattern pattern, PatternEnd end, List<Shape> shapes)
+    {
+        if (pattern.Section.Outline is FlatSidedOutline outline)
+        {
+            foreach (double x in outline.CornerMiddles)
+            {
+                shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, end.At(x)), new(x, end.Datum)));
             }
         }
     }
@@ -109,6 +124,11 @@ internal static class DevelopedPattern
         words.Add(EndWords(pattern, pattern.From));
         words.Add(EndWords(pattern, pattern.To));
         words.AddRange(BendMarks.Words(pattern));
+        if (pattern.Section.Outline is FlatSidedOutline)
+        {
+            words.Add("Short lines between cut and datum: middles of the corners, to fold on");
+        }
+
         words.Add(PartWords.Origin(pattern.Sized.Model));
         words.Add(Cautions.WeldShrinkage);
         words.Add(Cautions.OnDrawings);

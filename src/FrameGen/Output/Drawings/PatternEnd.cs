@@ -1,3 +1,4 @@
+using FrameGen.Formats.Drawings;
 using FrameGen.Geometry;
 using FrameGen.Joints;
 using FrameGen.Model;
@@ -30,6 +31,9 @@ internal sealed class PatternEnd
         line[0] = line[0] with { X = -pattern.Perimeter / 2 };
         line[^1] = line[^1] with { X = pattern.Perimeter / 2 };
         Line = line;
+        Holes = Cut.Vent is { } vent
+            ? [new Polyline(PaperLayers.Cut, [.. vent.Developed(pattern.Section.Outline).Select(p => end == End.From ? p : new Point2(p.X, length - p.Y))], Closed: true)]
+            : [];
         Deepest = end == End.From ? Cut.Outer.Max : length - Cut.Outer.Max;
         Tip = end == End.From ? Cut.Outer.Min : length - Cut.Outer.Min;
         double step = pattern.DatumStep;
@@ -39,6 +43,9 @@ internal sealed class PatternEnd
 
     /// <summary>Least height of the band between a cut line and its datum line, in heights of plain text: two rows of it.</summary>
     public const double KeepBand = 4.4;
+
+    /// <summary>Breathing holes near it, as closed lines to cut.</summary>
+    public IReadOnlyList<Polyline> Holes { get; }
 
     /// <summary>Which end.</summary>
     public End End { get; }

@@ -87,7 +87,7 @@ internal static class FrameKeys
         new("gap", NotNegative(QuantityKind.Length), "left between this coped end and its mates", "0.2 mm");
 
     private static readonly Key<SpecQuantity> Vent =
-        new("vent", Positive(QuantityKind.Length), "diameter of a breathing hole near this end", "4 mm") { IsNotSupportedYet = true };
+        new("vent", Positive(QuantityKind.Length), "diameter of a breathing hole near this end", "4 mm");
 
     private static readonly Key<bool> Wrap = new("wrap", Flag, "true where the tube may be wider than its seat", "true");
 
@@ -98,6 +98,7 @@ internal static class FrameKeys
             map.Find(EndCut)?.Cut ?? RequestedCut.Default, map.Find(Extend), map.Find(EndGap), map.FindValue(Wrap) ?? false, map.At)
         {
             Plane = map.Find(EndCut)?.Plane,
+            Vent = map.Find(Vent),
         },
         CheckEnd);
 
