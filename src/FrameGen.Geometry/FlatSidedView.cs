@@ -56,7 +56,7 @@ internal sealed class FlatSidedView : OutlineView
     public override double Far(double u)
     {
         u = Math.Clamp(u, -HalfWidth, HalfWidth);
-        ref readonly Piece piece = ref _pieces[PieceAt(u)];
+        ref readonly Piece piece = ref _pieces[BreaksBelow(u)];
         double from = u - piece.U;
         if (!double.IsNaN(piece.Slope))
         {
@@ -68,7 +68,9 @@ internal sealed class FlatSidedView : OutlineView
     }
 
     /// <inheritdoc/>
-    public override int PieceAt(double u)
+    public override int PieceAt(double u) => BreaksBelow(u - Outline.Graze);
+
+    private int BreaksBelow(double u)
     {
         int piece = 0;
         while (piece < _breaks.Length && u > _breaks[piece])

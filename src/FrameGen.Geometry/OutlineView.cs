@@ -35,7 +35,10 @@ public abstract class OutlineView
     /// <param name="u">mm.</param>
     public virtual (double Near, double Far) Chord(double u) => (-Far(-u), Far(u));
 
-    /// <summary>Which smooth piece of the far side a line leaves by: how many <see cref="Breaks"/> lie below it.</summary>
+    /// <summary>
+    /// Which smooth piece of the far side a line leaves by: how many <see cref="Breaks"/> lie more than <see cref="Outline.Graze"/>
+    /// below it, so that rounding can't choose for a flat of lines that all leave at a break.
+    /// </summary>
     /// <param name="u">mm.</param>
     public abstract int PieceAt(double u);
 

@@ -16,7 +16,7 @@ internal sealed partial class CurveSampler
     public const double Coincident = 1e-6;
 
     /// <summary>Vertices no farther than this from the line of their neighbours are left out, mm.</summary>
-    private const double Straight = 1e-8;
+    private const double Straight = 1e-6;
 
     /// <summary>Pieces shorter than this are not looked for, rad: rounding alone can make such.</summary>
     private const double ShortestPiece = 1e-9;
@@ -27,6 +27,9 @@ internal sealed partial class CurveSampler
     private const int Looks = 64;
     private const int LooksAPanel = 4;
     private const int DeepestHalving = 46;
+
+    /// <summary>No true cut needs as many; should rounding flicker between pieces along a whole flat, the search ends here.</summary>
+    private const int MostSamples = 50_000;
 
     /// <summary>(3 − √5)/2: where the golden section looks next.</summary>
     private const double Golden = 0.38196601125010515;
@@ -124,7 +127,7 @@ internal sealed partial class CurveSampler
     // Adds everything after a up to b; where the piece changes between them, the corner too.
     private void Connect(in CutSample a, in CutSample b, int depth)
     {
-        if (b.AfterBreak)
+        if (b.AfterBreak || _trace.Count > MostSamples)
         {
             _trace.Add(b);
             return;
@@ -187,7 +190,7 @@ internal sealed partial class CurveSampler
     private void Halve(in CutSample a, in CutSample first, in CutSample middle, in CutSample third, in CutSample b, int depth)
     {
         bool samePiece = first.Piece == a.Piece && middle.Piece == a.Piece && third.Piece == a.Piece;
-        if (depth >= DeepestHalving || b.Clock - a.Clock < ShortestPiece ||
+        if (depth >= DeepestHalving || b.Clock - a.Clock < ShortestPiece || _trace.Count > MostSamples ||
             (samePiece && IsNear(a, first, b) && IsNear(a, middle, b) && IsNear(a, third, b)))
         {
             _trace.Add(b);

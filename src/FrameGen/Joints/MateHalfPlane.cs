@@ -53,7 +53,7 @@ internal sealed partial class Mate
                     }
 
                     double end = -depth / slope;
-                    if (end < t)
+                    if (end < t - Outline.Graze)
                     {
                         (t, onLimit) = (end, true);
                     }
@@ -101,7 +101,9 @@ internal sealed partial class Mate
                 top = End(low) >= End(high) ? low : high;
             }
 
-            int topPlace = top <= inner ? 0 : top >= outer ? 1 : top <= low || top >= high ? 4 : 2;
+            // A whole flat may have its summit at a skin or its limit on the mate's side: rounding must not choose there.
+            const double Graze = Outline.Graze;
+            int topPlace = top <= inner + Graze ? 0 : top >= outer - Graze ? 1 : top <= low + Graze || top >= high - Graze ? 4 : 2;
             if (!endsHere)
             {
                 (t, place) = (End(top), topPlace + (10 * PieceAt(top)));
@@ -110,8 +112,8 @@ internal sealed partial class Mate
 
             // Largest of min(t₂, limit): at the summit, where the two cross, or at an end of the interval.
             Consider(top, topPlace, limit0, limit1, ref t, ref place);
-            Consider(low, low <= inner ? 0 : 4, limit0, limit1, ref t, ref place);
-            Consider(high, high >= outer ? 1 : 4, limit0, limit1, ref t, ref place);
+            Consider(low, low <= inner + Graze ? 0 : 4, limit0, limit1, ref t, ref place);
+            Consider(high, high >= outer - Graze ? 1 : 4, limit0, limit1, ref t, ref place);
             if (Crossings(limit0, limit1, out double first, out double second, out _, out _))
             {
                 Consider(Math.Clamp(first, low, high), 3, limit0, limit1, ref t, ref place);
@@ -319,7 +321,7 @@ internal sealed partial class Mate
             if (value > t + Outline.Graze)
             {
                 // Where the two cross, which of them is lower is rounding and no corner.
-                (t, place) = (value, limit < end && candidate != 3 ? candidate + 5 : candidate + (10 * PieceAt(radius)));
+                (t, place) = (value, limit < end - Outline.Graze && candidate != 3 ? candidate + 5 : candidate + (10 * PieceAt(radius)));
             }
         }
 

@@ -49,7 +49,7 @@ internal sealed class RadialCope(ContourCope asMet, Outline inner, Outline outer
             }
         }
 
-        if (best < 0 && !Covers(met[..count], from, to))
+        if (best < -Outline.Graze && !Covers(met[..count], from, to))
         {
             piece = Nothing;
             return 0;

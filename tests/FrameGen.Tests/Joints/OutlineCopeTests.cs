@@ -196,6 +196,54 @@ public class OutlineCopeTests
         Assert.InRange(end.Outer.Points.Count, 2, 8);
     }
 
+    // A flat side that runs along an edge of its mate, or along where its flat meets a corner arc, lies on no piece but by rounding.
+    [Theory]
+    [InlineData(60, 60, 0, 90)]
+    [InlineData(60, 60, 0, 60)]
+    [InlineData(60, 60, 0, 35)]
+    [InlineData(48, 60, 6, 90)]
+    [InlineData(48, 60, 6, 70)]
+    [InlineData(60, 60, 6, 60)]
+    public void A_flat_along_an_edge_of_its_mate_is_cut_straight(double size, double mate, double corner, double degrees)
+    {
+        double angle = degrees * Math.PI / 180;
+        foreach (CutMode mode in (CutMode[])[CutMode.Contour, CutMode.Radial])
+        {
+            CutFrame cut = Tee(new FlatSidedTube(size, size, 3, 0), new FlatSidedTube(mate, mate, 3, corner), degrees, 0, 0, 0, mode).Cut();
+            EndCut end = cut.Tubes[1].From;
+            Assert.InRange(end.Outer.Points.Count, 2, size < mate || corner == 0 ? 14 : 120);
+            if (mode == CutMode.Contour && (size < mate || corner == 0))
+            {
+                // On the flat all over: the plane at half the mate's height.
+                double area = (size * size) - ((size - 6) * (size - 6));
+                Assert.Equal(1, cut.Tubes[1].Volume / (area * (400 - (mate / 2 / Math.Sin(angle)))), 1e-9);
+            }
+        }
+    }
+
+    [Theory]
+    [InlineData(90)]
+    [InlineData(60)]
+    [InlineData(115)]
+    public void A_corner_of_equal_square_tubes_has_straight_cuts(double degrees)
+    {
+        double angle = degrees * Math.PI / 180;
+        foreach (CutMode mode in (CutMode[])[CutMode.Contour, CutMode.Radial])
+        {
+            FrameBuilder frame = new() { Mode = mode };
+            int node = frame.Node(Vector3.Zero);
+            int first = frame.Tube(node, frame.Node(new Vector3(400, 0, 0)), new FlatSidedTube(40, 40, 3, 0));
+            int coped = frame.Tube(node, frame.Node(400 * new Vector3(Math.Cos(angle), Math.Sin(angle), 0)), new FlatSidedTube(40, 40, 3, 0));
+            frame.Joint(node, null, Corner.RunOut, new TubeEndId(first, End.From), new TubeEndId(coped, End.From));
+            CutFrame cut = frame.Cut();
+
+            // (r - R cos φ) / sin φ past the node, and the cut of the other at half its height over the first one's flat.
+            Assert.Equal(20 * (1 - Math.Cos(angle)) / Math.Sin(angle), -cut.Tubes[first].From.Outer.Min, 1e-9);
+            Assert.InRange(cut.Tubes[coped].From.Outer.Points.Count, 2, 14);
+            Assert.Equal((20 + (20 * Math.Abs(Math.Cos(angle)))) / Math.Sin(angle), cut.Tubes[coped].From.Outer.Max, 1e-9);
+        }
+    }
+
     [Fact]
     public void A_flat_cut_square_is_the_tube_s_length_less_half_the_mate()
     {
