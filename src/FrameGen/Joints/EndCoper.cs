@@ -57,9 +57,10 @@ public static class EndCoper
             }
 
             Section section = sized.SectionOf(i);
-            if (model.Tubes[i].Bent is null && TubeOverlap.Find(model.Tubes[i], section, first.Cut, last.Cut) is { } overlap)
+            if (model.Tubes[i].Bent is null
+                && TubeOverlap.Find(model.Tubes[i], section, first.Cut, last.Cut, model.Fabrication.Tolerance) is { } left)
             {
-                JointReport.ReportOverlap(model, i, overlap, diagnostics);
+                JointReport.ReportOverlap(model, i, left, first.Cut, last.Cut, diagnostics);
                 failed = true;
                 continue;
             }

@@ -95,7 +95,9 @@ internal static class JointReport
         if (wide is not null)
         {
             string seat = model.Tubes[wide.Mate].Name;
-            string open = cut.PartlyMissing ? $"; {Open}" : string.Empty;
+            double beside = wide.Needed - wide.Allowed;
+            string open = beside < model.Fabrication.Tolerance ? $"; the wall it leaves beside the seat is {beside:0.0###} mm thick, less than the tolerance of {model.Fabrication.Tolerance:0.0###} mm"
+                : cut.PartlyMissing ? $"; {Open}" : string.Empty;
             diagnostics.Warning(place.At, $"{name}: is wider than its seat {seat}: half its width and the axes' offset make {wide.Needed:0.0##} mm, half the seat's width is {wide.Allowed:0.0##} mm{open}; {Remedy}");
         }
         else if (cut.PartlyMissing && place.Wrap)
@@ -117,13 +119,34 @@ internal static class JointReport
         }
     }
 
-    /// <summary>Ends that run into each other.</summary>
-    public static void ReportOverlap(FrameModel model, int index, double overlap, DiagnosticList diagnostics)
+    /// <summary>A tube of which the cuts leave nothing on some wall line: it lies within its mates, or its ends run into each other.</summary>
+    /// <param name="model">The frame.</param>
+    /// <param name="index">The tube.</param>
+    /// <param name="left">The least length left of a wall line, mm; negative where the cuts overlap.</param>
+    /// <param name="first">Its from end.</param>
+    /// <param name="last">Its to end.</param>
+    /// <param name="diagnostics">Takes the error.</param>
+    public static void ReportOverlap(FrameModel model, int index, double left, EndCut first, EndCut last, DiagnosticList diagnostics)
     {
         Tube tube = model.Tubes[index];
+        foreach (End end in (ReadOnlySpan<End>)[End.From, End.To])
+        {
+            EndCut cut = end == End.From ? first : last;
+            double least = Math.Min(cut.Outer.Min, cut.Inner.Min);
+            if (cut.Contacts.Count > 0 && least >= tube.Length)
+            {
+                string mates = string.Join(" and ", cut.Contacts.Select(c => model.Tubes[c.Tube].Name));
+                string how = cut.Contacts.Count == 1 ? "is swallowed whole by" : "lies hidden inside";
+                diagnostics.Error(tube[end].At, $"tube {tube.Name}, {Word(end)} end at node {model.Nodes[tube[end].Node].Name}: {how} {mates}: it would come out {least:0.0##} mm from the node, and is only {tube.Length:0.0##} mm long; make it longer, the tubes round it smaller, or leave it out");
+                return;
+            }
+        }
+
         string from = model.Nodes[tube.From.Node].Name;
         string to = model.Nodes[tube.To.Node].Name;
-        diagnostics.Error(tube.At, $"tube {tube.Name}: its cuts at nodes {from} and {to} overlap by {overlap:0.0##} mm, so that nothing is left of it on one side; move the nodes apart, or change the `order` at one of them");
+        diagnostics.Error(tube.At, left > 0
+            ? $"tube {tube.Name}: between its cuts at nodes {from} and {to} only {left:0.0###} mm of its wall is left on one side, less than the tolerance of {model.Fabrication.Tolerance:0.0###} mm; move the nodes apart, or change the `order` at one of them"
+            : $"tube {tube.Name}: its cuts at nodes {from} and {to} overlap by {-left:0.0##} mm, so that nothing is left of it on one side; move the nodes apart, or change the `order` at one of them");
     }
 
     /// <summary>Breathing holes that can't be drilled.</summary>

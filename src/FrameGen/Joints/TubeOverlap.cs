@@ -4,14 +4,17 @@ using FrameGen.Model;
 
 namespace FrameGen.Joints;
 
-/// <summary>Whether the cuts of a short tube's two ends run into each other on any wall line.</summary>
+/// <summary>Whether the cuts of a short tube's two ends run into each other on any wall line, or all but do.</summary>
 internal static class TubeOverlap
 {
     private const int Looks = 240;
     private const int Depths = 8;
 
-    /// <summary>The largest overlap over all wall lines, mm; null where every line keeps a length.</summary>
-    public static double? Find(Tube tube, Section section, EndCut from, EndCut to)
+    /// <summary>
+    /// The least length that the cuts leave of any wall line, mm, negative where they overlap; null where every line keeps at
+    /// least the tolerance.
+    /// </summary>
+    public static double? Find(Tube tube, Section section, EndCut from, EndCut to, double tolerance)
     {
         // Cuts bulge within a wall by less than they vary round it: twice what the skins reach is surely clear.
         double reach = Reach(from) + Reach(to) + (2 * section.OuterSize);
@@ -34,7 +37,7 @@ internal static class TubeOverlap
             worst = Math.Max(worst, point.T + from.Surface.At(point.Clock, outer));
         }
 
-        return worst >= tube.Length ? worst - tube.Length : null;
+        return tube.Length - worst < tolerance ? tube.Length - worst : null;
     }
 
     // The most that both cuts together take from a wall line.

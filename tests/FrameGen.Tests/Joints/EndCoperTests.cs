@@ -184,6 +184,68 @@ public class EndCoperTests
     }
 
     [Fact]
+    public void A_wall_thinner_than_the_tolerance_is_refused_with_its_numbers()
+    {
+        // Between two tubes of radius 30 that stand 60.01 mm apart 0.01 mm is left.
+        FrameBuilder frame = new();
+        int left = frame.Node(Vector3.Zero, through: 0);
+        int right = frame.Node(new Vector3(60.01, 0, 0), through: 1);
+        frame.Tube(frame.Node(new Vector3(0, -200, 0)), frame.Node(new Vector3(0, 200, 0)), new RoundTube(60, 2));
+        frame.Tube(frame.Node(new Vector3(60.01, -200, 0)), frame.Node(new Vector3(60.01, 200, 0)), new RoundTube(60, 2));
+        frame.Tube(left, right, new RoundTube(30, 2));
+        frame.Joint(left, 0, Corner.None, new TubeEndId(2, End.From));
+        frame.Joint(right, 1, Corner.None, new TubeEndId(2, End.To));
+        (CutFrame? cut, DiagnosticList said) = Cope(frame);
+        Assert.Null(cut);
+        Assert.Contains(
+            "between its cuts at nodes n0 and n1 only 0.01 mm of its wall is left on one side, less than the tolerance of 0.02 mm",
+            Assert.Single(said).Message,
+            StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_tongue_thinner_than_the_tolerance_beside_a_seat_is_warned_of()
+    {
+        (CutFrame? cut, DiagnosticList said) = Cope(Tee.Frame(15, new RoundTube(30.02, 2), 1.2, 0));
+        Assert.NotNull(cut);
+        Assert.Contains(
+            "the wall it leaves beside the seat is 0.01 mm thick, less than the tolerance of 0.02 mm", Assert.Single(said).Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_tube_swallowed_whole_by_its_mate_is_refused()
+    {
+        // Square to a tube of radius 50: the lines 10 mm beside the middle come out first, at sqrt(50² - 10²) = 48.990.
+        FrameBuilder frame = new();
+        int node = frame.Node(Vector3.Zero, through: 0);
+        frame.Tube(frame.Node(new Vector3(0, -200, 0)), frame.Node(new Vector3(0, 200, 0)), new RoundTube(100, 3));
+        frame.Tube(node, frame.Node(new Vector3(30, 0, 0)), new RoundTube(20, 2));
+        frame.Joint(node, 0, Corner.None, new TubeEndId(1, End.From));
+        (CutFrame? cut, DiagnosticList said) = Cope(frame);
+        Assert.Null(cut);
+        Assert.Contains(
+            "tube t1, from end at node n0: is swallowed whole by t0: it would come out 48.99 mm from the node, and is only 30.0 mm long",
+            Assert.Single(said).Message,
+            StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_tube_hidden_inside_a_cluster_is_refused()
+    {
+        // Along the diagonal between two square tubes of half-width 30, which it leaves at 30 sqrt(2) = 42.426.
+        FrameBuilder frame = new();
+        int node = frame.Node(Vector3.Zero);
+        frame.Tube(node, frame.Node(new Vector3(400, 0, 0)), new FlatSidedTube(60, 60, 3, 0));
+        frame.Tube(node, frame.Node(new Vector3(0, 400, 0)), new FlatSidedTube(60, 60, 3, 0));
+        frame.Tube(node, frame.Node(new Vector3(25, 25, 0)), new RoundTube(10, 1));
+        frame.Joint(node, null, Corner.None, new TubeEndId(0, End.From), new TubeEndId(1, End.From), new TubeEndId(2, End.From));
+        (CutFrame? cut, DiagnosticList said) = Cope(frame);
+        Assert.Null(cut);
+        Assert.Contains(
+            said, d => d.Message.Contains("tube t2, from end at node n0: lies hidden inside t0 and t1: it would come out 42.426 mm from the node", StringComparison.Ordinal));
+    }
+
+    [Fact]
     public void Extend_on_a_coped_end_is_refused()
     {
         (CutFrame? cut, DiagnosticList said) = Cope(Tee.Frame(20, new RoundTube(30, 2), 1.2, 0, change: e => e with { Extend = 5 }));
