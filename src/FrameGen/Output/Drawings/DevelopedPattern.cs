@@ -56,12 +56,9 @@ internal static class DevelopedPattern
     /// <summary>The middles of a flat-sided tube's corners, from the cut line to the datum line: where a paper is folded.</summary>
     private static void FoldLines(PartPattern pattern, PatternEnd end, List<Shape> shapes)
     {
-        if (pattern.Section.Outline is FlatSidedOutline outline)
+        foreach (double x in pattern.FoldLines)
         {
-            foreach (double x in outline.CornerMiddles)
-            {
-                shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, end.At(x)), new(x, end.Datum)));
-            }
+            shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, end.At(x)), new(x, end.Datum)));
         }
     }
 
@@ -124,7 +121,7 @@ internal static class DevelopedPattern
         words.Add(EndWords(pattern, pattern.From));
         words.Add(EndWords(pattern, pattern.To));
         words.AddRange(BendMarks.Words(pattern));
-        if (pattern.Section.Outline is FlatSidedOutline)
+        if (pattern.FoldLines.Count > 0)
         {
             words.Add("Short lines between cut and datum: middles of the corners, to fold on");
         }

@@ -1,4 +1,5 @@
 using FrameGen.Fabrication;
+using FrameGen.Geometry;
 using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Sizing;
@@ -24,6 +25,7 @@ internal sealed class PartPattern
         Perimeter = Section.Perimeter;
         Radius = Perimeter / (2 * Math.PI);
         TextHeight = Math.Clamp(Math.Round(Perimeter / 48, 1), 1.6, 2.6);
+        FoldLines = Section.Outline is FlatSidedOutline flat ? flat.CornerMiddles : [];
         From = new PatternEnd(this, End.From);
         To = new PatternEnd(this, End.To);
     }
@@ -54,6 +56,9 @@ internal sealed class PartPattern
 
     /// <summary>Height of plain text, mm: readable on a thin tube, at ease on a thick one.</summary>
     public double TextHeight { get; }
+
+    /// <summary>x of the middles of a flat-sided tube's corners, mm: where a paper is folded. None on other tubes.</summary>
+    public IReadOnlyList<double> FoldLines { get; }
 
     /// <summary>The from end.</summary>
     public PatternEnd From { get; }

@@ -37,7 +37,10 @@ internal sealed class PatternEnd
         Deepest = end == End.From ? Cut.Outer.Max : length - Cut.Outer.Max;
         Tip = end == End.From ? Cut.Outer.Min : length - Cut.Outer.Min;
         double step = pattern.DatumStep;
-        double wanted = Deepest + (Inward * KeepBand * pattern.TextHeight);
+
+        // A vent stands clear of the words between it and the datum line.
+        double cleared = Holes.SelectMany(h => h.Points).Select(p => p.Y).Aggregate(Deepest, Deeper);
+        double wanted = cleared + (Inward * KeepBand * pattern.TextHeight);
         Datum = !IsFitted ? Deepest : step * (end == End.From ? Math.Ceiling(wanted / step) : Math.Floor(wanted / step));
     }
 

@@ -149,6 +149,16 @@ internal sealed class TemplatePieceSketch
             words.Add(new(bends));
         }
 
+        if (_pattern.FoldLines.Count > 0)
+        {
+            words.Add(new("Lines between TOP and the quarters: the corners, to fold on"));
+        }
+
+        if (_end.Cut.Vent is { } vent)
+        {
+            words.Add(new(string.Create(CultureInfo.InvariantCulture, $"Small circle: drill {vent.Diameter:0.###}{TextFit.Tie}mm vent through this wall")));
+        }
+
         words.Add(new($"Arrows point to the {otherName} end, at {PartWords.NodeName(_pattern, other.End)}"));
         words.Add(new(PartWords.Section(_pattern)));
         words.Add(new(PartWords.Tubes(_pattern)));
@@ -166,15 +176,19 @@ internal sealed class TemplatePieceSketch
     /// <summary>A length whose number and unit stay on one line.</summary>
     private string Measure(double mm) => _pattern.Display.MeasuredLength(mm).Replace(' ', TextFit.Tie);
 
-    /// <summary>KEEP side on CUT, the paper's other edges on TRIM; they share no segment.</summary>
+    /// <summary>KEEP side and vents on CUT, the paper's other edges on TRIM; they share no segment.</summary>
     private void Outline(double baseEdge)
     {
-        List<Point2> line = [.. _end.Line.Select(p => p with { X = _scale * p.X })];
+        List<Point2> line = Wrapped(_end.Line);
         Point2 left = line[0];
         Point2 right = line[^1];
         _shapes.Add(new Polyline(PaperLayers.Cut, [.. line, new(_half, baseEdge), new(-_half, baseEdge)], Closed: true));
         _shapes.Add(new Polyline(PaperLayers.Trim, [left, new(-_half, WasteEdge), new(_half, WasteEdge), right], Closed: false));
+        _shapes.AddRange(_end.Holes.Select(h => h with { Points = Wrapped(h.Points) }));
     }
+
+    /// <summary>Widened round the tube for the paper's thickness.</summary>
+    private List<Point2> Wrapped(IReadOnlyList<Point2> points) => [.. points.Select(p => p with { X = _scale * p.X })];
 
     /// <summary>The glue tab on the right-hand edge; it goes under the left-hand one, where it must not reach over the cut line.</summary>
     private void Tab(double baseEdge)
@@ -210,7 +224,7 @@ internal sealed class TemplatePieceSketch
         }
     }
 
-    /// <summary>Top and quarter lines from the cut to the datum, and their ends at the base edge; the datum from edge to edge and across the tab.</summary>
+    /// <summary>Top, quarter and fold lines from the cut to the datum, and their ends at the base edge; the datum from edge to edge and across the tab.</summary>
     private void ScribeLines(double baseEdge)
     {
         double size = BandText(_text, _half / 2);
@@ -220,6 +234,13 @@ internal sealed class TemplatePieceSketch
         {
             double x = quarter * _half / 2;
             _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, _end.At(x / _scale)), new(x, _end.Datum)));
+            _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, baseEdge), new(x, tick)));
+        }
+
+        foreach (double corner in _pattern.FoldLines)
+        {
+            double x = corner * _scale;
+            _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, _end.At(corner)), new(x, _end.Datum)));
             _shapes.Add(Polyline.Segment(PaperLayers.Scribe, new(x, baseEdge), new(x, tick)));
         }
 
