@@ -19,7 +19,7 @@ public class DemoBuildTests
         print(json.dumps(out))
         """;
 
-    public static TheoryData<string> Demos => ["quayside-trailer", "tarn-truss"];
+    public static TheoryData<string> Demos => ["quayside-trailer", "tarn-truss", "lock-gantry"];
 
     [Theory]
     [MemberData(nameof(Demos))]
