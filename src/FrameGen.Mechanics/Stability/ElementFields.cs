@@ -42,6 +42,12 @@ internal readonly ref struct ElementFields
         _xz = new Plane(length, stiffness[3], stiffness[5], 0, startHinged: false, endHinged: false);
     }
 
+    /// <summary>EI, N·mm², and GA, N, of movement along local y; EI is 0 where an end is hinged, GA infinite where shear does not count.</summary>
+    public (double Bending, double Shear) RigidityInY => _xy.Rigidity;
+
+    /// <summary>EI, N·mm², and GA, N, of movement along local z.</summary>
+    public (double Bending, double Shear) RigidityInZ => _xz.Rigidity;
+
     /// <summary>Displacement along local x at ξ = x/L.</summary>
     public void Along(double xi, Span<double> field) => Linear(_element.Axes.X, xi, asRotation: false, field);
 
@@ -116,7 +122,10 @@ internal readonly ref struct ElementFields
             _phi = shearing > 0 && even > 0 ? Math.Max(0, (12 * even / (length * length * shearing)) - 1)
                 : hingeShear > 0 ? Math.Max(0, (6 / (length * hingeShear)) - 4)
                 : 0;
+            Rigidity = startHinged || endHinged ? (0, double.PositiveInfinity) : (even * length, 12 * even / (_phi * length));
         }
+
+        public (double Bending, double Shear) Rigidity { get; }
 
         public (double V1, double T1, double V2, double T2) Deflection(double x)
         {

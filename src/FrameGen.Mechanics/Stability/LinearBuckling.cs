@@ -44,7 +44,7 @@ public static class LinearBuckling
 
         var found = new BlockLanczos(frame, Softening(frame, forces, Noise * largest), count: 1, block: 1).Largest();
         return found.Count == 1 && found[0].Theta > 0
-            ? new BucklingMode(1 / found[0].Theta, found[0].Residual, new ModeShape(frame.Layout, found[0].Vector))
+            ? new BucklingMode(InnerResponse.Factor(frame, forces, found[0].Theta, found[0].Vector), found[0].Residual, new ModeShape(frame.Layout, found[0].Vector))
             : null;
     }
 

@@ -31,7 +31,8 @@ public static class NaturalFrequencies
             ? []
             : new BlockLanczos(frame, Matrix(frame, mass), count, count + 1).Largest();
         return [.. found.Where(f => f.Theta > 0).Select(f => new VibrationMode(
-            Math.Sqrt(PerSquareSecond / f.Theta) / (2 * Math.PI), f.Residual, new ModeShape(frame.Layout, f.Vector)))];
+            Math.Sqrt(PerSquareSecond * InnerResponse.Eigenvalue(frame, mass, f.Theta, f.Vector)) / (2 * Math.PI), f.Residual, new ModeShape(frame.Layout, f.Vector)))
+            .OrderBy(m => m.Hertz)];
     }
 
     private static SymmetricBlocks Matrix(FactoredFrame frame, FrameMass mass)

@@ -8,9 +8,10 @@ namespace FrameGen.Mechanics.Stability;
 /// their numbers, so restraints and nodal loads hold for both; the new ones follow.
 /// </summary>
 /// <remarks>
-/// How fine: with k the wave number, √(N/EI) of a column or (μω²/EI)^¼ of a beam, and h an element's length, a cubic element puts the
-/// eigenvalue too high by (kh)⁴/720 of itself. The lowest buckling factor never goes beyond the first at which some span, clamped at both
-/// ends, would buckle, kL = 2π: eight elements a span leave 0.05 %.
+/// How fine: with k the wave number, √(N/EI) of a column or (μω²/EI)^¼ of a beam, h an element's length, a cubic element puts the eigenvalue too high by (kh)⁴/720 of itself,
+/// and by (kh)²/12 of the part that shear has in the movement, over 1 % in stout tubes. The first order of both is taken off again (<see cref="InnerResponse"/>). The lowest
+/// buckling factor never goes beyond the first at which some span, clamped at both ends, would buckle, kL = 2π: eight elements a span then leave less than 0.1 % down to spans of
+/// three diameters. Waves of stretch and twist keep their (kh)²/24 of a frequency: those of a span lie far above the frame's first.
 /// </remarks>
 public sealed class RefinedFrame
 {

@@ -49,6 +49,32 @@ public class BucklingTests
         Assert.Equal(expected, column.Buckling()!.Factor, expected * 1e-5);
     }
 
+    // F. Engesser's columns from slender to stout, with the elements that a frame gets: within a thousandth, clamped ends, where the waves are shortest, included.
+    [Theory]
+    [InlineData(3)]
+    [InlineData(4)]
+    [InlineData(6)]
+    [InlineData(10)]
+    [InlineData(20)]
+    [InlineData(40)]
+    public void The_elements_of_a_span_are_enough_for_stout_columns_too(double diameters)
+    {
+        double length = diameters * Tube.OutsideDiameter;
+        double shear = Tube.ShearAreas(0.3).Y;
+        Check("111111", "110111", 0.5);
+        Check("111001", "110001", 1);
+        Check("111111", "000000", 2);
+
+        void Check(string foot, string head, double buckling)
+        {
+            double euler = Math.PI * Math.PI * E * Tube.Iy / (buckling * buckling * length * length);
+            double expected = euler / (1 + (euler / (G * shear)));
+            var column = new DividedFrame(RefinedFrame.ElementsPerSpan, "000000", Vector3.Zero, new Vector3(0, 0, length));
+            column.Profile(Profile(shear)).Member(0, 1).Hold(0, foot).Hold(1, head).Load(1, new Vector3(0, 0, -1));
+            Assert.InRange(column.Buckling()!.Factor / expected, 1 - 1e-6, 1.001);
+        }
+    }
+
     [Fact]
     public void A_column_under_its_own_weight()
     {

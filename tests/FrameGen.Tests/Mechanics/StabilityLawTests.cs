@@ -17,11 +17,28 @@ public class StabilityLawTests
     {
         (double[] Factor, double[] Hertz) fine = (Factors(Tower(Identity), 32), Hertz(Tower(Identity), 32));
         (double[] Factor, double[] Hertz) used = (Factors(Tower(Identity), RefinedFrame.ElementsPerSpan), Hertz(Tower(Identity), RefinedFrame.ElementsPerSpan));
-        Assert.All(fine.Factor.Zip(used.Factor), pair => Assert.InRange(pair.Second / pair.First, 1 - 1e-9, 1.001));
-        Assert.All(fine.Hertz.Zip(used.Hertz), pair => Assert.InRange(pair.Second / pair.First, 1 - 1e-9, 1.001));
+        Assert.All(fine.Factor.Zip(used.Factor), pair => Assert.InRange(pair.Second / pair.First, 1 - 1e-5, 1.001));
+        Assert.All(fine.Hertz.Zip(used.Hertz), pair => Assert.InRange(pair.Second / pair.First, 1 - 1e-5, 1.001));
 
-        // Fewer would not do: two are off by more.
-        Assert.True(Factors(Tower(Identity), 2)[0] / fine.Factor[0] > 1.001);
+        // Fewer would not do: one is off by more.
+        Assert.True(Factors(Tower(Identity), 1)[0] / fine.Factor[0] > 1.001);
+    }
+
+    // Clamped and pinned beams from slender to stout, the first frequency both ways.
+    [Theory]
+    [InlineData(4)]
+    [InlineData(6)]
+    [InlineData(10)]
+    [InlineData(30)]
+    public void Eight_elements_are_enough_for_stout_spans_too(double diameters)
+    {
+        foreach (string far in new[] { "111111", "111000", "000000" })
+        {
+            FrameSketch span = new FrameSketch().Node(0, 0, 0).Node(38 * diameters, 0, 0).Tube(0, 1).Hold(0, "111111").Hold(1, far);
+            double[] fine = Modes(span, 64, 2, Density, []);
+            double[] used = Modes(span, RefinedFrame.ElementsPerSpan, 2, Density, []);
+            Assert.All(fine.Zip(used), pair => Assert.InRange(pair.Second / pair.First, 1 - 1e-6, 1.001));
+        }
     }
 
     [Fact]
