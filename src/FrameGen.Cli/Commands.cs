@@ -20,6 +20,7 @@ internal static class Commands
             Build(terminal),
             Check(terminal),
             Size(terminal),
+            Explain(terminal),
             Freeze(terminal),
             CompareOptions.Command(terminal),
             Verify(terminal),
@@ -111,6 +112,22 @@ internal static class Commands
         var command = new Command("size", "Choose the lightest sections that meet the targets, and say why. Writes nothing.") { spec, json };
         command.SetAction((Func<ParseResult, int>)(r => new SizeCommand(terminal, r.GetRequiredValue(spec), r.GetValue(json)).Run()));
         Examples(command, "framegen size specs/quayside-trailer.yaml");
+        return command;
+    }
+
+    private static Command Explain(Terminal terminal)
+    {
+        Argument<string> spec = Spec();
+        var tube = new Argument<string>("TUBE") { Description = "The tube's name." };
+        Option<bool> json = Json();
+        var command = new Command(
+            "explain",
+            "Why a tube has its size: what the next lighter sizes break, which targets drive it and how much, the forces along it; and what cuts its ends. Writes nothing.")
+        {
+            spec, tube, json,
+        };
+        command.SetAction((Func<ParseResult, int>)(r => new ExplainCommand(terminal, r.GetRequiredValue(spec), r.GetRequiredValue(tube), r.GetValue(json)).Run()));
+        Examples(command, "framegen explain specs/quayside-trailer.yaml rail-l");
         return command;
     }
 

@@ -59,7 +59,7 @@ internal sealed class CompareCommand(Terminal terminal, CompareRequest request)
             }
         }
 
-        int? tube = sized is null ? null : FindTube(sized.Model);
+        int? tube = sized is null ? null : TubeName.Find(sized.Model, request.Spec!, request.Tube);
         StiffnessNeed need = sized is null ? TargetNeed() : TubeNeed.Of(sized, tube!.Value, By(), Along());
         var supply = Supply.Of(spec);
         (Section Section, Material Material)? own = sized is null ? null : (sized.SectionOf(tube!.Value), MaterialOf(sized, tube.Value));
@@ -111,18 +111,6 @@ internal sealed class CompareCommand(Terminal terminal, CompareRequest request)
         {
             throw new WrongInputException($"{name} gives a target of its own, and a tube of a spec brings its own; leave one of them out");
         }
-    }
-
-    private int FindTube(FrameModel model)
-    {
-        string[] names = [.. model.Tubes.Select(t => t.Name)];
-        if (request.Tube is not { } name)
-        {
-            throw new WrongInputException($"which tube of {request.Spec}? It has {string.Join(", ", names.Take(20))}{(names.Length > 20 ? ", ..." : string.Empty)}");
-        }
-
-        int tube = Array.FindIndex(names, n => string.Equals(n, name, StringComparison.OrdinalIgnoreCase));
-        return tube >= 0 ? tube : throw new WrongInputException($"{request.Spec} has no tube {name}{NearestName.Suggest(name, names)}");
     }
 
     private StiffnessNeed TargetNeed()

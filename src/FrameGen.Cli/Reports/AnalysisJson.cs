@@ -60,14 +60,20 @@ internal static class AnalysisJson
         if (forces.Use is { } use)
         {
             json.WriteBoolean("near_weld", use.NearWeld);
-            json.WriteStartObject("shares");
-            json.Number("axial", JsonText.Quiet(use.Shares.Axial, 1));
-            json.Number("bending", JsonText.Quiet(use.Shares.Bending, 1));
-            json.Number("torsion", JsonText.Quiet(use.Shares.Torsion, 1));
-            json.Number("shear", JsonText.Quiet(use.Shares.Shear, 1));
-            json.WriteEndObject();
+            WriteShares(json, use.Shares);
         }
 
+        json.WriteEndObject();
+    }
+
+    /// <summary>Writes what a stress comes from as <c>shares</c>.</summary>
+    public static void WriteShares(Utf8JsonWriter json, StressShares shares)
+    {
+        json.WriteStartObject("shares");
+        json.Number("axial", JsonText.Quiet(shares.Axial, 1));
+        json.Number("bending", JsonText.Quiet(shares.Bending, 1));
+        json.Number("torsion", JsonText.Quiet(shares.Torsion, 1));
+        json.Number("shear", JsonText.Quiet(shares.Shear, 1));
         json.WriteEndObject();
     }
 

@@ -1,5 +1,6 @@
 using FrameGen.Diagnostics;
 using FrameGen.Mechanics.Materials;
+using FrameGen.Model;
 using FrameGen.Model.Resolving;
 using FrameGen.Spec;
 
@@ -32,6 +33,16 @@ public sealed class Supply
         error = material is null ? _diagnostics.Last(d => d.Severity == Severity.Error).Message : string.Empty;
         return material;
     }
+
+    /// <summary>Sizes that could stand in for one: of its shape, from the list that it comes from; empty where it comes from none.</summary>
+    public IReadOnlyList<Candidate> InPlaceOf(Candidate candidate, Material material) =>
+    [
+        .. _stock.SoldIn(material.Name)
+            .Where(list => string.Equals(list.Name, candidate.StockList, StringComparison.Ordinal))
+            .SelectMany(list => list.Sizes)
+            .Where(size => string.Equals(size.Section.Shape, candidate.Nominal.Shape, StringComparison.Ordinal))
+            .Select(size => new Candidate(size.Section, candidate.StockList, size.BarLength, size.PricePerMetre)),
+    ];
 
     /// <summary>The lightest size of a shape that is stiff enough, with a wall no thinner than a rule has it; of equal ones the cheaper, then the first by name.</summary>
     /// <returns>Null where no list has one.</returns>

@@ -25,7 +25,7 @@ internal static class SizingJson
     }
 
     /// <summary>The word for a status: <c>proven-lightest</c>, <c>best-found</c>, <c>fixed</c>, <c>unmet</c>.</summary>
-    private static string StatusWord(SizingStatus status) => status switch
+    public static string StatusWord(SizingStatus status) => status switch
     {
         SizingStatus.ProvenLightest => "proven-lightest",
         SizingStatus.BestFound => "best-found",

@@ -80,7 +80,8 @@ internal static class FitReport
         return (some, nearest, at);
     }
 
-    private static string Words(FrameModel model, FitProblem problem, Section[] sections)
+    /// <summary>A joint that can't be made, in a builder's words.</summary>
+    public static string Words(FrameModel model, FitProblem problem, IReadOnlyList<Section> sections)
     {
         Tube tube = model.Tubes[problem.End.Tube];
         Tube mate = model.Tubes[problem.Mate];
