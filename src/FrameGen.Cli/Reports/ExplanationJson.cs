@@ -11,7 +11,7 @@ namespace FrameGen.Cli.Reports;
 
 /// <summary>
 /// An explanation as JSON, in mm, N, N·mm, MPa, kg and degrees: <c>{"format": "framegen-explain/1", "exit_code", "tube", "group", "section", "origin", "status",
-/// "today", "lighter_in_all", "lighter": [{"section", "list", "saves_kg", "verdict", "refusal", "broken": [{"index", "kind", "label", "value", "limit", "unit",
+/// "today", "objective", "lighter_in_all", "lighter": [{"section", "list", "saves_kg", "saves_cost", "verdict", "refusal", "broken": [{"index", "kind", "label", "value", "limit", "unit",
 /// "ratio"}]}], "heavier", "targets": [{"index", …, "active", "drives", "per_stiffness", "per_mass", "kg_per_unit"}], "cases": {NAME: {"forces": {"n": {"lowest",
 /// "lowest_at_mm", "highest", "highest_at_mm"}, "vy", "vz", "t", "my", "mz"}, "stress_mpa", "at_mm", "yield_mpa", "used", "near_weld", "shares"}}, "ends": {"from":
 /// {"node", "cut", "cut_made", "order", "order_written", "runs_out_mm", "fits": [{"tube", "angle_deg", "clock_deg", "offset_mm"}], "problems"}, "to"}}</c>.
@@ -33,6 +33,7 @@ internal static class ExplanationJson
             json.WriteString("origin", Word(explanation.Origin));
             json.WriteString("status", SizingJson.StatusWord(sized.Status));
             json.WriteString("today", explanation.Today?.Nominal.Name);
+            json.WriteString("objective", explanation.IsByCost ? "cost" : "mass");
             json.WriteNumber("lighter_in_all", explanation.LighterInAll);
             WriteSizes(json, "lighter", explanation.Lighter);
             WriteSizes(json, "heavier", explanation.Heavier);
@@ -69,6 +70,7 @@ internal static class ExplanationJson
         SizeVerdict.WouldDo => "would-do",
         SizeVerdict.BreaksTarget => "breaks-target",
         SizeVerdict.DoesNotFit => "does-not-fit",
+        SizeVerdict.TooManySizes => "too-many-sizes",
         _ => "cannot-be-solved",
     };
 
@@ -81,6 +83,7 @@ internal static class ExplanationJson
             json.WriteString("section", size.Candidate.Nominal.Name);
             json.WriteString("list", size.Candidate.StockList);
             json.Number("saves_kg", size.SavesKg);
+            json.Number("saves_cost", size.SavesCost);
             json.WriteString("verdict", Word(size.Verdict));
             json.WriteString("refusal", size.Refusal);
             json.WriteStartArray("broken");

@@ -57,23 +57,22 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
         }
 
         string count = explanation.LighterInAll > explanation.Lighter.Count
-            ? $"The next {Whole(explanation.Lighter.Count)} of {Whole(explanation.LighterInAll)} lighter sizes"
-            : "The lighter sizes";
+            ? $"The next {Whole(explanation.Lighter.Count)} of {Whole(explanation.LighterInAll)} {ExplanationWords.Lighter(explanation)} sizes"
+            : $"The {ExplanationWords.Lighter(explanation)} sizes";
         string title = explanation.Heavier.Count > 0 ? "The nearest sizes in stock" : count;
-        var table = new ReportTable($"{title}, all other groups as they are", "=section", ">saves " + _display.MassUnitName, "what comes of it", ">value", ">limit", "unit");
+        var table = new ReportTable($"{title}, all other groups as they are", "=section", explanation.IsByCost ? ">saves" : ">saves " + _display.MassUnitName, "what comes of it", ">value", ">limit", "unit");
         foreach (TriedSize size in (TriedSize[])[.. explanation.Heavier, .. explanation.Lighter])
         {
-            TargetResult? worst = size.Broken.Count > 0 ? size.Broken[0] : null;
-            (double scale, string unit) = _display.TargetUnit(worst?.Unit ?? "");
-            int decimals = worst is null ? 0 : Decimals(scale * worst.Limit, 3);
-            bool shown = worst is not null && size.Verdict == SizeVerdict.BreaksTarget;
+            (double value, double limit, string unit) = ExplanationWords.Measure(size, _display);
+            int decimals = Decimals(limit, 3);
+            bool measured = double.IsFinite(limit);
             table.Row(
                 _display.Section(size.Candidate.Nominal),
-                _display.MassNumber(size.SavesKg),
-                ExplanationWords.Outcome(size),
-                shown ? Fixed(scale * worst!.Value, decimals) : "",
-                shown ? Fixed(scale * worst!.Limit, decimals) : "",
-                shown ? unit : "");
+                explanation.IsByCost ? ExplanationWords.Money(size.SavesCost) : _display.MassNumber(size.SavesKg),
+                ExplanationWords.Outcome(_model, size),
+                measured ? Fixed(value, decimals) : "",
+                measured ? Fixed(limit, decimals) : "",
+                unit);
         }
 
         table.Draw(terminal);
@@ -101,7 +100,7 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
         {
             (double scale, string unit) = _display.TargetUnit(drive.Result.Unit);
             table.Row(
-                ExplanationWords.Name(drive.Result),
+                $"{ExplanationWords.Name(drive.Result)}{(drive.Result.Met ? "" : ": MISSED")}",
                 Percent(drive.Result.Ratio),
                 drive.Drives ? "yes" : "no",
                 Slope(drive.PerStiffness),
@@ -135,40 +134,32 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
         {
             string name = _model.Cases[result.Case].Name;
             TubeDiagram diagram = result.Tubes[explanation.Tube].Diagram;
-            foreach (ForceKind kind in Forces.Where(k => !IsNoise(k, diagram)))
+            foreach (ForceKind kind in Forces)
             {
                 bool force = kind is ForceKind.N or ForceKind.Vy or ForceKind.Vz;
                 ForceExtreme low = diagram.Lowest(kind);
                 ForceExtreme high = diagram.Highest(kind);
-                table.Row(
-                    name,
-                    $"{kind} {(force ? f : m)}",
-                    force ? _display.ForceNumber(low.Value) : _display.MomentNumber(low.Value),
-                    _display.LengthNumber(low.At),
-                    force ? _display.ForceNumber(high.Value) : _display.MomentNumber(high.Value),
-                    _display.LengthNumber(high.At));
+                string lowest = force ? _display.ForceNumber(low.Value) : _display.MomentNumber(low.Value);
+                string highest = force ? _display.ForceNumber(high.Value) : _display.MomentNumber(high.Value);
+                if (IsZero(lowest) && IsZero(highest))
+                {
+                    continue;
+                }
+
+                table.Row(name, $"{kind} {(force ? f : m)}", lowest, _display.LengthNumber(low.At), highest, _display.LengthNumber(high.At));
                 name = "";
             }
 
             if (name.Length > 0)
             {
-                table.Row(name, "none");
+                table.Row(name, "none", "", "", "", "");
             }
         }
 
         table.Draw(terminal);
     }
 
-    // What never comes to a millionth of the largest force of its kind in any case is rounding.
-    private bool IsNoise(ForceKind kind, TubeDiagram diagram)
-    {
-        const double Rounding = 1e-6;
-        bool force = kind is ForceKind.N or ForceKind.Vy or ForceKind.Vz;
-        double scale = _sized.Cases.Max(c => Forces.Where(k => k is ForceKind.N or ForceKind.Vy or ForceKind.Vz == force).Max(k => Size(k, c.Tubes[explanation.Tube].Diagram)));
-        return Size(kind, diagram) <= Rounding * scale;
-
-        static double Size(ForceKind kind, TubeDiagram diagram) => Math.Max(Math.Abs(diagram.Lowest(kind).Value), Math.Abs(diagram.Highest(kind).Value));
-    }
+    private static bool IsZero(string number) => number.AsSpan().IndexOfAnyInRange('1', '9') < 0;
 
     private void PrintStress()
     {
@@ -206,7 +197,7 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
             string[] head = [EndText.Name(end.End), _model.Nodes[end.Joint.Node].Name, EndText.Kind(end.Kind)];
             if (end.Contacts.Count == 0)
             {
-                table.Row([.. head, end.RunsOut > Visible ? $"runs out {_display.Length(end.RunsOut)}" : "-"]);
+                table.Row([.. head, end.RunsOut > Visible ? $"runs out {_display.Length(end.RunsOut)}" : "-", "-", "-", "-"]);
             }
 
             foreach (Contact contact in end.Contacts)

@@ -1,3 +1,4 @@
+using FrameGen.Joints;
 using FrameGen.Model;
 using FrameGen.Output;
 using FrameGen.Sizing;
@@ -36,17 +37,20 @@ internal static class ExplanationWords
         }
 
         yield return explanation.Lighter.Count == 0
-            ? $"Why: it is the lightest of the {Whole(group.Candidates.Count)} sizes that {group.Name} may have."
+            ? $"Why: it is the {(explanation.IsByCost ? "cheapest" : "lightest")} of the {Whole(group.Candidates.Count)} sizes that {group.Name} may have."
             : $"Why: {next[..1].ToLowerInvariant()}{next[1..]}";
         if (sized.Status == SizingStatus.ProvenLightest && explanation.Lighter.Count > 0)
         {
-            yield return explanation.LighterWouldDo
-                ? "The choice is proven all the same: something other than mass decides."
-                : $"Proven: with a lighter size here some other group would have to be heavier, and the frame would weigh no less than its {display.Mass(sized.MassKg)}.";
+            bool others = sized.Model.Groups.Any(g => !ReferenceEquals(g, group) && !g.IsFixed && g.Candidates.Count > 1);
+            string lighter = Lighter(explanation);
+            string all = explanation.IsByCost ? $"cost no less than its {Money(sized.Cost)}" : $"weigh no less than its {display.Mass(sized.MassKg)}";
+            yield return !others
+                ? $"Proven: no {lighter} size will do."
+                : $"Proven: with a {lighter} size here some other group would have to be {(explanation.IsByCost ? "dearer" : "heavier")}, and the frame would {all}.";
         }
         else if (sized.Status == SizingStatus.BestFound)
         {
-            yield return "The best choice that was found, not proven: another combination may be lighter.";
+            yield return "The best choice that was found, not proven: another combination may be " + Lighter(explanation) + ".";
         }
     }
 
@@ -58,31 +62,59 @@ internal static class ExplanationWords
             return explanation.Origin switch
             {
                 SizeOrigin.Given when explanation.Heavier.Count == 0 => "No stock list holds a size like it, so there is none to compare it with.",
-                SizeOrigin.Given => "No stock list holds a lighter one.",
-                SizeOrigin.Frozen => "There is no lighter size to compare it with.",
+                SizeOrigin.Given => $"No stock list holds a {Lighter(explanation)} one.",
+                SizeOrigin.Frozen => $"There is no {Lighter(explanation)} size to compare it with.",
                 _ => "",
             };
         }
 
         TriedSize next = explanation.Lighter[0];
-        string name = $"The next lighter, {display.Section(next.Candidate.Nominal)},";
+        string name = $"The next {Lighter(explanation)}, {display.Section(next.Candidate.Nominal)},";
         return next.Verdict switch
         {
             SizeVerdict.BreaksTarget => $"{name} breaks {Name(next.Broken[0])}: {Amount(next.Broken[0], display)}.",
             SizeVerdict.DoesNotFit => $"{name} can't be joined: {next.Refusal}.",
             SizeVerdict.CannotBeSolved => $"{name} is so soft beside the others that the frame can't be solved.",
-            _ => $"{name} would do as well, and save {display.Mass(next.SavesKg)}.",
+            SizeVerdict.TooManySizes => $"{name} would be one different size more than the {Whole(explanation.Sized.Model.Sizing.DifferentSizes ?? 0)} that the spec allows.",
+            _ => $"{name} would do as well, and save {(explanation.IsByCost ? Money(next.SavesCost) : display.Mass(next.SavesKg))}.",
         };
     }
 
     /// <summary>What comes of a size, for a table whose next columns have value and limit.</summary>
-    public static string Outcome(TriedSize size) => size.Verdict switch
+    public static string Outcome(FrameModel model, TriedSize size) => size.Verdict switch
     {
         SizeVerdict.BreaksTarget => $"breaks {Name(size.Broken[0])}{(size.Broken.Count > 1 ? $", and {Whole(size.Broken.Count - 1)} more" : "")}",
-        SizeVerdict.DoesNotFit => $"can't be joined: {size.Refusal}",
+        SizeVerdict.DoesNotFit => $"can't be joined: {Refusal(model, size.Problem!)}",
         SizeVerdict.CannotBeSolved => "can't be solved: too soft beside the others",
+        SizeVerdict.TooManySizes => "would be one different size too many",
         _ => "would do",
     };
+
+    // Short, for a row that has the numbers.
+    private static string Refusal(FrameModel model, FitProblem problem)
+    {
+        string tube = model.Tubes[problem.End.Tube].Name;
+        string mate = model.Tubes[problem.Mate].Name;
+        return problem.Kind switch
+        {
+            FitProblemKind.WiderThanSeat => $"{tube} is wider than {mate}, which it lands on (half widths)",
+            FitProblemKind.RunOutTooLong => $"{tube} would run out too far to carry {mate}",
+            _ => $"{tube} misses {mate}",
+        };
+    }
+
+    /// <summary>What decides about a size, its limit and their unit, as papers print them; NaN where nothing is measured.</summary>
+    public static (double Value, double Limit, string Unit) Measure(TriedSize size, DisplayFormat display)
+    {
+        (double value, double limit, string unit) = size switch
+        {
+            { Verdict: SizeVerdict.DoesNotFit, Problem: { } problem } => (problem.Needed, problem.Allowed, "mm"),
+            { Verdict: SizeVerdict.BreaksTarget } => (size.Broken[0].Value, size.Broken[0].Limit, size.Broken[0].Unit),
+            _ => (double.NaN, double.NaN, ""),
+        };
+        (double scale, string name) = display.TargetUnit(unit);
+        return (scale * value, scale * limit, name);
+    }
 
     /// <summary>A target by its name: <c>displacement of rear-l along z, case standing</c>.</summary>
     public static string Name(TargetResult target) => $"{target.Kind} of {target.Label}";
@@ -101,6 +133,12 @@ internal static class ExplanationWords
         string problems = string.Concat(end.Problems.Select(p => $" {p}."));
         return $"{EndText.Name(end.End)}: joint {model.Nodes[end.Joint.Node].Name} in the order {string.Join(", ", names)}: {rule}; each is cut to fit those before it.{cut}{problems}";
     }
+
+    /// <summary>What less of what is made least is called.</summary>
+    public static string Lighter(TubeExplanation explanation) => explanation.IsByCost ? "cheaper" : "lighter";
+
+    /// <summary>An amount in the shop's own money.</summary>
+    public static string Money(double? amount) => amount is { } a ? Fixed(a, 2) : "-";
 
     private static string Amount(TargetResult target, DisplayFormat display)
     {

@@ -41,6 +41,7 @@ public sealed class CommandLineTests : IDisposable
     [InlineData("build")]
     [InlineData("check")]
     [InlineData("size")]
+    [InlineData("explain")]
     [InlineData("verify")]
     public void Every_command_has_help_with_an_example_in_80_columns(string command)
     {

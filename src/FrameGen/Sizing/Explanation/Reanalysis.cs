@@ -11,10 +11,15 @@ namespace FrameGen.Sizing.Explanation;
 /// <summary>A sized frame with one group changed, analysed anew as sizing does it.</summary>
 /// <param name="Targets">In the spec's order; null where the frame can't be solved.</param>
 /// <param name="Fits">What stands in the way of joints where a size that can be chosen is involved.</param>
+/// <param name="HasTooManySizes">True where it has more different sizes than the spec allows.</param>
 /// <param name="Joints">By node.</param>
 /// <param name="Sections">By group.</param>
 internal sealed record Reanalysis(
-    IReadOnlyList<TargetResult>? Targets, IReadOnlyList<FitProblem> Fits, IReadOnlyList<NodeJoint> Joints, IReadOnlyList<Section> Sections)
+    IReadOnlyList<TargetResult>? Targets,
+    IReadOnlyList<FitProblem> Fits,
+    bool HasTooManySizes,
+    IReadOnlyList<NodeJoint> Joints,
+    IReadOnlyList<Section> Sections)
 {
     /// <summary>Analyses the frame with another candidate in one group, which counts as one that can be chosen.</summary>
     public static Reanalysis With(SizedFrame sized, int group, Candidate candidate) => Of(sized, group, candidate, sized.Model.Groups[group].Material);
@@ -52,7 +57,11 @@ internal sealed record Reanalysis(
         }
 
         return new Reanalysis(
-            Results(checks, analysis), fits, [.. Enumerable.Range(0, model.Nodes.Count).Select(n => JointOrder.At(model, n, analysis.Sections))], analysis.Sections);
+            Results(checks, analysis),
+            fits,
+            !space.IsAllowed(analysis.Choice),
+            [.. Enumerable.Range(0, model.Nodes.Count).Select(n => JointOrder.At(model, n, analysis.Sections))],
+            analysis.Sections);
     }
 
     private static TargetResult[]? Results(IReadOnlyList<TargetCheck> checks, DesignAnalysis analysis)

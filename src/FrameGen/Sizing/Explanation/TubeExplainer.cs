@@ -1,5 +1,6 @@
 using FrameGen.Joints;
 using FrameGen.Model;
+using FrameGen.Spec;
 
 namespace FrameGen.Sizing.Explanation;
 
@@ -12,8 +13,10 @@ public static class TubeExplainer
     /// <summary>So many heavier ones are, in place of a size that the spec gives.</summary>
     public const int MostHeavier = 2;
 
-    // Areas closer than this, relative, are the same: the same size by another name.
-    private const double SameArea = 1e-9;
+    // Areas and prices closer than this, relative, are the same.
+    private const double Same = 1e-9;
+
+    private const double MillimetresPerMetre = 1000;
 
     // More wall that gives less than this share of the limit per percent gives nothing but rounding.
     private const double LeastSlope = 1e-6;
@@ -31,10 +34,12 @@ public static class TubeExplainer
 
         int group = sized.Model.Tubes[tube].Group;
         SizeOrigin origin = OriginOf(sized.Model.Groups[group]);
-        double area = sized.Sections[group].Area;
         Candidate[] others = Others(sized, group, inStock);
-        Candidate[] lighter = [.. others.Where(c => c.Section.Area < area * (1 - SameArea)).Reverse()];
-        Candidate[] heavier = [.. origin == SizeOrigin.Given ? others.Where(c => c.Section.Area > area * (1 + SameArea)).Take(MostHeavier) : []];
+        bool byCost = sized.Model.Sizing.Objective == SizingObjective.Cost && others.Append(sized.Chosen[group]).All(c => c.PricePerMetre is not null);
+        double own = Least(sized.Chosen[group]);
+        others = [.. others.OrderBy(Least).ThenBy(c => c.Section.Area).ThenBy(c => c.Section.Name, StringComparer.Ordinal)];
+        Candidate[] lighter = [.. others.Where(c => Least(c) < own * (1 - Same)).Reverse()];
+        Candidate[] heavier = [.. origin == SizeOrigin.Given ? others.Where(c => Least(c) > own * (1 + Same)).Take(MostHeavier) : []];
         TriedSize[] tried = Try(sized, group, [.. heavier.Reverse(), .. lighter.Take(MostLighter)]);
         TriedSize[] lighterTried = [.. tried.Skip(heavier.Length)];
         return new TubeExplanation(
@@ -46,9 +51,12 @@ public static class TubeExplainer
             Drives(sized, group, lighterTried),
             [EndExplainer.Explain(sized, tube, End.From), EndExplainer.Explain(sized, tube, End.To)])
         {
+            IsByCost = byCost,
             Heavier = [.. tried.Take(heavier.Length)],
             Today = sized.Today?.Chosen[group] is { } today && !today.Nominal.Equals(sized.Chosen[group].Nominal) ? today : null,
         };
+
+        double Least(Candidate candidate) => byCost ? candidate.PricePerMetre!.Value : candidate.Section.Area;
     }
 
     private static SizeOrigin OriginOf(TubeGroup group) => group switch
@@ -59,16 +67,14 @@ public static class TubeExplainer
         _ => SizeOrigin.Chosen,
     };
 
-    // What the group could have instead: its candidates, those it had before it was pinned, or sizes in stock like one that the spec gives; lightest first.
+    // What the group could have instead: its candidates, those it had before it was pinned, or sizes in stock like one that the spec gives.
     private static Candidate[] Others(SizedFrame sized, int group, IReadOnlyList<Candidate> inStock)
     {
         TubeGroup free = sized.Model.Frozen?.Free.Groups[group] ?? sized.Model.Groups[group];
         return
         [
             .. (free.IsFixed ? inStock : free.Candidates)
-                .Where(c => !c.Nominal.Equals(sized.Chosen[group].Nominal))
-                .OrderBy(c => c.Section.Area)
-                .ThenBy(c => c.Section.Name, StringComparer.Ordinal),
+                .Where(c => !c.Nominal.Equals(sized.Chosen[group].Nominal)),
         ];
     }
 
@@ -93,9 +99,14 @@ public static class TubeExplainer
                 SizeVerdict verdict = refusal is not null ? SizeVerdict.DoesNotFit
                     : with.Targets is null ? SizeVerdict.CannotBeSolved
                     : broken.Length > 0 ? SizeVerdict.BreaksTarget
+                    : with.HasTooManySizes && !now.HasTooManySizes ? SizeVerdict.TooManySizes
                     : SizeVerdict.WouldDo;
                 double saves = density * (sized.Sections[group].Area - size.Section.Area) * length;
-                return new TriedSize(size, saves, verdict, broken, refusal is null ? "" : FitReport.Words(sized.Model, refusal, with.Sections));
+                return new TriedSize(size, saves, verdict, broken, refusal is null ? "" : FitReport.Words(sized.Model, refusal, with.Sections))
+                {
+                    Problem = refusal,
+                    SavesCost = (sized.Chosen[group].PricePerMetre - size.PricePerMetre) * length / MillimetresPerMetre,
+                };
             }),
         ];
     }

@@ -23,8 +23,8 @@ public enum SizeOrigin
 /// <param name="Sized">The frame.</param>
 /// <param name="Tube">Index of the tube.</param>
 /// <param name="Origin">Who settled its size.</param>
-/// <param name="Lighter">The next lighter sizes of its group, heaviest first, each tried with all other groups as they are.</param>
-/// <param name="LighterInAll">How many lighter ones there are.</param>
+/// <param name="Lighter">The next lighter sizes of its group, or cheaper ones where cost is made least, nearest first, each tried with all other groups as they are.</param>
+/// <param name="LighterInAll">How many lighter, or cheaper, ones there are.</param>
 /// <param name="Targets">One a target, in the spec's order.</param>
 /// <param name="Ends">What cuts it at its from end and at its to end.</param>
 public sealed record TubeExplanation(
@@ -36,7 +36,10 @@ public sealed record TubeExplanation(
     IReadOnlyList<TargetDrive> Targets,
     IReadOnlyList<ExplainedEnd> Ends)
 {
-    /// <summary>The next heavier sizes in stock, heaviest first, where the spec gives the size; else empty.</summary>
+    /// <summary>True where "lighter" is cheaper: cost is made least, and the prices are known.</summary>
+    public bool IsByCost { get; init; }
+
+    /// <summary>The next heavier sizes in stock, farthest first, where the spec gives the size; else empty.</summary>
     public IReadOnlyList<TriedSize> Heavier { get; init; } = [];
 
     /// <summary>Index of its group.</summary>
@@ -48,7 +51,7 @@ public sealed record TubeExplanation(
     /// <summary>What sizing would choose for the group today, where its size is pinned and another would be chosen; else null.</summary>
     public Candidate? Today { get; init; }
 
-    /// <summary>True where a lighter size would do alone: never where sizing chose, and rightly.</summary>
+    /// <summary>True where a lighter size would do alone: never where sizing chose.</summary>
     public bool LighterWouldDo => Lighter.Any(l => l.Verdict == SizeVerdict.WouldDo);
 }
 
@@ -64,18 +67,28 @@ public enum SizeVerdict
     /// <summary>A joint can't be made with it.</summary>
     DoesNotFit,
 
+    /// <summary>It would be one different size more than the spec allows.</summary>
+    TooManySizes,
+
     /// <summary>The frame can't be solved with it.</summary>
     CannotBeSolved,
 }
 
 /// <summary>A size tried in place of the chosen one, all other groups as they are.</summary>
 /// <param name="Candidate">The size.</param>
-/// <param name="SavesKg">What the frame would be lighter by, on axis lengths.</param>
+/// <param name="SavesKg">What the frame would be lighter by, on axis lengths; negative where it would be heavier.</param>
 /// <param name="Verdict">What comes of it.</param>
 /// <param name="Broken">Targets that it breaks, the farthest over its limit first; also where a joint refuses it.</param>
 /// <param name="Refusal">The joint that refuses it, in words; empty where none does.</param>
 public sealed record TriedSize(
-    Candidate Candidate, double SavesKg, SizeVerdict Verdict, IReadOnlyList<TargetResult> Broken, string Refusal);
+    Candidate Candidate, double SavesKg, SizeVerdict Verdict, IReadOnlyList<TargetResult> Broken, string Refusal)
+{
+    /// <summary>The joint that refuses it; null where none does.</summary>
+    public FitProblem? Problem { get; init; }
+
+    /// <summary>What the frame would cost less, in the shop's own money, on axis lengths; null where a price is unknown.</summary>
+    public double? SavesCost { get; init; }
+}
 
 /// <summary>What a target has to do with a group's size.</summary>
 /// <param name="Result">The target in the chosen design.</param>
