@@ -1,7 +1,6 @@
 using System.Text;
 using System.Text.Json;
 using FrameGen.Joints;
-using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Output;
 using FrameGen.Sizing;

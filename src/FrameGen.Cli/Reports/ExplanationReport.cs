@@ -1,11 +1,10 @@
 using FrameGen.Joints;
-using FrameGen.Mechanics.Sections;
 using FrameGen.Model;
 using FrameGen.Output;
 using FrameGen.Sizing;
 using FrameGen.Sizing.Explanation;
 using Spectre.Console;
-using static FrameGen.Cli.Reports.TableNumbers;
+using static FrameGen.Output.SizingModel;
 
 namespace FrameGen.Cli.Reports;
 
@@ -39,7 +38,7 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
         {
             1 => $"the only tube of group {group.Name}",
             2 => $"both tubes of group {group.Name}",
-            _ => $"all {Whole(tubes)} tubes of group {group.Name}",
+            _ => $"all {ExplanationWords.Whole(tubes)} tubes of group {group.Name}",
         };
         string mass = $"{_display.MassPerLengthNumber(chosen.Section.MassPerMetre(group.Material.Density))} {_display.MassPerLengthUnitName}";
         Line($"{_model.Tubes[explanation.Tube].Name}: {_display.Section(chosen)}, {group.Material.Name}, {mass}, {shared}");
@@ -57,7 +56,7 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
         }
 
         string count = explanation.LighterInAll > explanation.Lighter.Count
-            ? $"The next {Whole(explanation.Lighter.Count)} of {Whole(explanation.LighterInAll)} {ExplanationWords.Lighter(explanation)} sizes"
+            ? $"The next {ExplanationWords.Whole(explanation.Lighter.Count)} of {ExplanationWords.Whole(explanation.LighterInAll)} {ExplanationWords.Lighter(explanation)} sizes"
             : $"The {ExplanationWords.Lighter(explanation)} sizes";
         string title = explanation.Heavier.Count > 0 ? "The nearest sizes in stock" : count;
         var table = new ReportTable($"{title}, all other groups as they are", "=section", explanation.IsByCost ? ">saves" : ">saves " + _display.MassUnitName, "what comes of it", ">value", ">limit", "unit");
@@ -87,7 +86,7 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
             {
                 TargetDrive nearest = explanation.Targets.MaxBy(t => t.Result.Ratio)!;
                 terminal.Out.WriteLine();
-                Line($"{(explanation.Lighter.Count > 0 ? "These sizes break no target, and no" : "No")} target is near its limit; most used is {ExplanationWords.Name(nearest.Result)}, {Percent(nearest.Result.Ratio)}.");
+                Line($"{(explanation.Lighter.Count > 0 ? "These sizes break no target, and no" : "No")} target is near its limit; most used is {ExplanationWords.Name(nearest.Result)}, {Percent(nearest.Result.Ratio).Replace(' ', Terminal.TiedBlank)}.");
             }
 
             return;
@@ -178,8 +177,8 @@ internal sealed class ExplanationReport(Terminal terminal, TubeExplanation expla
                 Fixed(forces.Use?.Stress ?? forces.MaxStress, decimals),
                 forces.Use is { } use ? Fixed(use.Yield, 0) : "-",
                 forces.Use is { } used ? Percent(used.Share) : "-",
-                forces.Use is { Share: > 0 } at ? StressWords.Place(_model, _display, explanation.Tube, at) : "-",
-                forces.Use is { Share: > 0 } from ? Tied(StressWords.Shares(from.Shares)) : "-");
+                forces.Use is { Share: > 0 } at ? CaseRow.Place(_model, explanation.Tube, at, _display) : "-",
+                forces.Use is { Share: > 0 } from ? Tied(CaseRow.Shares(from.Shares)) : "-");
         }
 
         table.Draw(terminal);

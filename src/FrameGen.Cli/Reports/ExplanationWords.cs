@@ -1,9 +1,10 @@
+using System.Globalization;
 using FrameGen.Joints;
 using FrameGen.Model;
 using FrameGen.Output;
 using FrameGen.Sizing;
 using FrameGen.Sizing.Explanation;
-using static FrameGen.Cli.Reports.TableNumbers;
+using static FrameGen.Output.SizingModel;
 
 namespace FrameGen.Cli.Reports;
 
@@ -139,6 +140,9 @@ internal static class ExplanationWords
 
     /// <summary>An amount in the shop's own money.</summary>
     public static string Money(double? amount) => amount is { } a ? Fixed(a, 2) : "-";
+
+    /// <summary>A count.</summary>
+    public static string Whole(int count) => count.ToString(CultureInfo.InvariantCulture);
 
     private static string Amount(TargetResult target, DisplayFormat display)
     {

@@ -153,13 +153,15 @@ public sealed record CaseRow(
             result.BucklingFactor is { } factor ? SizingModel.Fixed(factor, SizingModel.Decimals(factor, 3)) : string.Empty);
     }
 
-    private static string Place(FrameModel model, int tube, TubeUse use, DisplayFormat display)
+    /// <summary>The place by the nearest node: <c>at node hub-l, in reach of a weld</c>.</summary>
+    internal static string Place(FrameModel model, int tube, TubeUse use, DisplayFormat display)
     {
         (int node, double distance) = model.NearestNode(tube, use.At);
         string near = distance < 0.5 ? $"at node {model.Nodes[node].Name}" : $"{display.Length(distance)} from node {model.Nodes[node].Name}";
         return use.NearWeld ? $"{near}, in reach of a weld" : near;
     }
 
-    private static string Shares(StressShares shares) =>
+    /// <summary>What a stress comes from, largest first: <c>bending 83 %, axial 15 %</c>.</summary>
+    internal static string Shares(StressShares shares) =>
         string.Join(", ", shares.Ordered.Where(s => s.Share >= 0.005).Select(s => $"{s.Name} {(100 * s.Share).ToString("0", CultureInfo.InvariantCulture)} %"));
 }
