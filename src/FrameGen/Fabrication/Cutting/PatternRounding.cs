@@ -43,7 +43,7 @@ internal sealed class PatternRounding(CuttingProblem problem, StepBudget budget)
             }
         }
 
-        if (_kept.Count == before && solution.Where(s => IsPossible(s.Pattern, left)).MaxBy(s => s.Bars).Pattern is { } nearest)
+        if (_kept.Count == before && solution.Where(s => IsPossible(s.Pattern, left)).DefaultIfEmpty().MaxBy(s => s.Bars).Pattern is { } nearest)
         {
             Take(nearest, left);
         }

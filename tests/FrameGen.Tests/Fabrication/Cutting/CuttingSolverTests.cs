@@ -34,6 +34,17 @@ public class CuttingSolverTests
         Assert.InRange(unsolved.Bound, 0, 3);
     }
 
+    // Lengths that share no measure, of which 11 go on a bar: the rounding cuts all pieces and is still above the bound.
+    [Fact]
+    public void Nothing_is_left_to_round_where_all_is_cut()
+    {
+        var random = new Random(990);
+        PieceSize[] sizes = [.. Enumerable.Range(0, 165).Select(_ => new PieceSize(random.Next(480_000, 560_000), 1))];
+        CuttingPlan plan = CuttingSolver.Solve(new CuttingProblem(6_002_000, sizes, []));
+        Assert.Equal(165, plan.Bars.Sum(b => b.Counts.Sum()));
+        Assert.InRange(plan.Bought, plan.LowerBound, plan.LowerBound + 1);
+    }
+
     [Fact]
     public void Pieces_longer_than_bar_and_rack_are_handed_back()
     {
