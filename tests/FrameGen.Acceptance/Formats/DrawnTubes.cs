@@ -72,6 +72,34 @@ internal static class DrawnTubes
             Paper = 1,
             Page = PageSize.A3,
         }),
+        ("16 mm tube, many mates, long names", new(new RoundTube(16, 1), 260)
+        {
+            From = DrawnTube.Deeper(DrawnTube.Saddle(8, 9, 35, 0, 0.5), DrawnTube.Saddle(8, 10, 60, 1, 3)),
+            To = DrawnTube.Saddle(8, 30, 35, 20, 5),
+            Names = [.. Enumerable.Range(0, 6).Select(i => $"a-stay-with-a-name-of-some-length-{i}")],
+            Mates = [.. Enumerable.Range(0, 7).Select(i => $"a-mate-with-quite-a-name-{i}")],
+            Title = "A frame whose title goes on and on, so that it takes several lines on a narrow piece of paper",
+        }),
+        ("16 mm tube, short, both ends at 35 degrees", new(new RoundTube(16, 1), 60)
+        {
+            From = DrawnTube.Saddle(8, 10, 35, 0, 0),
+            To = DrawnTube.Saddle(8, 10, 35, 0, 0),
+            Status = SizingStatus.Unmet,
+        }),
+        ("168 mm tube at 25 degrees, six mates", new(new RoundTube(168.3, 6.3), 700)
+        {
+            From = DrawnTube.Saddle(84.15, 110, 25, 0, 2),
+            To = DrawnTube.Saddle(84.15, 110, 25, 10, 4),
+            Mates = [.. Enumerable.Range(0, 6).Select(i => $"post-{i}")],
+        }),
+        ("168 mm tube, short, six mates", new(new RoundTube(168.3, 4), 420)
+        {
+            From = DrawnTube.Deeper(DrawnTube.Saddle(84.15, 100, 60, 0, 0), DrawnTube.Saddle(84.15, 90, 75, 0, 2)),
+            To = DrawnTube.Saddle(84.15, 168, 70, 60, 1),
+            Mates = [.. Enumerable.Range(0, 6).Select(i => $"a-mate-with-quite-a-name-{i}")],
+            Display = Inches,
+            Page = PageSize.Letter,
+        }),
         ("square ends", new(new RoundTube(30, 1.5), 300)),
     ];
 
