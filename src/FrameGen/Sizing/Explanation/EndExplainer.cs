@@ -15,7 +15,7 @@ internal static class EndExplainer
         var id = new TubeEndId(tube, end);
         var plan = JointPlan.Make(model, joint, sized.Sections);
         EndPlan own = plan.Ends.First(e => e.Id == id);
-        bool canCut = joint.Tubes.All(t => sized.SectionOf(t) is RoundTube or Rod);
+        bool canCut = model.Tubes[tube].Bent is null || sized.SectionOf(tube) is RoundTube or Rod;
         IReadOnlyList<Contact> contacts = canCut ? new EndCutter(model, sized.Sections).Cut(own).Cut.Contacts : Planned(model, own);
         return new ExplainedEnd(
             end,
