@@ -70,11 +70,12 @@ public class OutlineRollBackTests
         {
             Point2 wall = skin.At(point.X);
             double nearest = double.PositiveInfinity;
+            double share = radial ? skin.WallShare(wall) : 0;
 
             // Radial: somewhere on its ray through the wall it touches, and nowhere is it inside.
             for (int k = 0; k <= (radial ? 400 : 0); k++)
             {
-                Point2 at = (1 - (k / 400.0 * skin.WallShare(wall))) * wall;
+                Point2 at = (1 - (k / 400.0 * share)) * wall;
                 Vector3 place = tube.From.Point + (point.Y * tube.Axes.X) + (at.X * tube.Axes.Z) + (at.Y * quarter) - mate.From.Point;
                 nearest = Math.Min(nearest, other.Outside(new(place.Dot(mate.Axes.Z), place.Dot(mateQuarter))));
             }
