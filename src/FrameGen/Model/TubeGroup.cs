@@ -24,7 +24,17 @@ public sealed record TubeGroup(
 {
     /// <summary>True where the size is pinned by the file beside the spec; it is fixed then.</summary>
     public bool IsFrozen { get; init; }
+
+    /// <summary>Sizes of the same lists that one range alone keeps out.</summary>
+    public IReadOnlyList<BeyondRange> Beyond { get; init; } = [];
 }
+
+/// <summary>A size that one range of a group keeps out.</summary>
+/// <param name="Candidate">The size.</param>
+/// <param name="Key">The range: <c>od</c>, <c>height</c>, <c>width</c>, <c>wall</c>.</param>
+/// <param name="Size">What it has there, mm.</param>
+/// <param name="By">How far that is beyond the range, mm: positive above it, negative below.</param>
+public sealed record BeyondRange(Candidate Candidate, string Key, double Size, double By);
 
 /// <summary>A section that can be bought, or the one that the spec gives.</summary>
 /// <param name="Section">Its section.</param>

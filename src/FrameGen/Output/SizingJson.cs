@@ -61,11 +61,40 @@ internal static class SizingJson
         }
 
         json.WriteNumber("analyses", sized.Analyses);
+        if (sized.Fits is { } fits)
+        {
+            WriteFits(json, sized.Model, fits);
+        }
+
         if (sized.Model.Frozen is { } frozen)
         {
             WriteFrozen(json, sized, frozen);
         }
 
+        json.WriteEndObject();
+    }
+
+    private static void WriteFits(Utf8JsonWriter json, FrameModel model, FitCost fits)
+    {
+        json.WriteStartObject("fits");
+        json.Number("lighter_kg", fits.LighterKg);
+        if (fits.Cheaper is { } cheaper)
+        {
+            json.Number("cheaper", cheaper);
+        }
+
+        json.WriteStartArray("joints");
+        foreach (FitRule rule in fits.Rules)
+        {
+            json.WriteStartObject();
+            json.WriteString("node", model.Nodes[rule.Node].Name);
+            json.WriteString("group", rule.Group);
+            json.WriteString("seat_group", rule.SeatGroup);
+            json.WriteString("text", rule.Text);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
         json.WriteEndObject();
     }
 

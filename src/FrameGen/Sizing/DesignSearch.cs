@@ -101,25 +101,34 @@ internal sealed class DesignSearch
     /// <exception cref="MechanismException">A design can move without strain.</exception>
     public SearchSurvey Survey()
     {
-        var merged = new Tally(Checks.Count);
-        Walk(() => new Tally(Checks.Count), (analysis, tally, rank) =>
+        var merged = new Tally(2 * Checks.Count);
+        Walk(() => new Tally(2 * Checks.Count), (analysis, tally, rank) =>
         {
             if (_space.IsAllowed(analysis.Choice) && _joints.Fits(analysis.Choice, analysis.Sections))
             {
                 double worst = 0;
+                (int missed, int which, double by) = (0, -1, 0);
                 for (int t = 0; t < Checks.Count; t++)
                 {
                     double ratio = Checks[t].Ratio(analysis);
                     worst = Math.Max(worst, ratio);
                     tally.Offer(t, ratio, rank);
+                    (missed, which, by) = ratio <= 1 ? (missed, which, by) : (missed + 1, t, ratio);
                 }
 
-                tally.Offer(Checks.Count, worst, rank);
+                tally.Offer(2 * Checks.Count, worst, rank);
+                if (missed == 1)
+                {
+                    tally.Offer(Checks.Count + which, by, rank);
+                }
             }
 
             return tally;
         }, _ => true, tally => merged.Take(tally));
-        return new SearchSurvey([.. merged.Ranks.Take(Checks.Count)], merged.Ranks[^1]);
+        return new SearchSurvey(
+            [.. merged.Ranks.Take(Checks.Count)],
+            merged.Ranks[^1],
+            [.. merged.Ranks.Skip(Checks.Count).Take(Checks.Count).Select(rank => rank == int.MaxValue ? (int?)null : rank)]);
     }
 
     /// <summary>Turns an analysis to the design at a place in the order.</summary>
@@ -277,4 +286,5 @@ internal readonly record struct SearchResult(int? Rank, long Looked);
 /// <summary>What a survey of all designs found.</summary>
 /// <param name="Best">For each target, the place in the order of the design that serves it best.</param>
 /// <param name="LeastBad">The place of the design whose worst target is the least bad.</param>
-internal readonly record struct SearchSurvey(IReadOnlyList<int> Best, int LeastBad);
+/// <param name="Alone">For each target, the place of the design that serves it best of those that miss no other; null where there is none.</param>
+internal readonly record struct SearchSurvey(IReadOnlyList<int> Best, int LeastBad, IReadOnlyList<int?> Alone);

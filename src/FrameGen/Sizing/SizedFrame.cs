@@ -49,6 +49,9 @@ public sealed record SizedFrame(
     /// <summary>The lowest natural frequencies, Hz, lowest first, with all supports or those of the frequency target; null when nothing is analysed.</summary>
     public IReadOnlyList<double>? Frequencies { get; init; }
 
+    /// <summary>What the joints' `fits` costs; null where it refuses nothing that would be better.</summary>
+    public FitCost? Fits { get; init; }
+
     /// <summary>What would be chosen today, where the sizes are pinned; null where they are not, or where nothing could be chosen.</summary>
     public SizedFrame? Today { get; init; }
 

@@ -34,7 +34,7 @@ internal static class UnmetReport
             diagnostics.Warning(
                 check.Target.At,
                 $"{best.Kind} {best.Label}: out of reach; the best of all sizes is {Amount(best)}, with {Sizes(analysis)}; "
-                + Limits(check, analysis));
+                + $"{Relaxed(search, survey, analysis, t, best)}; {Limits(check, survey.Best[t], search, analysis)}");
         }
 
         search.Turn(analysis, survey.LeastBad);
@@ -44,7 +44,9 @@ internal static class UnmetReport
             diagnostics.Warning(
                 search.Checks[failing[0].Index].Target.At,
                 $"each target can be met alone, but no design meets all of them; the least bad, {Sizes(analysis)}, misses "
-                + string.Join("; ", failing.Select(r => $"{r.Kind} {r.Label}: {Amount(r)}")));
+                + string.Join("; ", failing.Select(r => $"{r.Kind} {r.Label}: {Amount(r)}"))
+                + OneLimit(search, survey, analysis));
+            search.Turn(analysis, survey.LeastBad);
         }
     }
 
@@ -75,6 +77,60 @@ internal static class UnmetReport
         return $"{Wording.Quantity(result.Value, result.Unit)}, {measure} the limit of {Wording.Quantity(result.Limit, result.Unit)}";
     }
 
+    /// <summary>The value of a missed target that would be within reach, three digits of it: 52.3 N/mm of 52.34, 4.22 mm of 4.213.</summary>
+    public static string Reachable(TargetResult missed)
+    {
+        bool isMinimum = missed.Value < missed.Limit;
+        if (!(missed.Value > 0) || !double.IsFinite(missed.Value))
+        {
+            return Wording.Quantity(missed.Value, missed.Unit);
+        }
+
+        double step = Math.Pow(10, Math.Floor(Math.Log10(missed.Value)) - 2);
+        double steps = missed.Value / step;
+        double rounded = step * (isMinimum ? Math.Floor(steps + 1e-6) : Math.Ceiling(steps - 1e-6));
+        return Wording.Quantity(rounded, missed.Unit);
+    }
+
+    // What could be asked for instead: of this target alone, and together with all others.
+    private static string Relaxed(DesignSearch search, SearchSurvey survey, DesignAnalysis analysis, int target, TargetResult best)
+    {
+        string alone = Reachable(best);
+        if (survey.Alone[target] is not { } rank)
+        {
+            return search.Checks.Count == 1 ? $"{alone} could be met" : $"{alone} could be met, though not with all other targets";
+        }
+
+        search.Turn(analysis, rank);
+        string together = Reachable(search.Checks[target].Result(analysis));
+        return search.Checks.Count == 1 ? $"{alone} could be met"
+            : string.Equals(alone, together, StringComparison.Ordinal) ? $"{alone} could be met, and all other targets with it"
+            : $"{alone} could be met, and {together} with all other targets, by {Sizes(analysis)}";
+    }
+
+    // Of the targets that can't be met together, the one whose limit has to give way by the smallest share, with all others met.
+    private static string OneLimit(DesignSearch search, SearchSurvey survey, DesignAnalysis analysis)
+    {
+        (double Ratio, string Words) least = (double.PositiveInfinity, "");
+        for (int t = 0; t < search.Checks.Count; t++)
+        {
+            if (survey.Alone[t] is not { } rank)
+            {
+                continue;
+            }
+
+            search.Turn(analysis, rank);
+            TargetResult result = search.Checks[t].Result(analysis);
+            if (result.Ratio < least.Ratio)
+            {
+                least = (result.Ratio, $"; the smallest change of one limit that would do: {result.Kind} {result.Label}, {Reachable(result)} in place of "
+                    + $"{Wording.Quantity(result.Limit, result.Unit)}, with {Sizes(analysis)}");
+            }
+        }
+
+        return least.Words;
+    }
+
     private static string Sizes(DesignAnalysis analysis)
     {
         var sizes = new List<string>();
@@ -90,7 +146,14 @@ internal static class UnmetReport
     }
 
     // The groups that matter to the target and stand at the end of their range in its best design.
-    private static string Limits(TargetCheck check, DesignAnalysis analysis)
+    private static string Limits(TargetCheck check, int bestRank, DesignSearch search, DesignAnalysis analysis)
+    {
+        search.Turn(analysis, bestRank);
+        return Limits(check, analysis);
+    }
+
+    /// <summary>The groups' limits that stand in the way of a target in the design that the analysis stands at, its best.</summary>
+    public static string Limits(TargetCheck check, DesignAnalysis analysis)
     {
         int[] best = [.. analysis.Choice];
         double ratio = check.Ratio(analysis);

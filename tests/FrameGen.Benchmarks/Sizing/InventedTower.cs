@@ -76,12 +76,17 @@ internal static class InventedTower
             text.Append(CultureInfo.InvariantCulture, $"  {name}: {{from: {from}, to: {to}, group: {group}, ends: {{from: {{wrap: true}}, to: {{wrap: true}}}}}}\n");
     }
 
+    // The range is the same for any count, so that targets are within reach of few sizes as of many.
     private static IEnumerable<string> Sizes(int count)
     {
+        const double Smallest = 16;
+        const double Range = 27;
         double[] walls = [1, 1.5, 2, 2.5];
+        int diameters = (count + walls.Length - 1) / walls.Length;
         for (int i = 0; i < count; i++)
         {
-            yield return string.Create(CultureInfo.InvariantCulture, $"round {16 + (3 * (i / 4))} x {walls[i % 4]} mm");
+            double od = Math.Round(Smallest + (Range * (i / walls.Length) / Math.Max(1, diameters - 1)), 1);
+            yield return string.Create(CultureInfo.InvariantCulture, $"round {od} x {walls[i % walls.Length]} mm");
         }
     }
 }

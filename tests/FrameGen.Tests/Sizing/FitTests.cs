@@ -29,6 +29,20 @@ public sealed class FitTests
     }
 
     [Fact]
+    public void What_that_costs_is_said()
+    {
+        // Half of 30 mm can't be more than half of 20: with wrap, the chord would be 20 x 2 in place of 30 x 2.
+        double floor = Steel.E * Round(30, 2).Iy * 0.999;
+        SizedFrame sized = Tee(false, [20, 25, 30, 35], [20, 25, 30, 35]).MemberStiffness("struts", floor, null).Size(out DiagnosticList diagnostics);
+        FitCost cost = Assert.IsType<FitCost>(sized.Fits);
+        Assert.Equal((Round(30, 2).Area - Round(20, 2).Area) * 1000 * 7850e-9, cost.LighterKg, 9);
+        FitRule rule = Assert.Single(cost.Rules);
+        Assert.Equal("struts can't be wider than chords, 20 mm (round 30 x 2 mm at joint n)", rule.Text);
+        Assert.Contains("refused only because struts can't be wider than chords, 20 mm", Assert.Single(diagnostics).Message, StringComparison.Ordinal);
+        Assert.Null(Tee(true, [20, 25, 30, 35], [20, 25, 30, 35]).MemberStiffness("struts", floor, null).Size().Fits);
+    }
+
+    [Fact]
     public void Unless_it_may_wrap()
     {
         double floor = Steel.E * Round(30, 2).Iy * 0.999;

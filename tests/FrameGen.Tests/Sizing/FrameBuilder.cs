@@ -59,6 +59,14 @@ internal sealed class FrameBuilder
             true,
             Place));
 
+    /// <summary>Larger sizes that a group's range of one kind keeps out.</summary>
+    public FrameBuilder Beyond(string group, string key, double end, params RoundTube[] sizes)
+    {
+        int g = GroupIndex(group);
+        _groups[g] = _groups[g] with { Beyond = [.. sizes.Select(s => new BeyondRange(new Candidate(s, "list", 6000, null), key, s.OuterSize, s.OuterSize - end))] };
+        return this;
+    }
+
     public FrameBuilder Tube(
         string name, string from, string to, string group, Vector3? fromOffset = null, Vector3? toOffset = null, bool wrap = false)
     {

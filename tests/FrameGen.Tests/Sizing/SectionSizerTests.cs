@@ -133,8 +133,45 @@ public sealed class SectionSizerTests
         string message = Assert.Single(diagnostics).Message;
         Assert.StartsWith("stiffness a1 along z: out of reach; the best of all sizes is", message, StringComparison.Ordinal);
         Assert.Contains("20 % below the limit", message, StringComparison.Ordinal);
+        Assert.Contains("could be met, and all other targets with it", message, StringComparison.Ordinal);
         Assert.Contains("in the way stand one: od at its largest 40 mm, wall at stock's largest 3 mm:", message, StringComparison.Ordinal);
         Assert.DoesNotContain("two:", message, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData(52.34, 62.5, "52.3 N/mm")]
+    [InlineData(4.213, 3, "4.22 N/mm")]
+    [InlineData(1234.5, 1000, "1240 N/mm")]
+    [InlineData(0.05, 0.06, "0.05 N/mm")]
+    public void The_limit_that_could_be_met_is_rounded_to_the_side_that_can(double value, double limit, string words) =>
+        Assert.Equal(words, UnmetReport.Reachable(new TargetResult(0, "stiffness", "top", value, limit, "N/mm", 2, "")));
+
+    [Fact]
+    public void The_smallest_wider_range_that_would_do_is_named()
+    {
+        // 40 x 3 is the stiffest within the range; 42, 45 and 50 mm are on the list. The limit lies between 42 and 45.
+        SizedFrame sized = Short(0.5 * (Round(42, 3).Iy + Round(45, 3).Iy), Round(42, 3), Round(45, 3), Round(50, 3)).Size(out DiagnosticList diagnostics);
+        Assert.Equal(SizingStatus.Unmet, sized.Status);
+        string note = Assert.Single(diagnostics, d => d.Severity == Severity.Note).Message;
+        Assert.StartsWith("a wider range of one group would do: od of one up to 45 mm (then round 45 x 3 mm; ", note, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void That_no_wider_range_would_do_is_said_too()
+    {
+        _ = Short(2 * Round(50, 3).Iy, Round(42, 3), Round(50, 3)).Size(out DiagnosticList diagnostics);
+        string note = Assert.Single(diagnostics, d => d.Severity == Severity.Note).Message;
+        Assert.StartsWith("no wider range of od, height, width or wall would do", note, StringComparison.Ordinal);
+    }
+
+    // A cantilever of up to 40 mm with larger sizes on its list, to be as stiff as a second moment of area.
+    private static FrameBuilder Short(double inertia, params RoundTube[] beyond)
+    {
+        FrameBuilder builder = new FrameBuilder().Node("a", 0, 0, 0).Node("a1", 1000, 0, 0)
+            .Choose("one", Round(30, 1.5), Round(40, 2), Round(40, 3))
+            .Beyond("one", "od", 40, beyond)
+            .Tube("first", "a", "a1", "one").Clamp("a");
+        return builder.Case("push", default, builder.Force("a1", 0, 0, -100)).Stiffness("a1", Vector3.UnitZ, 3 * Steel.E * inertia / 1e9);
     }
 
     [Fact]
@@ -178,7 +215,7 @@ public sealed class SectionSizerTests
     public void More_designs_than_can_be_looked_at_one_by_one_are_proven_all_the_same()
     {
         RoundTube[] many = [.. Enumerable.Range(0, 600).Select(i => Round(20 + (0.1 * i), 2))];
-        SizedFrame sized = TwoCantilevers(many).Displacement("push", "a1", null, 1).Size();
+        SizedFrame sized = TwoCantilevers(many).Stiffness("a1", Vector3.UnitZ, 100).Size();
         Assert.Equal(SizingStatus.ProvenLightest, sized.Status);
         int chosen = Array.FindIndex(many, s => s.Equals(sized.Sections[0]));
         Assert.True(Deflection(many[chosen]) <= 1 && Deflection(many[chosen - 1]) > 0.995);

@@ -16,8 +16,10 @@ internal sealed class CandidateList(StockTable stock, SpecValues values)
     /// <param name="choose">What the spec lets it choose from.</param>
     /// <param name="material">The group's material; null where that was an error.</param>
     /// <param name="whose"><c>group rails</c>.</param>
-    public IReadOnlyList<Candidate>? Of(ChooseSpec choose, Material? material, string whose)
+    /// <param name="beyond">Sizes that one range alone keeps out, in the same order.</param>
+    public IReadOnlyList<Candidate>? Of(ChooseSpec choose, Material? material, string whose, out IReadOnlyList<BeyondRange> beyond)
     {
+        beyond = [];
         bool isSound = true;
         SizeLimits? limits = SizeLimits.Of(choose, whose, values);
         var lists = new List<StockList>();
@@ -47,6 +49,11 @@ internal sealed class CandidateList(StockTable stock, SpecValues values)
         }
 
         // One material a group: by area is by mass per metre.
+        beyond =
+        [
+            .. offered.OrderBy(c => c.Section.Area).ThenBy(c => c.Section.Name, StringComparer.Ordinal)
+                .Select(c => limits.OnlyMiss(c.Section) is { } miss ? new BeyondRange(c, miss.Key, miss.Size, miss.By) : null).OfType<BeyondRange>(),
+        ];
         return [.. within.OrderBy(c => c.Section.Area).ThenBy(c => c.Section.Name, StringComparer.Ordinal)];
     }
 

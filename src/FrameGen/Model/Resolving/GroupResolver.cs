@@ -26,16 +26,17 @@ internal static class GroupResolver
         }
 
         Material? material = materials.Find(spec.Material, whose);
+        IReadOnlyList<BeyondRange> beyond = [];
         IReadOnlyList<Candidate>? candidates = spec.Choose is null
             ? material is null ? null : [stock.Buy(spec.Section!.Value, material)]
-            : lister.Of(spec.Choose, material, whose);
+            : lister.Of(spec.Choose, material, whose, out beyond);
         if (material is null || candidates is null)
         {
             return null;
         }
 
         WarnOfThickWalls(spec, material, candidates, diagnostics);
-        return new TubeGroup(spec.Name.Value, material, candidates, spec.Choose is null, spec.Choose, spec.Welded, spec.Name.At);
+        return new TubeGroup(spec.Name.Value, material, candidates, spec.Choose is null, spec.Choose, spec.Welded, spec.Name.At) { Beyond = beyond };
     }
 
     private static void WarnOfThickWalls(

@@ -42,6 +42,25 @@ internal sealed class SizeLimits
         return miss;
     }
 
+    /// <summary>The one range that a section misses; null where it misses none, or several.</summary>
+    public (string Key, double Size, double By)? OnlyMiss(Section section)
+    {
+        (string Key, double Size, double By)? only = null;
+        foreach (Limit limit in _limits)
+        {
+            double size = limit.Of(section);
+            double by = size > limit.Max + Lengths.Same ? size - limit.Max : size < limit.Min - Lengths.Same ? size - limit.Min : 0;
+            if (by != 0 && only is not null)
+            {
+                return null;
+            }
+
+            only = by != 0 ? (limit.Key, size, by) : only;
+        }
+
+        return only;
+    }
+
     private bool Take(string key, RangeSpec? range, Func<Section, double> size, string whose, SpecValues values)
     {
         if (range is null)

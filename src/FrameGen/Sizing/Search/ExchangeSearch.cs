@@ -1,5 +1,6 @@
 using FrameGen.Diagnostics;
 using FrameGen.Sizing.Analysis;
+using FrameGen.Sizing.Program;
 using FrameGen.Sizing.Targets;
 
 namespace FrameGen.Sizing.Search;
@@ -8,8 +9,17 @@ namespace FrameGen.Sizing.Search;
 /// A good design where the proof is out of reach: up from a light one until the targets are met, then down by exchanges of one group and of two, each looked at exactly, until none
 /// helps. Rows known to hold for every design that meets the targets spare most looks.
 /// </summary>
-internal sealed class ExchangeSearch(DesignSpace space, DesignAnalysis analysis, IReadOnlyList<TargetCheck> checks, SizingProgram rows)
+/// <param name="space">The designs.</param>
+/// <param name="analysis">Turned to design after design.</param>
+/// <param name="checks">The targets.</param>
+/// <param name="rows">Rows of every design that meets the targets; those of designs looked at here are added.</param>
+/// <param name="cuts">Makes them; null where the frame is not looked at.</param>
+internal sealed class ExchangeSearch(
+    DesignSpace space, DesignAnalysis analysis, IReadOnlyList<TargetCheck> checks, SizingProgram rows, TargetCuts? cuts)
 {
+    // More rows than this cost more than the looks they spare.
+    private const int MostRows = 600;
+
     // Sizes looked at beyond the one a group has, by mass.
     private const int Reach = 4;
 
@@ -17,6 +27,9 @@ internal sealed class ExchangeSearch(DesignSpace space, DesignAnalysis analysis,
     private int _left;
     private int[] _leastBad = [];
     private double _least = double.PositiveInfinity;
+
+    /// <summary>True to choose as if every joint could be made.</summary>
+    public bool IgnoresFits { get; init; }
 
     /// <summary>Designs analysed.</summary>
     public int Analyses { get; private set; }
@@ -52,18 +65,84 @@ internal sealed class ExchangeSearch(DesignSpace space, DesignAnalysis analysis,
         string sure = proven ? "no design meets all targets (proven)" : "no design was found that meets all targets";
         foreach (TargetCheck check in checks)
         {
+            analysis.Set(_leastBad);
             TargetResult result = check.Result(analysis);
-            if (!result.Met)
+            if (result.Met)
             {
-                diagnostics.Warning(check.Target.At, $"{sure}; the least bad found misses {result.Kind} {result.Label}: {UnmetReport.Amount(result)}; widen the groups' ranges, change the layout, or the target");
+                continue;
             }
+
+            // With the limits eased to what the least bad design has, it would do.
+            string eased = $"{sure}; the least bad found misses {result.Kind} {result.Label}: {UnmetReport.Amount(result)}; {UnmetReport.Reachable(result)} could be met";
+            TurnToBest(check);
+            TargetResult best = check.Result(analysis);
+            diagnostics.Warning(
+                check.Target.At,
+                best.Met
+                    ? $"{eased}; alone it can be met"
+                    : $"{eased}; the best found for it alone is {Wording.Quantity(best.Value, best.Unit)}; {UnmetReport.Limits(check, analysis)}");
+        }
+
+        analysis.Set(_leastBad);
+    }
+
+    // The best design for one target alone that a sweep over the groups comes to, from the heaviest that can be made.
+    private void TurnToBest(TargetCheck check)
+    {
+        int[] design = [.. _leastBad];
+        int[] heaviest = [.. Enumerable.Range(0, space.Groups).Select(g => space[g].Length - 1)];
+        double least = Of(design);
+        double atTop = IsBuildable(heaviest) ? Of(heaviest) : double.PositiveInfinity;
+        (design, least) = atTop < least ? (heaviest, atTop) : (design, least);
+        for (int g = 0; g < design.Length; g++)
+        {
+            int best = design[g];
+            for (int c = space[g].Length - 1; c >= 0; c--)
+            {
+                design[g] = c;
+                double ratio = c != best && IsBuildable(design) ? Of(design) : double.PositiveInfinity;
+                (best, least) = ratio < least ? (c, ratio) : (best, least);
+            }
+
+            design[g] = best;
+        }
+
+        analysis.Set(design);
+
+        double Of(int[] tried)
+        {
+            Count(tried);
+            return check.Ratio(analysis);
         }
     }
 
-    // The step of one group that makes the worst target least bad for its mass, again and again.
+    // Along the rows of the design itself, analysed afresh after each way up; where they lead nowhere, step by step.
     private bool Climb(int[] design)
     {
-        double worst = Worst(design);
+        while (_left > 0)
+        {
+            double worst = Worst(design);
+            if (worst <= 1)
+            {
+                return true;
+            }
+
+            List<ProgramRow> own = [.. _checks.Where(c => c.Ratio(analysis) > 1).SelectMany(OwnRows)];
+            own.ForEach(rows.AddTargetRow);
+            if (!double.IsFinite(worst) || !RowClimb.Run(space, rows.Program, own, design, IsBuildable))
+            {
+                return ClimbStepwise(design, worst);
+            }
+        }
+
+        return false;
+    }
+
+    private IEnumerable<ProgramRow> OwnRows(TargetCheck check) => cuts is null || !check.NeedsFrame ? [] : cuts.From(analysis, check, 1);
+
+    // The step of one group that makes the worst target least bad for its mass, again and again.
+    private bool ClimbStepwise(int[] design, double worst)
+    {
         while (!(worst <= 1) && _left > 0)
         {
             (double gain, double ratio, int group, int option) = (double.NegativeInfinity, worst, -1, -1);
@@ -181,9 +260,27 @@ internal sealed class ExchangeSearch(DesignSpace space, DesignAnalysis analysis,
             tried[group] = option;
         }
 
-        if (_left <= 0 || !rows.Allows(tried) || !IsBuildable(tried) || !Meets(tried))
+        if (_left <= 0 || !rows.Allows(tried) || !IsBuildable(tried))
         {
             return false;
+        }
+
+        Count(tried);
+        foreach (TargetCheck check in _checks)
+        {
+            if (!check.IsMet(analysis))
+            {
+                // What refuses this one is likely to refuse its neighbours.
+                if (rows.Program.Rows.Count < MostRows)
+                {
+                    foreach (ProgramRow row in OwnRows(check))
+                    {
+                        rows.AddTargetRow(row);
+                    }
+                }
+
+                return false;
+            }
         }
 
         tried.CopyTo(design, 0);
@@ -193,13 +290,7 @@ internal sealed class ExchangeSearch(DesignSpace space, DesignAnalysis analysis,
     private bool IsBuildable(int[] design)
     {
         analysis.Set(design);
-        return space.IsAllowed(design) && analysis.Joints.Fits(design, analysis.Sections);
-    }
-
-    private bool Meets(int[] design)
-    {
-        Count(design);
-        return _checks.All(c => c.IsMet(analysis));
+        return space.IsAllowed(design) && (IgnoresFits || analysis.Joints.Fits(design, analysis.Sections));
     }
 
     private double Worst(int[] design)

@@ -11,8 +11,10 @@ namespace FrameGen.Sizing.Search;
 /// </summary>
 internal sealed class LightestSearch
 {
-    private const long MostParts = 20_000;
     private const long MostPartsForTies = 20_000;
+
+    // With fewer designs than this the first few choices settle it.
+    private const long Many = SectionSizer.MostDesigns;
 
     // Rows of targets that are near their limit are worth having too.
     private const double Near = 0.8;
@@ -41,6 +43,18 @@ internal sealed class LightestSearch
 
     private ChoiceProgram Program => Rows.Program;
 
+    /// <summary>True to choose as if every joint could be made.</summary>
+    public bool IgnoresFits { get; init; }
+
+    /// <summary>True once a design came up that some joint refused.</summary>
+    public bool FitsRefused { get; private set; }
+
+    /// <summary>Costs above this are of no interest, units.</summary>
+    public long Cutoff
+    {
+        init => _tree.Cutoff = value;
+    }
+
     /// <summary>Designs analysed.</summary>
     public int Analyses { get; private set; }
 
@@ -53,7 +67,7 @@ internal sealed class LightestSearch
     /// <summary>Whether any design can be made.</summary>
     public bool Fits()
     {
-        _ = Run(1);
+        _ = Run(new SearchBudget { Analyses = 1 });
         return SomeFit;
     }
 
@@ -63,57 +77,114 @@ internal sealed class LightestSearch
     /// <summary>No design that meets the targets costs less, units; the largest value where there is none.</summary>
     public long Bound { get; private set; }
 
+    /// <summary>The lightest design met with that meets all targets; null for none.</summary>
+    public int[]? Best { get; private set; }
+
+    /// <summary>Makes rows, for whoever goes on.</summary>
+    public TargetCuts? Cuts => _cuts;
+
     /// <summary>Searches until the answer is proven or so many designs are analysed.</summary>
     /// <returns>The answer, proven; null where there is none or the budget is spent: <see cref="Bound"/> tells.</returns>
-    public int[]? Run(int budget)
+    public int[]? Run(SearchBudget budget)
     {
-        int[]? best = null;
+        if (_cuts is not null && _space.Count > Many)
+        {
+            Prepare(budget.Analyses);
+        }
+
         while (true)
         {
-            long left = best is null ? MostParts - _tree.Parts : MostPartsForTies;
-            if (_tree.Next(left) is not { } found)
+            bool isProven = Best is { } best && _tree.Bound >= _space.UnitsOf(best);
+            if (_tree.Next(isProven ? MostPartsForTies : budget.Parts - _tree.Parts) is not { } found)
             {
-                Bound = best is null ? _tree.Bound : _space.UnitsOf(best);
-                return best;
+                return Settle();
             }
 
             int[] choice = found[.._space.Groups];
-            if (best is not null && _space.CompareTies(choice, best) >= 0)
+            if (Best is not null && Compare(choice, Best) >= 0)
             {
                 _tree.Exclude();
                 continue;
             }
 
             _analysis.Set(choice);
-            if (!_fits.Look(choice, _analysis.Sections))
+            if (!IgnoresFits && !_fits.Look(choice, _analysis.Sections))
             {
+                FitsRefused = true;
                 continue;
             }
 
             SomeFit = true;
             Last = choice;
-            if (best is null && Analyses >= budget)
+            if (Analyses >= budget.Analyses)
             {
-                Bound = _tree.Bound;
-                return null;
+                return Settle();
             }
 
             Analyses++;
-            if (MeetsOrCuts(found))
+            (bool met, bool cut) = Look(found, all: false);
+            if (met)
             {
-                best = choice;
+                Best = choice;
                 _tree.Cutoff = Program.CostOf(found);
+            }
+
+            if (met || !cut)
+            {
                 _tree.Exclude();
             }
         }
     }
 
+    private int[]? Settle()
+    {
+        long bound = _tree.Bound;
+        if (Best is { } best && bound >= _space.UnitsOf(best))
+        {
+            Bound = _space.UnitsOf(best);
+            return best;
+        }
+
+        Bound = bound;
+        return null;
+    }
+
+    private int Compare(int[] a, int[] b)
+    {
+        int order = _space.UnitsOf(a).CompareTo(_space.UnitsOf(b));
+        return order != 0 ? order : _space.CompareTies(a, b);
+    }
+
+    // Rows that make the first bound a good one, and a good design to cut off with: what costs more needs no looking at.
+    private void Prepare(int budget)
+    {
+        var roots = new RootRows(_space, _analysis, Rows, IgnoresFits ? null : _fits, design =>
+        {
+            Analyses++;
+            _ = Look(Rows.Whole(design), all: true);
+        });
+        if (roots.Run() is not { } start)
+        {
+            return;
+        }
+
+        (SomeFit, Last) = (true, start);
+        var exchange = new ExchangeSearch(_space, _analysis, _checks, Rows, _cuts) { IgnoresFits = IgnoresFits };
+        Best = exchange.Run(start, budget / 4);
+        Analyses += exchange.Analyses;
+        FitsRefused |= roots.FitsRefused;
+        if (Best is not null)
+        {
+            _tree.Cutoff = Math.Min(_tree.Cutoff, _space.UnitsOf(Best));
+        }
+    }
+
     // Dear targets are asked only where no cheap one fails.
-    private bool MeetsOrCuts(int[] found)
+    private (bool Met, bool Cut) Look(int[] found, bool all)
     {
         bool met = true;
         bool cut = false;
-        for (int t = 0; t < _checks.Count && (met || t < _cheap); t++)
+        for (int t = 0; t < _checks.Count && (all || met || t < _cheap); t++)
         {
             double ratio = _checks[t].Ratio(_analysis);
             met &= ratio <= 1;
@@ -121,17 +192,12 @@ internal sealed class LightestSearch
             {
                 foreach (ProgramRow row in _cuts!.From(_analysis, _checks[t], Near))
                 {
-                    Program.Add(row);
+                    Rows.AddTargetRow(row);
                     cut |= !row.Keeps(Program, found);
                 }
             }
         }
 
-        if (!met && !cut)
-        {
-            _tree.Exclude();
-        }
-
-        return met;
+        return (met, cut);
     }
 }

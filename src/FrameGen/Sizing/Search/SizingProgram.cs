@@ -13,6 +13,7 @@ internal sealed class SizingProgram
     private const int Bought = 1;
 
     private readonly DesignSpace _space;
+    private readonly List<ProgramRow> _targetRows = [];
     private readonly int[][] _sizeOf = [];
     private readonly int _sizes;
 
@@ -54,6 +55,16 @@ internal sealed class SizingProgram
 
     public ChoiceProgram Program { get; }
 
+    /// <summary>Rows that follow from the targets alone: they hold whatever joints allow.</summary>
+    public IReadOnlyList<ProgramRow> TargetRows => _targetRows;
+
+    /// <summary>Adds a row that every design satisfies which meets the targets.</summary>
+    public void AddTargetRow(ProgramRow row)
+    {
+        _targetRows.Add(row);
+        Program.Add(row);
+    }
+
     /// <summary>Whether a design keeps all rows so far.</summary>
     public bool Allows(ReadOnlySpan<int> choice)
     {
@@ -71,6 +82,19 @@ internal sealed class SizingProgram
         }
 
         return Program.Keeps(whole);
+    }
+
+    /// <summary>A design as a choice of the program: sizes that groups have are bought.</summary>
+    public int[] Whole(ReadOnlySpan<int> choice)
+    {
+        var whole = new int[_space.Groups + _sizes];
+        choice.CopyTo(whole);
+        for (int g = 0; g < choice.Length && _sizes > 0; g++)
+        {
+            whole[_space.Groups + _sizeOf[g][choice[g]]] = Bought;
+        }
+
+        return whole;
     }
 
     private static (int[][] SizeOf, int Count) Sizes(DesignSpace space)
