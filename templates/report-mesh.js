@@ -28,8 +28,9 @@ function readFrame(scene) {
     mesh.local.set(tube.points, 3 * point);
     for (let i = 0; i < tube.count; i++) {
       const [n0, n1, n2] = [tube.normals[3 * i], tube.normals[3 * i + 1], tube.normals[3 * i + 2]];
+      const axis = axisAt(tube, tube.points[3 * i]);
       for (let k = 0; k < 3; k++) {
-        mesh.normals[3 * (point + i) + k] = n0 * tube.x[k] + n1 * tube.z[k] - n2 * tube.y[k];
+        mesh.normals[3 * (point + i) + k] = n0 * axis.x[k] + n1 * axis.z[k] - n2 * axis.y[k];
       }
       mesh.owner[point + i] = index;
       mesh.inside[point + i] = tube.insides[i];
@@ -52,7 +53,8 @@ function readTube(tube) {
   }
   const motions = (tube.motions || []).map(text => new Float32Array(bytesOf(text).buffer));
   const made = Object.assign({ points: [], normals: [], insides: [], triangles: [], edges: [] }, tube, { motions });
-  const rings = Math.min(24, Math.max(1, (tube.places || [0, 1]).length - 1));
+  const even = Math.min(24, Math.max(1, (tube.places || [0, 1]).length - 1));
+  const rings = Math.min(240, Math.max(even, ...tube.pieces.map(p => p.radius > 0 ? Math.ceil(tube.length / (0.1 * p.radius)) : 1)));
   const isHollow = columns.some(c => Math.hypot(c.inner[0], c.inner[1]) > 1e-3);
   addSkin(made, columns.map(c => c.outer), rings, 1);
   if (isHollow) {
@@ -123,6 +125,33 @@ const minus = (a, b) => [a[0] - b[0], a[1] - b[1], a[2] - b[2]];
 const dot = (a, b) => a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
 const cross = (a, b) => [a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]];
 
+// The axis of a tube at a place: the point and the local axes, carried round the bends with the tube.
+function axisAt(tube, along) {
+  let piece = tube.pieces[0];
+  for (const next of tube.pieces) {
+    if (next.start <= along) { piece = next; }
+  }
+  const on = along - piece.start;
+  if (!(piece.radius > 0)) {
+    return { at: piece.at.map((n, k) => n + on * piece.x[k]), x: piece.x, y: piece.y, z: piece.z };
+  }
+  const [sin, cos] = [Math.sin(on / piece.radius), Math.cos(on / piece.radius)];
+  const turned = v => {
+    const [side, share] = [cross(piece.about, v), dot(piece.about, v)];
+    return v.map((n, k) => cos * n + sin * side[k] + (1 - cos) * share * piece.about[k]);
+  };
+  const inwards = cross(piece.about, piece.x);
+  const at = piece.at.map((n, k) => n + piece.radius * (sin * piece.x[k] + (1 - cos) * inwards[k]));
+  return { at, x: turned(piece.x), y: turned(piece.y), z: turned(piece.z) };
+}
+
+// The axis of a tube as lines, two points each.
+function axisLines(tube) {
+  const steps = tube.pieces.length > 1 ? 48 : 1;
+  const points = Array.from({ length: steps + 1 }, (_, i) => axisAt(tube, tube.length * i / steps).at);
+  return points.slice(1).flatMap((point, i) => [...points[i], ...point]);
+}
+
 // How a place on a tube's axis moves in a case: six values; beyond its ends it moves with them as a rigid body.
 function motionAt(tube, index, along) {
   const m = tube.motions[index];
@@ -144,7 +173,7 @@ function motionAt(tube, index, along) {
   }
   const beyond = along - at;
   if (beyond !== 0) {
-    const swing = cross(motion.slice(3), tube.x.map(n => n * beyond));
+    const swing = cross(motion.slice(3), axisAt(tube, at).x.map(n => n * beyond));
     for (let k = 0; k < 3; k++) { motion[k] += swing[k]; }
   }
   return motion;
@@ -156,15 +185,16 @@ function placeFrame(mesh, caseIndex, scale, shifts) {
     const known = new Map();
     for (let i = tube.first; i < tube.first + tube.count; i++) {
       const [s, a, b] = [mesh.local[3 * i], mesh.local[3 * i + 1], mesh.local[3 * i + 2]];
-      let motion = known.get(s);
-      if (!motion) {
-        motion = motionAt(tube, caseIndex, s);
-        known.set(s, motion);
+      let place = known.get(s);
+      if (!place) {
+        place = { axis: axisAt(tube, s), motion: motionAt(tube, caseIndex, s) };
+        known.set(s, place);
       }
-      const arm = [0, 1, 2].map(k => a * tube.z[k] - b * tube.y[k]);
+      const { axis, motion } = place;
+      const arm = [0, 1, 2].map(k => a * axis.z[k] - b * axis.y[k]);
       const turned = cross(motion.slice(3), arm);
       for (let k = 0; k < 3; k++) {
-        mesh.positions[3 * i + k] = tube.at[k] + s * tube.x[k] + arm[k] + scale * (motion[k] + turned[k]);
+        mesh.positions[3 * i + k] = axis.at[k] + arm[k] + scale * (motion[k] + turned[k]);
       }
       shifts[i] = Math.hypot(motion[0], motion[1], motion[2]);
     }

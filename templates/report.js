@@ -183,7 +183,7 @@
     byId("scale").setAttribute("aria-valuetext", text);
     placeFrame(mesh, caseIndex(), times, shifts);
     view.setPlaces();
-    const ghost = times === 0 ? [] : mesh.tubes.flatMap(t => [...t.at, ...t.at.map((n, k) => n + t.length * t.x[k])]);
+    const ghost = times === 0 ? [] : mesh.tubes.flatMap(axisLines);
     view.setGhost(new Float32Array(ghost));
     paint();
     explain();

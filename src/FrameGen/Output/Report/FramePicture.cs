@@ -43,56 +43,80 @@ public sealed record FramePicture(string Width, string Height, IReadOnlyList<Pic
     }
 
     private static IEnumerable<Vector3> EndsOf(Tube tube, CutTube part) =>
-        [tube.From.Point + (part.Start * tube.Axes.X), tube.From.Point + (part.Stop * tube.Axes.X)];
+        [tube.PointAt(part.Start), tube.PointAt(part.Stop), .. (tube.Bent?.Pieces ?? []).Select(p => p.PointAt(p.Length / 2))];
+
+    // Places along the axis between which a tube is drawn straight: in bends no more than a few degrees apart.
+    private static List<double> Stops(Tube tube, int pieces)
+    {
+        const double Chord = Math.PI / 24;
+        List<double> stops = [0];
+        if (tube.Bent is null)
+        {
+            stops.AddRange(Enumerable.Range(1, pieces).Select(i => i * tube.Length / pieces));
+            return stops;
+        }
+
+        foreach (PathPiece piece in tube.Bent.Pieces.Where(p => p.Length > 0))
+        {
+            int chords = piece.IsArc ? (int)Math.Ceiling(piece.Length / piece.Radius / Chord) : 1;
+            stops.AddRange(Enumerable.Range(1, chords).Select(i => piece.Start + (i * piece.Length / chords)));
+        }
+
+        return stops;
+    }
 
     private static void Draw(CutFrame cut, CutTube part, Camera camera, int pieces, List<(double Depth, PictureShape Shape)> shapes)
     {
         const double Edge = 1e-3;
         Tube tube = cut.Sized.Model.Tubes[part.Tube];
         Outline outer = cut.Sized.SectionOf(part.Tube).Outline;
-        Vector3 side = camera.Towards.Cross(tube.Axes.X);
-        if (side.Length > Edge)
+        List<double> stops = Stops(tube, pieces);
+        for (int i = 1; i < stops.Count; i++)
         {
-            side = side.Normalized();
-            Point2 across = tube.Axes.InSection(side);
+            TubeAxes axes = tube.AxesAt((stops[i - 1] + stops[i]) / 2);
+            Vector3 side = camera.Towards.Cross(axes.X);
+            if (side.Length <= Edge)
+            {
+                continue;
+            }
+
+            Point2 across = axes.InSection(side.Normalized());
             Point2 left = outer.FarthestAlong(across);
             Point2 right = outer.FarthestAlong(-1 * across);
-            (double leftFrom, double leftTo) = SkinAt(left);
-            (double rightFrom, double rightTo) = SkinAt(right);
-            for (int i = 0; i < pieces; i++)
-            {
-                (double near, double far) = ((double)i / pieces, (i + 1.0) / pieces);
-                Vector3 a = Place(left, leftFrom + (near * (leftTo - leftFrom)));
-                Vector3 b = Place(left, leftFrom + (far * (leftTo - leftFrom)));
-                Vector3 c = Place(right, rightFrom + (far * (rightTo - rightFrom)));
-                Vector3 d = Place(right, rightFrom + (near * (rightTo - rightFrom)));
-                shapes.Add((
-                    camera.Depth((a + b + c + d) / 4),
-                    new PictureShape(
-                        $"M{camera.Text(a)}L{camera.Text(b)} {camera.Text(c)} {camera.Text(d)}Z",
-                        $"M{camera.Text(a)}L{camera.Text(b)}M{camera.Text(c)}L{camera.Text(d)}")));
-            }
+            (Vector3 a, Vector3 b) = Edges(left, i);
+            (Vector3 d, Vector3 c) = Edges(right, i);
+            shapes.Add((
+                camera.Depth((a + b + c + d) / 4),
+                new PictureShape(
+                    $"M{camera.Text(a)}L{camera.Text(b)} {camera.Text(c)} {camera.Text(d)}Z",
+                    $"M{camera.Text(a)}L{camera.Text(b)}M{camera.Text(c)}L{camera.Text(d)}")));
         }
 
         foreach (bool isFrom in (bool[])[true, false])
         {
             // Seen from its face an end lies before its tube, from behind it lies under it.
             EndCut end = isFrom ? part.From : part.To;
-            double facing = (isFrom ? -1 : 1) * camera.Towards.Dot(tube.Axes.X);
+            double facing = -camera.Towards.Dot(tube.Into(isFrom ? End.From : End.To));
             Vector3[] rim = [.. Enumerable.Range(0, Rim).Select(i => OnSkin(end, isFrom, -Math.PI + (i * 2 * Math.PI / Rim)))];
             Vector3 middle = rim.Aggregate(Vector3.Zero, (sum, p) => sum + p) / Rim;
             string path = $"M{camera.Text(rim[0])}L{string.Join(' ', rim.Skip(1).Select(camera.Text))}Z";
             shapes.Add((camera.Depth(middle) + (Math.Sign(facing) * outer.HalfHeight), new PictureShape(path, path)));
         }
 
-        (double From, double To) SkinAt(Point2 point)
+        // A line of the skin from one stop to the next; the first begins and the last ends at the cut.
+        (Vector3 From, Vector3 To) Edges(Point2 point, int stop)
         {
             double clock = Math.Atan2(point.Y, point.X);
-            return (SceneColumns.At(part.From.Outer.Points, clock).Before, tube.Length - SceneColumns.At(part.To.Outer.Points, clock).Before);
+            double first = SceneColumns.At(part.From.Outer.Points, clock).Before;
+            double last = tube.Length - SceneColumns.At(part.To.Outer.Points, clock).Before;
+            return (Place(point, stop == 1 ? first : stops[stop - 1]), Place(point, stop == stops.Count - 1 ? last : stops[stop]));
         }
 
-        Vector3 Place(Point2 point, double along) =>
-            tube.From.Point + (along * tube.Axes.X) + (point.X * tube.Axes.Z) - (point.Y * tube.Axes.Y);
+        Vector3 Place(Point2 point, double along)
+        {
+            TubeAxes axes = tube.AxesAt(along);
+            return tube.PointAt(along) + (point.X * axes.Z) - (point.Y * axes.Y);
+        }
 
         Vector3 OnSkin(EndCut end, bool isFrom, double clock)
         {
@@ -116,7 +140,7 @@ public sealed record FramePicture(string Width, string Height, IReadOnlyList<Pic
             double half = mark.Length * LetterWidth / 2;
             foreach (double share in (double[])[0.5, 0.38, 0.62, 0.27, 0.73])
             {
-                (double x, double y) = camera.Place(tube.From.Point + (share * tube.Length * tube.Axes.X));
+                (double x, double y) = camera.Place(tube.PointAt(share * tube.Length));
                 if (x >= half && x <= camera.Width - half && taken.TrueForAll(t => Math.Abs(t.Y - y) > LetterHeight || Math.Abs(t.X - x) > t.Half + half))
                 {
                     taken.Add((x, y, half));

@@ -93,10 +93,7 @@ internal sealed class SceneJson(ShopPackage package)
 
         json.WriteEndArray();
         Texts(json, "stress", _sized.Cases.Select(c => Stress(c.Tubes[index])));
-        Point(json, "at", tube.From.Point);
-        Point(json, "x", tube.Axes.X);
-        Point(json, "y", tube.Axes.Y);
-        Point(json, "z", tube.Axes.Z);
+        WriteAxis(json, tube);
         json.Number("length", Math.Round(tube.Length, 3));
         WriteColumns(json, SceneColumns.Of(package.Cut, index));
         if (_sized.Cases.Count > 0 && _sized.Cases.All(c => c.Axes.Count > index))
@@ -104,6 +101,31 @@ internal sealed class SceneJson(ShopPackage package)
             json.Numbers("places", [.. _sized.Cases[0].Axes[index].Select(p => Math.Round(p.Distance, 3))]);
             Texts(json, "motions", _sized.Cases.Select(c => Motions(c.Axes[index])));
         }
+    }
+
+    // Straights and arcs in their order, each with the point and the local axes at its start.
+    private static void WriteAxis(Utf8JsonWriter json, Tube tube)
+    {
+        json.WriteStartArray("pieces");
+        foreach (PathPiece piece in tube.Bent?.Pieces ?? [new PathPiece(0, tube.Length, tube.From.Point, tube.Axes.X, Vector3.Zero, 0)])
+        {
+            TubeAxes axes = tube.AxesAt(piece.Start);
+            json.WriteStartObject();
+            json.Number("start", Math.Round(piece.Start, 6));
+            Point(json, "at", piece.Origin);
+            Point(json, "x", axes.X);
+            Point(json, "y", axes.Y);
+            Point(json, "z", axes.Z);
+            if (piece.IsArc)
+            {
+                Point(json, "about", piece.About);
+                json.Number("radius", piece.Radius);
+            }
+
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
     }
 
     private static string Motions(IReadOnlyList<AxisPlace> places)
