@@ -98,7 +98,7 @@ public sealed class ModelResolverTests
     private static (FrameModel? Model, DiagnosticList Diagnostics) Resolve(string text)
     {
         var diagnostics = new DiagnosticList();
-        FrameSpec? spec = SpecReader.Read("cart.yaml", _ => Encoding.UTF8.GetBytes(text), diagnostics);
+        FrameSpec? spec = SpecReader.Read("cart.yaml", path => path == "cart.yaml" ? Encoding.UTF8.GetBytes(text) : null, diagnostics);
         Assert.True(spec is not null, string.Join('\n', diagnostics));
         return (ModelResolver.Resolve(spec, diagnostics), diagnostics);
     }

@@ -215,7 +215,7 @@ public sealed class StabilityTests
             var finer = RefinedFrame.Divide(model.Topology.Frame, 32);
             double converged = LinearBuckling.Lowest(
                 new FrameSolver(finer.Frame, model.Solvers[0].Restraints).Factor(profiles), finer.AxialForces(coarse))!.Factor;
-            Assert.InRange(sized.Cases[c].BucklingFactor!.Value / converged, 1 - 1e-5, 1.001);
+            Assert.InRange(sized.Cases[c].BucklingFactor!.Value / converged, 0.999, 1.001);
         }
 
         static BeamProfile Profile(Section s) => new(
