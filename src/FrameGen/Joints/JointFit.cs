@@ -55,7 +55,13 @@ public static class JointFit
                 continue;
             }
 
+            // Which mate is the seat takes long to find, and does not matter where the end is wider than none.
             ContourCope cope = new(end.Mates, tube.Middle(end.Id.End));
+            if (!end.Mates.Any(m => IsWider(m, out _, out _)) && Touching.IsSeen(cope, section.Outline))
+            {
+                continue;
+            }
+
             int seat = Touching.Seat(cope, section.Bore, section.Outline);
             if (seat < 0)
             {
@@ -65,12 +71,16 @@ public static class JointFit
             }
 
             Mate mate = end.Mates[seat];
-            (double half, double allowed) = HalfWidths(
-                end.Frame, section, mate.Axis, mate.Axes, sections[model.Tubes[mate.Tube].Group]);
-            double needed = half + mate.Axis.DistanceTo(end.Frame.Axis);
-            if (needed > allowed + Outline.Graze && !tube[end.Id.End].Wrap)
+            if (IsWider(mate, out double needed, out double allowed))
             {
                 Add(new FitProblem(FitProblemKind.WiderThanSeat, end.Id, mate.Tube, needed, allowed));
+            }
+
+            bool IsWider(Mate mate, out double needed, out double allowed)
+            {
+                (double half, allowed) = HalfWidths(end.Frame, section, mate.Axis, mate.Axes, sections[model.Tubes[mate.Tube].Group]);
+                needed = half + mate.Axis.DistanceTo(end.Frame.Axis);
+                return needed > allowed + Outline.Graze && !tube[end.Id.End].Wrap;
             }
         }
 

@@ -17,9 +17,7 @@ internal static class Touching
     {
         for (int i = 0; i < QuickLooks; i++)
         {
-            (double sin, double cos) = Math.SinCos(Math.PI * (((2.0 * i) / QuickLooks) - 1));
-            cope.Cut(sin, cos, outer.RadiusAt(sin, cos), out int piece);
-            if (ContourCope.MateOf(piece) == 0)
+            if (QuickLook(cope, outer, i) == 0)
             {
                 return 0;
             }
@@ -27,6 +25,20 @@ internal static class Touching
 
         bool[] touched = All(cope, inner, outer, new CurveSampler(), out _);
         return Array.IndexOf(touched, true);
+    }
+
+    /// <summary>True where a few wall lines already show that something touches; false proves nothing.</summary>
+    public static bool IsSeen(ContourCope cope, Outline outer)
+    {
+        for (int i = 0; i < QuickLooks; i++)
+        {
+            if (QuickLook(cope, outer, i) >= 0)
+            {
+                return true;
+            }
+        }
+
+        return false;
     }
 
     /// <summary>Which mates touch, by their place among the mates.</summary>
@@ -74,6 +86,14 @@ internal static class Touching
                 touched[ContourCope.MateOf(piece)] = true;
             }
         }
+    }
+
+    // The mate that one wall line meets; negative for none.
+    private static int QuickLook(ContourCope cope, Outline outer, int look)
+    {
+        (double sin, double cos) = Math.SinCos(Math.PI * (((2.0 * look) / QuickLooks) - 1));
+        cope.Cut(sin, cos, outer.RadiusAt(sin, cos), out int piece);
+        return ContourCope.MateOf(piece);
     }
 
     /// <summary>The mate that an end which touches nothing comes nearest to, and by how much it misses, mm.</summary>
