@@ -261,16 +261,26 @@ internal sealed class FrameLayout
     {
         Front[] fronts = Symbolic.Fronts;
         int[] frontOf = new int[NodeAt.Length];
-        var lists = new List<Placement>[fronts.Length];
+        int[] counts = new int[fronts.Length];
         for (int s = 0; s < fronts.Length; s++)
         {
-            lists[s] = [];
-            for (int column = fronts[s].First; column < fronts[s].First + fronts[s].Columns; column++)
-            {
-                frontOf[column] = s;
-                int offset = Six * (column - fronts[s].First);
-                lists[s].Add(new Placement(-1, fronts[s].OffsetOf(offset, offset), column, column));
-            }
+            Array.Fill(frontOf, s, fronts[s].First, fronts[s].Columns);
+            counts[s] = fronts[s].Columns;
+        }
+
+        foreach (int column in PairColumns)
+        {
+            counts[frontOf[column]]++;
+        }
+
+        // Counted first: lists that grow would leave as much again behind them.
+        Placement[][] placements = Array.ConvertAll(counts, count => new Placement[count]);
+        Array.Clear(counts);
+        for (int column = 0; column < frontOf.Length; column++)
+        {
+            int s = frontOf[column];
+            int offset = Six * (column - fronts[s].First);
+            placements[s][counts[s]++] = new Placement(-1, fronts[s].OffsetOf(offset, offset), column, column);
         }
 
         for (int pair = 0; pair < PairRows.Length; pair++)
@@ -278,10 +288,10 @@ internal sealed class FrameLayout
             int s = frontOf[PairColumns[pair]];
             Front front = fronts[s];
             int offset = front.OffsetOf(front.RowOf(PairRows[pair]), Six * (PairColumns[pair] - front.First));
-            lists[s].Add(new Placement(pair, offset, PairRows[pair], PairColumns[pair]));
+            placements[s][counts[s]++] = new Placement(pair, offset, PairRows[pair], PairColumns[pair]);
         }
 
-        return Array.ConvertAll(lists, list => list.ToArray());
+        return placements;
     }
 
     private int[][] Cross()

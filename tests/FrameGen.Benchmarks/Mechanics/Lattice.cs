@@ -32,6 +32,7 @@ internal static class Lattice
 
         foreach ((int da, int db, int dc) in Directions)
         {
+            TubeAxes axes = TubeAxes.Along(Cell * new Vector3(da, db, dc));
             for (int c = dc == 0 ? 1 : 0; c + dc <= nz; c++)
             {
                 for (int b = 0; b + db <= ny; b++)
@@ -39,7 +40,7 @@ internal static class Lattice
                     for (int a = 0; a + da <= nx; a++)
                     {
                         (int i, int j) = (Index(a, b, c), Index(a + da, b + db, c + dc));
-                        elements.Add(new BeamElement(i, j, Vector3.Zero, Vector3.Zero, TubeAxes.Along(nodes[j] - nodes[i]), 0));
+                        elements.Add(new BeamElement(i, j, Vector3.Zero, Vector3.Zero, axes, 0));
                     }
                 }
             }
