@@ -41,9 +41,10 @@ internal static class SelfCheck
         double kerf = package.Cut.Sized.Model.Fabrication.Kerf;
         double trim = package.Cut.Sized.Model.Fabrication.BarTrim;
         StockCut[] all = [.. package.Stock.Lots.SelectMany(l => l.Bars).SelectMany(b => b.Cuts)];
+        ILookup<Part, StockCut> cuts = all.ToLookup<StockCut, Part>(c => c.Part, ReferenceEqualityComparer.Instance);
         foreach (Part part in package.Parts)
         {
-            int cut = all.Count(c => ReferenceEquals(c.Part, part));
+            int cut = cuts[part].Count();
             Require(cut == part.Quantity, $"the stock plan has {cut} of {part.Mark} and the cut list {part.Quantity}");
         }
 
